@@ -21,6 +21,15 @@ public interface DailyTemperatureSource {
     /** How the record is cut up on disk. */
     StorageLayout layout();
 
+    /**
+     * Position of the first day that is stored in the same chunk as the given one; days of one chunk are decoded together.
+     *
+     * @param position position on the day axis
+     */
+    default int chunkStart(int position) {
+        return position - position % layout().days();
+    }
+
     /** How each file was understood, in the order of time. */
     List<SourceFile> files();
 

@@ -1,0 +1,31 @@
+package org.wintersill.climatology.statistic;
+
+import org.wintersill.climatology.ClimatologyStatistic;
+import org.wintersill.climatology.WinterRecord;
+import org.wintersill.layer.LayerDefinition;
+import org.wintersill.layer.LayerStyles;
+import org.wintersill.layer.SampleType;
+
+/** Number of winters that passed the completeness rule: the n of every other summary. */
+public final class ValidWinters implements ClimatologyStatistic {
+
+    @Override
+    public LayerDefinition layer() {
+        return new LayerDefinition("valid-winters", "Valid winters",
+                "Number of winters that passed the completeness rule; missing where none did",
+                "1", SampleType.INT16, "", LayerStyles.count());
+    }
+
+    @Override
+    public void summarise(WinterRecord record, float[] out, int from, int to) {
+        for (int cell = from; cell < to; cell++) {
+            int n = 0;
+            for (float[] winter : record.minimum()) {
+                if (winter[cell] == winter[cell]) {
+                    n++;
+                }
+            }
+            out[cell] = n == 0 ? Float.NaN : n;
+        }
+    }
+}

@@ -1,0 +1,162 @@
+package org.wintersill.elevation;
+
+import org.wintersill.grid.CoordinateOperation;
+import org.wintersill.grid.GridGeometry;
+
+/**
+ * How temperatures of the source grid become temperatures of the target grid: reduce to sea level with the lapse rate,
+ * interpolate between source cell centres, restore to the target's height (science 7.1). Definition; {@link LaneAdjuster}
+ * does the work.
+ *
+ * <p>T = I(T_src + G z_src / 1000) - G z_dem / 1000, with I bilinear. A source cell without a height counts as missing. Without
+ * heights the temperature is only interpolated; without a target grid of its own it is passed on as it is.
+ */
+public final class ElevationAdjustment {
+    private final SourcePositions positions;
+    private final float[] sourceHeights;
+    private final float[] targetHeights;
+    private final LapseRates lapseRates;
+    private final float[] heightGain;
+
+    private ElevationAdjustment(SourcePositions positions, float[] sourceHeights, float[] targetHeights, LapseRates lapseRates) {
+        this.positions = positions;
+        this.sourceHeights = sourceHeights;
+        this.targetHeights = targetHeights;
+        this.lapseRates = lapseRates;
+        heightGain = targetHeights == null ? null : heightGains();
+    }
+
+    /** The target is the source's own grid: temperatures are passed on. */
+    public static ElevationAdjustment none(GridGeometry source) {
+        return new ElevationAdjustment(new SourcePositions(source, source, CoordinateOperation.identity()), null, null,
+                LapseRates.constant(0));
+    }
+
+    /** The target is another grid, and no heights are known: temperatures are interpolated. */
+    public static ElevationAdjustment interpolation(GridGeometry source, GridGeometry target, CoordinateOperation targetToSource) {
+        return new ElevationAdjustment(new SourcePositions(source, target, targetToSource), null, null, LapseRates.constant(0));
+    }
+
+    /**
+     * The full adjustment.
+     *
+     * @param source grid of the temperatures
+     * @param sourceHeights {@code [source cell]}, metres, NaN for none
+     * @param dem target grid with its heights
+     * @param demToSource coordinates of the target grid to those of the source grid
+     * @param lapseRates K/km by month
+     */
+    public static ElevationAdjustment toHeights(GridGeometry source, float[] sourceHeights, ElevationField dem,
+                                                CoordinateOperation demToSource, LapseRates lapseRates) {
+        if (sourceHeights.length != source.cells()) {
+            throw new IllegalArgumentException(sourceHeights.length + " heights for " + source.cells() + " source cells");
+        }
+        return new ElevationAdjustment(new SourcePositions(source, dem.grid(), demToSource), sourceHeights, dem.metres(), lapseRates);
+    }
+
+    /** Interpolated source height minus target height by target cell, km; NaN where a corner or the target has no height. */
+    private float[] heightGains() {
+        GridGeometry target = positions.target();
+        float[] gains = new float[Math.toIntExact(target.cells())];
+        for (int row = 0; row < target.rows(); row++) {
+            for (int column = 0; column < target.columns(); column++) {
+                int cell = row * target.columns() + column;
+                double height = interpolate(sourceHeights, row, column);
+                gains[cell] = (float) ((height - targetHeights[cell]) / 1000);
+            }
+        }
+        return gains;
+    }
+
+    /** Plain bilinear value; NaN where any corner with a weight is NaN. */
+    private double interpolate(float[] values, int row, int column) {
+        int west = positions.west(row, column);
+        int north = positions.north(row, column);
+        if (west < 0 || north < 0) {
+            return Double.NaN;
+        }
+        int columns = positions.source().columns();
+        double total = 0;
+        for (int corner = 0; corner < 4; corner++) {
+            double weight = cornerWeight(row, column, corner);
+            if (weight > 0) {
+                total += weight * values[(north + corner / 2) * columns + west + corner % 2];
+            }
+        }
+        return total;
+    }
+
+    /** Weight of a corner: 0 north-west, 1 north-east, 2 south-west, 3 south-east. */
+    double cornerWeight(int row, int column, int corner) {
+        double east = positions.eastWeight(row, column);
+        double south = positions.southWeight(row, column);
+        return (corner % 2 == 0 ? 1 - east : east) * (corner / 2 == 0 ? 1 - south : south);
+    }
+
+    public SourcePositions positions() {
+        return positions;
+    }
+
+    public LapseRates lapseRates() {
+        return lapseRates;
+    }
+
+    public boolean hasHeights() {
+        return targetHeights != null;
+    }
+
+    /** Whether the target grid is the source grid and nothing is changed. */
+    public boolean isPassThrough() {
+        return targetHeights == null && positions.isSeparable() && positions.source().equals(positions.target());
+    }
+
+    /** Height of a target cell, m; NaN where there is none or no heights are used. */
+    public float targetHeight(int cell) {
+        return targetHeights == null ? Float.NaN : targetHeights[cell];
+    }
+
+    /** Heights of all target cells, shared; null where no heights are used. */
+    float[] targetHeights() {
+        return targetHeights;
+    }
+
+    float[] sourceHeights() {
+        return sourceHeights;
+    }
+
+    float[] heightGain() {
+        return heightGain;
+    }
+
+    /** Whether a target cell can ever have a value: inside the source's cells, and with a height where heights are used. */
+    public boolean covers(int row, int column) {
+        return positions.containing(row, column) >= 0
+                && (targetHeights == null || !Float.isNaN(targetHeights[row * positions.target().columns() + column]));
+    }
+
+    /**
+     * Height of the target minus the height that the interpolated source temperature stands for, m: what the adjustment
+     * bridges. Source corners without height are left out; NaN where the cell can have no value.
+     */
+    public float heightChange(int row, int column) {
+        if (targetHeights == null || !covers(row, column)
+                || Float.isNaN(sourceHeights[positions.containing(row, column)])) {
+            return Float.NaN;
+        }
+        int columns = positions.source().columns();
+        double total = 0;
+        double weights = 0;
+        for (int corner = 0; corner < 4; corner++) {
+            double weight = cornerWeight(row, column, corner);
+            if (weight > 0) {
+                float height = sourceHeights[(positions.north(row, column) + corner / 2) * columns
+                        + positions.west(row, column) + corner % 2];
+                if (!Float.isNaN(height)) {
+                    total += weight * height;
+                    weights += weight;
+                }
+            }
+        }
+        return (float) (targetHeights[row * positions.target().columns() + column] - total / weights);
+    }
+}

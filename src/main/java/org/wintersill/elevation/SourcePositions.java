@@ -1,0 +1,154 @@
+package org.wintersill.elevation;
+
+import org.wintersill.grid.CoordinateOperation;
+import org.wintersill.grid.GridGeometry;
+
+/**
+ * Where each target cell lies in the source grid, for bilinear interpolation between source cell centres (science 16.9).
+ *
+ * <p>A position is the row and column of the north-western of four neighbouring centres, and the weights of the southern and
+ * eastern ones. Outside the hull of the centres but inside the source's cells the border row or column is kept: its weight is
+ * then 0. Beyond the source's cells there is no position.
+ *
+ * <p>Where both grids share a coordinate system, column and row are independent and only the two axes are stored; otherwise
+ * every cell is.
+ */
+public final class SourcePositions {
+    private final GridGeometry source;
+    private final GridGeometry target;
+    private final boolean separable;
+    /** Column of the western centre by target column (separable) or target cell; -1 beyond the source. */
+    private final int[] west;
+    private final float[] eastWeight;
+    private final int[] north;
+    private final float[] southWeight;
+    private final int[] columnInside;
+    private final int[] rowInside;
+
+    /** @param targetToSource coordinates of the target grid to those of the source grid */
+    public SourcePositions(GridGeometry source, GridGeometry target, CoordinateOperation targetToSource) {
+        this.source = source;
+        this.target = target;
+        separable = targetToSource.isIdentity();
+        int columns = separable ? target.columns() : Math.toIntExact(target.cells());
+        int rows = separable ? target.rows() : columns;
+        west = new int[columns];
+        eastWeight = new float[columns];
+        columnInside = new int[columns];
+        north = new int[rows];
+        southWeight = new float[rows];
+        rowInside = new int[rows];
+        if (separable) {
+            for (int column = 0; column < columns; column++) {
+                setColumn(column, target.centreX(column));
+            }
+            for (int row = 0; row < rows; row++) {
+                setRow(row, target.centreY(row));
+            }
+        } else {
+            transformCells(targetToSource);
+        }
+    }
+
+    private void transformCells(CoordinateOperation targetToSource) {
+        double[] xy = new double[2 * target.columns()];
+        for (int row = 0; row < target.rows(); row++) {
+            for (int column = 0; column < target.columns(); column++) {
+                xy[2 * column] = target.centreX(column);
+                xy[2 * column + 1] = target.centreY(row);
+            }
+            targetToSource.transform(xy, target.columns());
+            for (int column = 0; column < target.columns(); column++) {
+                int cell = row * target.columns() + column;
+                setColumn(cell, xy[2 * column]);
+                setRow(cell, xy[2 * column + 1]);
+            }
+        }
+    }
+
+    private void setColumn(int at, double x) {
+        columnInside[at] = source.columnAt(x);
+        double position = clamp(source.columnPosition(x) - 0.5, source.columns());
+        west[at] = columnInside[at] < 0 ? -1 : lower(position, source.columns());
+        eastWeight[at] = (float) (position - west[at]);
+    }
+
+    private void setRow(int at, double y) {
+        rowInside[at] = source.rowAt(y);
+        double position = clamp(source.rowPosition(y) - 0.5, source.rows());
+        north[at] = rowInside[at] < 0 ? -1 : lower(position, source.rows());
+        southWeight[at] = (float) (position - north[at]);
+    }
+
+    private static double clamp(double position, int count) {
+        return Math.max(0, Math.min(position, count - 1));
+    }
+
+    /** Index of the lower of two neighbours, so chosen that the upper one exists where there are two. */
+    private static int lower(double position, int count) {
+        return Math.max(0, Math.min((int) position, count - 2));
+    }
+
+    public GridGeometry source() {
+        return source;
+    }
+
+    public GridGeometry target() {
+        return target;
+    }
+
+    /** Whether column and row positions are independent of each other. */
+    public boolean isSeparable() {
+        return separable;
+    }
+
+    private int columnKey(int row, int column) {
+        return separable ? column : row * target.columns() + column;
+    }
+
+    private int rowKey(int row, int column) {
+        return separable ? row : row * target.columns() + column;
+    }
+
+    /** Column of the western neighbour; -1 beyond the source's cells. */
+    public int west(int row, int column) {
+        return west[columnKey(row, column)];
+    }
+
+    /** Weight of the eastern neighbour, 0..1. */
+    public float eastWeight(int row, int column) {
+        return eastWeight[columnKey(row, column)];
+    }
+
+    /** Row of the northern neighbour; -1 beyond the source's cells. */
+    public int north(int row, int column) {
+        return north[rowKey(row, column)];
+    }
+
+    /** Weight of the southern neighbour, 0..1. */
+    public float southWeight(int row, int column) {
+        return southWeight[rowKey(row, column)];
+    }
+
+    /** Source cell that contains the target cell's centre; -1 beyond the source's cells. */
+    public int containing(int row, int column) {
+        int sourceColumn = columnInside[columnKey(row, column)];
+        int sourceRow = rowInside[rowKey(row, column)];
+        return sourceColumn < 0 || sourceRow < 0 ? -1 : sourceRow * source.columns() + sourceColumn;
+    }
+
+    /** First source row that the target rows from..to-1 need, and the row after the last; 0, 0 if they need none. */
+    public int[] sourceRows(int from, int to) {
+        int first = Integer.MAX_VALUE;
+        int end = 0;
+        int start = separable ? from : from * target.columns();
+        int stop = separable ? to : to * target.columns();
+        for (int i = start; i < stop; i++) {
+            if (north[i] >= 0) {
+                first = Math.min(first, north[i]);
+                end = Math.max(end, Math.min(north[i] + 2, source.rows()));
+            }
+        }
+        return end == 0 ? new int[] {0, 0} : new int[] {first, end};
+    }
+}

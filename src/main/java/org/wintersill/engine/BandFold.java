@@ -1,0 +1,156 @@
+package org.wintersill.engine;
+
+import org.wintersill.elevation.LaneAdjuster;
+import org.wintersill.engine.FoldPlan.Band;
+import org.wintersill.engine.FoldPlan.Batch;
+import org.wintersill.engine.FoldPlan.Piece;
+import org.wintersill.season.CompletenessTally;
+import org.wintersill.season.NightCurve;
+import org.wintersill.season.WinterLane;
+import org.wintersill.time.DayAxis;
+import org.wintersill.time.Season;
+
+/** The fold of one band of target rows from its first day to its last. */
+final class BandFold implements AutoCloseable {
+    /** Source cells that one task of the missing-day count takes. */
+    private static final int TALLY_CELLS = 8192;
+
+    private final FoldJob job;
+    private final Band band;
+    private final Workers workers;
+    private final WinterSink sink;
+    private final Progress progress;
+    private final SlabReader reader;
+    private final float[] slab;
+    private final boolean wholeWinters;
+    private final int laneRows;
+    private final int laneCount;
+    private final WinterLane[] lanes;
+    private final LaneAdjuster[] adjusters;
+    private final float[][][] nights;
+    private CompletenessTally tally;
+    /** Position in the window of the last night that the tally has seen. */
+    private int lastNight;
+
+    BandFold(FoldJob job, FoldPlan plan, Band band, Workers workers, WinterSink sink, Progress progress) {
+        this.job = job;
+        this.band = band;
+        this.workers = workers;
+        this.sink = sink;
+        this.progress = progress;
+        reader = new SlabReader(job, band, workers);
+        slab = new float[Math.multiplyExact(plan.batchDays(), reader.dayCells())];
+        wholeWinters = plan.wholeWinters();
+        laneRows = plan.laneRows();
+        laneCount = (band.rowEnd() - band.row() + laneRows - 1) / laneRows;
+        lanes = new WinterLane[wholeWinters ? workers.threads() : laneCount];
+        adjusters = new LaneAdjuster[workers.threads()];
+        nights = new float[workers.threads()][][];
+    }
+
+    void accept(Batch batch) {
+        reader.read(batch, slab);
+        for (Piece piece : batch.pieces()) {
+            if (piece.opens()) {
+                tally = new CompletenessTally(job.seasons().get(piece.season()), job.policy(), Math.max(1, reader.dayCells()));
+                lastNight = -1;
+            }
+            count(batch, piece);
+            workers.forEach(laneCount, (worker, lane) -> {
+                fold(batch, piece, worker, lane);
+                progress.advance((long) piece.count() * rows(lane));
+            });
+        }
+        long summer = batch.count() - batch.pieces().stream().mapToLong(Piece::count).sum();
+        progress.advance(summer * (band.rowEnd() - band.row()));
+    }
+
+    /** Tells the tally of every night of the piece, and of the nights without record before, between and after. */
+    private void count(Batch batch, Piece piece) {
+        Season season = job.seasons().get(piece.season());
+        DayAxis axis = job.source().days();
+        int before = lastNight;
+        int cells = reader.dayCells();
+        workers.forEach((cells + TALLY_CELLS - 1) / TALLY_CELLS, (worker, task) -> {
+            int from = task * TALLY_CELLS;
+            int to = Math.min(cells, from + TALLY_CELLS);
+            int next = before + 1;
+            for (int position = piece.first(); position < piece.first() + piece.count(); position++) {
+                int night = (int) (axis.day(position) - season.firstDay());
+                for (; next < night; next++) {
+                    tally.absent(next, from, to);
+                }
+                tally.accept(night, slab, (position - batch.first()) * cells, from, to);
+                next = night + 1;
+            }
+            for (; piece.closes() && next < season.days(); next++) {
+                tally.absent(next, from, to);
+            }
+        });
+        lastNight = (int) (axis.day(piece.first() + piece.count() - 1) - season.firstDay());
+    }
+
+    private int rows(int lane) {
+        return Math.min(laneRows, band.rowEnd() - band.row() - lane * laneRows);
+    }
+
+    private void fold(Batch batch, Piece piece, int worker, int laneNumber) {
+        int firstRow = band.row() + laneNumber * laneRows;
+        int rows = rows(laneNumber);
+        WinterLane lane = lane(worker, laneNumber, rows);
+        if (piece.opens()) {
+            lane.begin();
+        }
+        Season season = job.seasons().get(piece.season());
+        NightCurve[] curves = job.curves().get(piece.season());
+        DayAxis axis = job.source().days();
+        int position = piece.first();
+        int end = piece.first() + piece.count();
+        while (position < end) {
+            int first = (int) (axis.day(position) - season.firstDay());
+            int count = 0;
+            while (position < end && count < WinterLane.STRETCH && axis.day(position) - season.firstDay() == first + count) {
+                double lapse = job.adjustment().lapseRates().ofMonth(season.date(first + count).month());
+                // A source cell's number counts from the window's first row, the slab from the band's.
+                int offset = (position - batch.first()) * reader.dayCells() - band.sourceRow() * job.window().columns();
+                adjusters[worker].adjust(slab, offset, lapse, firstRow, rows, nights[worker][count]);
+                position++;
+                count++;
+            }
+            lane.accept(curves, nights[worker], count, first);
+        }
+        if (piece.closes()) {
+            sink.accept(piece.season(), firstRow, lane.finish(cell -> counts(firstRow, cell)));
+        }
+    }
+
+    private WinterLane lane(int worker, int laneNumber, int rows) {
+        int columns = job.targetColumns();
+        if (adjusters[worker] == null) {
+            adjusters[worker] = new LaneAdjuster(job.adjustment());
+            nights[worker] = new float[WinterLane.STRETCH][laneRows * columns];
+        }
+        int slot = wholeWinters ? worker : laneNumber;
+        int cells = rows * columns;
+        if (lanes[slot] == null || lanes[slot].cells() != cells) {
+            lanes[slot] = new WinterLane(job.cultivars(), job.levels(), cells);
+        }
+        return lanes[slot];
+    }
+
+    /** Whether the winter is complete enough in the source cell that contains a cell of a lane. */
+    private boolean counts(int firstRow, int cell) {
+        int columns = job.targetColumns();
+        int containing = job.adjustment().positions().containing(firstRow + cell / columns, cell % columns);
+        return containing >= 0 && tally.isComplete(containing - band.sourceRow() * job.window().columns());
+    }
+
+    long valuesSetAside() {
+        return reader.valuesSetAside();
+    }
+
+    @Override
+    public void close() {
+        reader.close();
+    }
+}

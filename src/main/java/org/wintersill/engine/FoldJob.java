@@ -1,0 +1,42 @@
+package org.wintersill.engine;
+
+import java.util.List;
+import org.wintersill.elevation.ElevationAdjustment;
+import org.wintersill.grid.Block;
+import org.wintersill.season.MissingDayPolicy;
+import org.wintersill.season.NightCurve;
+import org.wintersill.temperature.DailyTemperatureSource;
+import org.wintersill.time.Season;
+
+/**
+ * What is to be folded: definition of the work, without a word on how it is cut up.
+ *
+ * @param source daily minima
+ * @param window the part of the source's grid that the target needs; the adjustment's source grid is that part
+ * @param adjustment from the window to the target grid
+ * @param seasons winters in order
+ * @param policy when a winter counts
+ * @param curves {@code [season][cultivar]}
+ * @param levels number of levels of damage that margins are kept for; the first is LT50
+ */
+public record FoldJob(DailyTemperatureSource source, Block window, ElevationAdjustment adjustment, List<Season> seasons,
+                      MissingDayPolicy policy, List<NightCurve[]> curves, int levels) {
+
+    public FoldJob {
+        seasons = List.copyOf(seasons);
+        curves = List.copyOf(curves);
+    }
+
+    public int cultivars() {
+        return curves.isEmpty() ? 0 : curves.get(0).length;
+    }
+
+    /** Number of rows of the target grid. */
+    public int targetRows() {
+        return adjustment.positions().target().rows();
+    }
+
+    public int targetColumns() {
+        return adjustment.positions().target().columns();
+    }
+}

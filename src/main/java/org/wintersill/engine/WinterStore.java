@@ -1,0 +1,130 @@
+package org.wintersill.engine;
+
+import java.io.IOException;
+import java.nio.ByteBuffer;
+import java.nio.ByteOrder;
+import java.nio.FloatBuffer;
+import java.nio.channels.FileChannel;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.nio.file.StandardOpenOption;
+import org.wintersill.problem.Problem;
+import org.wintersill.season.WinterValues;
+
+/**
+ * Every winter's values of every target cell, kept on disk between the fold and the summaries: a percentile over winters
+ * needs all of them, and memory must not grow with their number.
+ *
+ * <p>One file of floats, {@code [plane][winter][row][column]}, planes as numbered by {@link WinterValues}, then further
+ * planes of one value a cell for results that pass from one summary to the next. Writes and reads go to places of their
+ * own, so any number of threads may use it.
+ */
+public final class WinterStore implements WinterSink, AutoCloseable {
+    private final Path file;
+    private final FileChannel channel;
+    private final int winterPlanes;
+    private final int seasons;
+    private final int rows;
+    private final int columns;
+
+    /**
+     * Opens an empty store.
+     *
+     * @param file where; removed when the store is closed
+     * @param winterPlanes planes with a value a winter
+     * @throws org.wintersill.problem.ProblemException when the file cannot be made
+     */
+    public WinterStore(Path file, int winterPlanes, int seasons, int rows, int columns) {
+        this.file = file;
+        this.winterPlanes = winterPlanes;
+        this.seasons = seasons;
+        this.rows = rows;
+        this.columns = columns;
+        try {
+            channel = FileChannel.open(file, StandardOpenOption.CREATE_NEW, StandardOpenOption.READ, StandardOpenOption.WRITE);
+        } catch (IOException e) {
+            throw failed(e);
+        }
+    }
+
+    /** Bytes on disk for winter planes and extra planes. */
+    public static long bytes(int winterPlanes, int seasons, int extraPlanes, long cells) {
+        return 4 * cells * ((long) winterPlanes * seasons + extraPlanes);
+    }
+
+    private RuntimeException failed(IOException e) {
+        return Problem.output("working data could not be kept there: " + e.getMessage(), file.toString(),
+                "The run needs " + MemoryEstimate.text(bytes(winterPlanes, seasons, 0, (long) rows * columns))
+                        + " of free disk beside its outputs").asException(e);
+    }
+
+    @Override
+    public void accept(int season, int firstRow, WinterValues values) {
+        for (int plane = 0; plane < values.planeCount(); plane++) {
+            write(position(plane, season, firstRow), values.plane(plane));
+        }
+    }
+
+    /** Keeps rows of an extra plane. */
+    public void writeExtra(int plane, int firstRow, float[] values) {
+        write(extraPosition(plane, firstRow), values);
+    }
+
+    private void write(long position, float[] values) {
+        ByteBuffer bytes = ByteBuffer.allocate(4 * values.length).order(ByteOrder.LITTLE_ENDIAN);
+        bytes.asFloatBuffer().put(values);
+        try {
+            while (bytes.hasRemaining()) {
+                channel.write(bytes, position + bytes.position());
+            }
+        } catch (IOException e) {
+            throw failed(e);
+        }
+    }
+
+    private long position(int plane, int season, int row) {
+        return 4L * columns * (((long) plane * seasons + season) * rows + row);
+    }
+
+    private long extraPosition(int plane, int row) {
+        return position(winterPlanes, 0, 0) + 4L * columns * ((long) plane * rows + row);
+    }
+
+    /** Rows of a plane in one winter, {@code [row * columns + column]}. */
+    public float[] read(int plane, int season, int firstRow, int rowCount) {
+        return read(position(plane, season, firstRow), rowCount);
+    }
+
+    /** Rows of an extra plane. */
+    public float[] readExtra(int plane, int firstRow, int rowCount) {
+        return read(extraPosition(plane, firstRow), rowCount);
+    }
+
+    private float[] read(long position, int rowCount) {
+        ByteBuffer bytes = ByteBuffer.allocate(4 * columns * rowCount).order(ByteOrder.LITTLE_ENDIAN);
+        try {
+            while (bytes.hasRemaining() && channel.read(bytes, position + bytes.position()) >= 0) {
+                // until full
+            }
+        } catch (IOException e) {
+            throw failed(e);
+        }
+        if (bytes.hasRemaining()) {
+            throw new IllegalStateException("rows at " + position + " were never written");
+        }
+        FloatBuffer floats = bytes.flip().asFloatBuffer();
+        float[] values = new float[floats.remaining()];
+        floats.get(values);
+        return values;
+    }
+
+    @Override
+    public void close() {
+        try {
+            channel.close();
+            Files.deleteIfExists(file);
+        } catch (IOException e) {
+            throw failed(e);
+        }
+    }
+}

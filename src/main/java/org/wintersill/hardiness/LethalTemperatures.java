@@ -1,0 +1,2 @@
+package org.wintersill.hardiness;
+public record LethalTemperatures(double[] lt10, double[] lt50, double[] lt90) { }

@@ -1,0 +1,73 @@
+package org.wintersill.season;
+
+/**
+ * The loops of the fold: lowest values over nights, cell by cell.
+ *
+ * <p>Temperatures of a stretch of nights are {@code nights[n][i]}, {@code i} counting the cells of the lane; missing ones are
+ * positive infinity. Running values begin at positive infinity. No NaN goes in.
+ *
+ * <p>Four nights are taken at a time so that the running value is loaded and stored once for the four. Each night has an
+ * array of its own that begins at the first cell of the lane: the compiler of JDK 17 makes vector code of such loops and of none
+ * that add an offset to the index, which is ten times slower.
+ */
+final class LowestValues {
+    private LowestValues() {
+    }
+
+    /** lowest = min(lowest, t - reference[firstNight + n]): the margin to a lethal temperature, K. */
+    static void ofDifference(float[][] nights, int count, float[] reference, int firstNight, float[] lowest, int cells) {
+        int n = 0;
+        for (; n + 4 <= count; n += 4) {
+            int r = firstNight + n;
+            difference4(nights[n], nights[n + 1], nights[n + 2], nights[n + 3], reference[r], reference[r + 1],
+                    reference[r + 2], reference[r + 3], lowest, cells);
+        }
+        for (; n < count; n++) {
+            difference1(nights[n], reference[firstNight + n], lowest, cells);
+        }
+    }
+
+    private static void difference4(float[] a, float[] b, float[] c, float[] d, float ra, float rb, float rc, float rd,
+                                    float[] lowest, int cells) {
+        for (int i = 0; i < cells; i++) {
+            float first = Math.min(a[i] - ra, b[i] - rb);
+            float second = Math.min(c[i] - rc, d[i] - rd);
+            lowest[i] = Math.min(lowest[i], Math.min(first, second));
+        }
+    }
+
+    private static void difference1(float[] a, float ra, float[] lowest, int cells) {
+        for (int i = 0; i < cells; i++) {
+            lowest[i] = Math.min(lowest[i], a[i] - ra);
+        }
+    }
+
+    /** lowest = min(lowest, (t - reference[night]) * factor[night]): the standardised margin of one side of the curve. */
+    static void ofScaledDifference(float[][] nights, int count, float[] reference, float[] factor, int firstNight,
+                                   float[] lowest, int cells) {
+        int n = 0;
+        for (; n + 4 <= count; n += 4) {
+            int r = firstNight + n;
+            scaled4(nights[n], nights[n + 1], nights[n + 2], nights[n + 3], reference[r], reference[r + 1], reference[r + 2],
+                    reference[r + 3], factor[r], factor[r + 1], factor[r + 2], factor[r + 3], lowest, cells);
+        }
+        for (; n < count; n++) {
+            scaled1(nights[n], reference[firstNight + n], factor[firstNight + n], lowest, cells);
+        }
+    }
+
+    private static void scaled4(float[] a, float[] b, float[] c, float[] d, float ra, float rb, float rc, float rd,
+                                float fa, float fb, float fc, float fd, float[] lowest, int cells) {
+        for (int i = 0; i < cells; i++) {
+            float first = Math.min((a[i] - ra) * fa, (b[i] - rb) * fb);
+            float second = Math.min((c[i] - rc) * fc, (d[i] - rd) * fd);
+            lowest[i] = Math.min(lowest[i], Math.min(first, second));
+        }
+    }
+
+    private static void scaled1(float[] a, float ra, float fa, float[] lowest, int cells) {
+        for (int i = 0; i < cells; i++) {
+            lowest[i] = Math.min(lowest[i], (a[i] - ra) * fa);
+        }
+    }
+}

@@ -1,0 +1,88 @@
+package org.wintersill.season;
+
+import java.util.Arrays;
+import java.util.function.IntPredicate;
+
+/**
+ * All running values of a lane of cells through one winter: the lowest minimum, and a {@link WinterAccumulator} for each
+ * cultivar. Nights come in order; a lane belongs to one worker at a time.
+ */
+public final class WinterLane {
+    /** Most nights that {@link #accept} takes at once; keeps a lane's temperatures in the processor's cache. */
+    public static final int STRETCH = 16;
+
+    private static final float[] NO_REFERENCE = new float[STRETCH];
+
+    private final int cells;
+    private final int levels;
+    private final float[] minimum;
+    private final float[] before;
+    private final WinterAccumulator[] cultivars;
+
+    public WinterLane(int cultivarCount, int levels, int cells) {
+        this.cells = cells;
+        this.levels = levels;
+        minimum = new float[cells];
+        before = new float[cells];
+        cultivars = new WinterAccumulator[cultivarCount];
+        for (int c = 0; c < cultivarCount; c++) {
+            cultivars[c] = new WinterAccumulator(levels, cells);
+        }
+        begin();
+    }
+
+    public int cells() {
+        return cells;
+    }
+
+    /** Bytes that a lane takes for each of its cells. */
+    public static long bytesPerCell(int cultivarCount, int levels) {
+        return 8 + (long) cultivarCount * (4L * levels + 10);
+    }
+
+    /** Makes ready for the next winter. */
+    public void begin() {
+        Arrays.fill(minimum, Float.POSITIVE_INFINITY);
+        for (WinterAccumulator cultivar : cultivars) {
+            cultivar.begin();
+        }
+    }
+
+    /**
+     * Takes consecutive nights.
+     *
+     * @param curves one a cultivar
+     * @param nights {@code [night of the stretch][cell]}, degrees Celsius, positive infinity for missing
+     * @param count number of nights, at most {@link #STRETCH}
+     * @param firstNight position in the window of the first
+     */
+    public void accept(NightCurve[] curves, float[][] nights, int count, int firstNight) {
+        LowestValues.ofDifference(nights, count, NO_REFERENCE, 0, minimum, cells);
+        for (int c = 0; c < cultivars.length; c++) {
+            cultivars[c].accept(curves[c], nights, count, firstNight, before);
+        }
+    }
+
+    /**
+     * The winter's values.
+     *
+     * @param counts whether the winter is complete enough at a cell of the lane
+     * @return a fresh set; NaN where the winter does not count or no night had a value
+     */
+    public WinterValues finish(IntPredicate counts) {
+        WinterValues values = new WinterValues(cultivars.length, levels, cells);
+        for (int i = 0; i < cells; i++) {
+            boolean valid = minimum[i] < Float.POSITIVE_INFINITY && counts.test(i);
+            values.minimum()[i] = valid ? minimum[i] : Float.NaN;
+            for (int c = 0; c < cultivars.length; c++) {
+                WinterAccumulator cultivar = cultivars[c];
+                for (int level = 0; level < levels; level++) {
+                    values.margin(c, level)[i] = valid ? cultivar.margin(level, i) : Float.NaN;
+                }
+                values.damage(c)[i] = valid ? (float) cultivar.damage(i) : Float.NaN;
+                values.worstNight(c)[i] = valid ? cultivar.worstNight(i) : Float.NaN;
+            }
+        }
+        return values;
+    }
+}

@@ -1,0 +1,66 @@
+package org.wintersill.season;
+
+/**
+ * The values of one winter in one lane of cells. Arrays are {@code [cell of the lane]}, NaN where the winter does not count.
+ * Planes are numbered so that a store can keep them without knowing what they mean: {@link #plane(int)}.
+ */
+public final class WinterValues {
+    private final int levels;
+    private final float[][] planes;
+
+    WinterValues(int cultivars, int levels, int cells) {
+        this.levels = levels;
+        planes = new float[planes(cultivars, levels)][cells];
+    }
+
+    /** Number of planes: the minimum, and for each cultivar a margin a level, the damage and the worst night. */
+    public static int planes(int cultivars, int levels) {
+        return 1 + cultivars * (levels + 2);
+    }
+
+    /** Plane of the lowest minimum. */
+    public static int minimumPlane() {
+        return 0;
+    }
+
+    /** Plane of a cultivar's margin to the lethal temperature of a level; level 0 is LT50. */
+    public static int marginPlane(int cultivar, int level, int levels) {
+        return 1 + cultivar * (levels + 2) + level;
+    }
+
+    public static int damagePlane(int cultivar, int levels) {
+        return marginPlane(cultivar, levels, levels);
+    }
+
+    public static int worstNightPlane(int cultivar, int levels) {
+        return marginPlane(cultivar, levels + 1, levels);
+    }
+
+    public int planeCount() {
+        return planes.length;
+    }
+
+    public float[] plane(int plane) {
+        return planes[plane];
+    }
+
+    /** Lowest minimum temperature of the winter, degrees Celsius. */
+    public float[] minimum() {
+        return planes[minimumPlane()];
+    }
+
+    /** Lowest margin, K. */
+    public float[] margin(int cultivar, int level) {
+        return planes[marginPlane(cultivar, level, levels)];
+    }
+
+    /** Fraction of buds killed, 0..1. */
+    public float[] damage(int cultivar) {
+        return planes[damagePlane(cultivar, levels)];
+    }
+
+    /** Position in the window of the earliest night of the lowest margin, a whole number. */
+    public float[] worstNight(int cultivar) {
+        return planes[worstNightPlane(cultivar, levels)];
+    }
+}
