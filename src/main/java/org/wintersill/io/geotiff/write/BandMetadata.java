@@ -5,7 +5,6 @@ import java.math.BigDecimal;
 import java.math.MathContext;
 import java.util.List;
 import java.util.Map;
-import java.util.regex.Pattern;
 import javax.xml.stream.XMLOutputFactory;
 import javax.xml.stream.XMLStreamException;
 import javax.xml.stream.XMLStreamWriter;
@@ -14,13 +13,12 @@ import org.wintersill.layer.RasterHeader;
 /**
  * Text of tag 42112: own items, and description, unit and statistics of each band, as GDAL's GTiff driver reads them.
  *
- * <p>That reader resolves entities once more after parsing. A value that would change by it, such as the six letters
- * {@code &amp;}, is escaped twice; all others once, which every reader understands.
+ * <p>That reader resolves entities once more after parsing and cuts a text off at an ampersand that begins none (seen in
+ * GDAL 3.6). So an ampersand is escaped twice, as that driver does when it writes.
  */
 final class BandMetadata {
     /** Enough digits to give back any double; trailing zeros are dropped. */
     private static final MathContext DIGITS = new MathContext(17);
-    private static final Pattern LIKE_AN_ENTITY = Pattern.compile("&(?=(amp|lt|gt|quot|apos|#[0-9xX][0-9a-fA-F]*);)");
 
     private BandMetadata() {
     }
@@ -77,7 +75,7 @@ final class BandMetadata {
         if (role != null) {
             xml.writeAttribute("role", role);
         }
-        xml.writeCharacters(LIKE_AN_ENTITY.matcher(printable(value)).replaceAll("&amp;"));
+        xml.writeCharacters(printable(value).replace("&", "&amp;"));
         xml.writeEndElement();
         xml.writeCharacters("\n");
     }
