@@ -127,7 +127,7 @@ public final class CogWriter implements RasterWriter {
             if (spool != null) {
                 spool.close();
             }
-            if (begun && !finished) {
+            if (begun && !finished && Files.isRegularFile(file)) {
                 Files.deleteIfExists(file);
             }
         } catch (IOException e) {
