@@ -92,6 +92,13 @@ record Packing(RawType type, double scale, double offset, double[] fills, double
         return raw < lowest || raw > highest;
     }
 
+    /** The same with one more stored number that means missing. */
+    Packing withFill(double fill) {
+        double[] more = java.util.Arrays.copyOf(fills, fills.length + 1);
+        more[fills.length] = type.cast(fill);
+        return new Packing(type, scale, offset, more, lowest, highest);
+    }
+
     boolean isIdentity() {
         return scale == 1 && offset == 0;
     }
