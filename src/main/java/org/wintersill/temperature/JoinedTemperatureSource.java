@@ -195,6 +195,19 @@ public final class JoinedTemperatureSource implements DailyTemperatureSource {
     }
 
     @Override
+    public int chunkStart(int at) {
+        if (layout.days() == 1) {
+            return at;
+        }
+        int start = parts.get(part[at]).chunkStart(position[at]);
+        int first = at;
+        while (first > 0 && part[first - 1] == part[at] && position[first - 1] >= start) {
+            first--;
+        }
+        return first;
+    }
+
+    @Override
     public List<SourceFile> files() {
         return parts.stream().flatMap(p -> p.files().stream()).toList();
     }
