@@ -158,8 +158,10 @@ public final class GeoPackageWriter implements AutoCloseable {
                         table.geometryType(), table.srsId());
                 extension(table.name(), "geom", "gpkg_rtree_index", StandardTables.RTREE, "write-only");
             }
+            Set<String> names = new LinkedHashSet<>();
             for (Column column : table.columns()) {
-                describe(table.name(), column);
+                // Some programs show "name" as heading, some "title"; the former must differ from column to column.
+                describe(table.name(), column, names.add(column.heading()) ? column.heading() : column.name());
             }
             tables.put(table.name(), made);
             return made;
@@ -168,9 +170,9 @@ public final class GeoPackageWriter implements AutoCloseable {
         }
     }
 
-    private void describe(String table, Column column) throws SQLException {
+    private void describe(String table, Column column, String name) throws SQLException {
         Constraint constraint = column.constraint();
-        insert("INSERT INTO gpkg_data_columns VALUES (?, ?, ?, ?, ?, NULL, ?)", table, column.name(), column.name(),
+        insert("INSERT INTO gpkg_data_columns VALUES (?, ?, ?, ?, ?, NULL, ?)", table, column.name(), name,
                 column.heading(), column.fullDescription(), constraint == null ? null : constraint.name());
         if (constraint == null) {
             return;

@@ -68,7 +68,7 @@ class GeoPackageWriterTest {
         try (Reading in = new Reading(SampleGeoPackage.write(folder.resolve("a.gpkg")))) {
             assertEquals(List.of("ok"), in.column("PRAGMA integrity_check"));
             assertEquals(List.of(), in.column("PRAGMA foreign_key_check"));
-            assertEquals(List.of("suitability", "cells", "parcel_cultivars", "layer_styles"),
+            assertEquals(List.of("suitability", "layer_styles", "cells", "parcel_cultivars"),
                     in.column("SELECT table_name FROM gpkg_contents ORDER BY rowid"));
             assertEquals(List.of(SampleGeoPackage.LAST_CHANGE), in.column("SELECT DISTINCT last_change FROM gpkg_contents"));
             assertEquals(List.of("4321000.0 3209250.0 4322000.0 3210000.0"), in.column(
@@ -110,6 +110,20 @@ class GeoPackageWriterTest {
             assertEquals(List.of("delete", "insert", "update1", "update2", "update3", "update4"), in.column(
                     "SELECT substr(name, 24) FROM sqlite_master WHERE type = 'trigger' AND tbl_name = 'suitability' "
                             + "ORDER BY name"));
+        }
+    }
+
+    @Test
+    void columnsCarryTitleUnitAndLegalValues() throws Exception {
+        try (Reading in = new Reading(SampleGeoPackage.write(folder.resolve("a.gpkg")))) {
+            assertEquals(List.of("Area (km2)|Area (km2)|area on the ellipsoid; unit km2"), in.column(
+                    "SELECT name || '|' || title || '|' || description FROM gpkg_data_columns "
+                            + "WHERE table_name = 'suitability' AND column_name = 'area_km2'"));
+            assertEquals(List.of("secure", "workable", "marginal", "unfit"), in.column(
+                    "SELECT value FROM gpkg_data_column_constraints WHERE constraint_name = 'suitability_class' "
+                            + "ORDER BY rowid"));
+            assertEquals(List.of("0 1 1 1"), in.column("SELECT min || ' ' || min_is_inclusive || ' ' || max || ' ' || "
+                    + "max_is_inclusive FROM gpkg_data_column_constraints WHERE constraint_name = 'fraction'"));
         }
     }
 
