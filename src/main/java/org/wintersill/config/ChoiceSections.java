@@ -1,0 +1,136 @@
+package org.wintersill.config;
+
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import org.wintersill.io.yaml.YamlChecks;
+import org.wintersill.io.yaml.YamlSection;
+import org.wintersill.io.yaml.YamlValue;
+
+/** Reads {@code damage}, {@code statistics}, {@code classes}, {@code missing-days} and {@code area}. */
+final class ChoiceSections {
+    private static final List<String> MISSING_DAY_RULES = List.of("month-10-5", "month-5-3", "none");
+    private static final List<Double> DEFAULT_CLASSES = List.of(0.05, 0.10, 0.20);
+    /** Beyond any coordinate in any unit of length. */
+    private static final double FARTHEST = 1e9;
+
+    private ChoiceSections() {
+    }
+
+    static DamageConfig damage(YamlSection section, Map<String, Object> tree) {
+        String nights = section.word("nights", List.of("worst"), List.of("independent", "correlated")).orElse("worst");
+        List<Integer> levels = section.value("levels").map(value -> levels(value, section)).orElse(List.of(10, 50, 90));
+        int killing = section.whole("killing", 1, 99).orElse(50);
+        section.later("uncertainty", "rho");
+        section.finish();
+        if (!levels.isEmpty() && !levels.contains(killing)) {
+            boolean given = section.value("killing").isPresent();
+            section.problem(given ? "killing" : "levels", "a killing winter is one that kills " + killing
+                    + " percent, which is not among the levels " + levels, given ? "Choose one of the levels, or add "
+                    + killing + " to them" : "Add " + killing + " to the levels, or choose killing among them");
+        }
+        tree.put("nights", nights);
+        tree.put("levels", levels);
+        tree.put("killing", killing);
+        return new DamageConfig(nights, levels, killing);
+    }
+
+    private static List<Integer> levels(YamlValue value, YamlSection section) {
+        List<Integer> levels = new ArrayList<>();
+        String key = section.path("levels");
+        List<YamlValue> items = section.checks().items(value, key);
+        for (YamlValue item : items) {
+            section.checks().whole(item, key, 1, 99).ifPresent(level -> {
+                if (levels.contains(level)) {
+                    section.checks().problem(item, key, "the level " + level + " is given twice", "Keep one of the two");
+                } else {
+                    levels.add(level);
+                }
+            });
+        }
+        if (items.isEmpty() && value instanceof YamlValue.Sequence) {
+            section.problem("levels", "the list is empty", "Give percents of organs killed, such as [10, 50, 90]");
+        }
+        return levels.stream().sorted().toList();
+    }
+
+    static StatisticsConfig statistics(YamlSection section, Map<String, Object> tree) {
+        double interval = section.number("interval", 0.5, 0.999, "from 0.5 to 0.999, such as 0.90").orElse(0.90);
+        String bounds = section.word("bounds", List.of("jeffreys", "wilson"), List.of()).orElse("jeffreys");
+        double target = section.number("target", 0, 0.999, "a frequency from 0 to below 1, such as 0.10").orElse(0.10);
+        section.later("extremes", "rule");
+        section.finish();
+        tree.put("interval", interval);
+        tree.put("bounds", bounds);
+        tree.put("target", target);
+        return new StatisticsConfig(interval, bounds, target);
+    }
+
+    static List<Double> classes(YamlSection top) {
+        return top.value("classes").flatMap(value -> {
+            String accepted = "frequencies between 0 and 1";
+            Optional<List<Double>> limits = top.checks().numbers(value, "classes", 3, 0, 1, accepted);
+            return limits.filter(list -> {
+                boolean ascending = 0 < list.get(0) && list.get(0) < list.get(1) && list.get(1) < list.get(2) && list.get(2) < 1;
+                if (!ascending) {
+                    top.problem("classes", list + " does not ascend between 0 and 1", "Give the highest frequency of killing winters "
+                            + "that is secure, workable and marginal, such as [0.05, 0.10, 0.20]");
+                }
+                return ascending;
+            });
+        }).orElse(DEFAULT_CLASSES);
+    }
+
+    static String missingDays(YamlSection top, Map<String, Object> tree) {
+        String rule = MISSING_DAY_RULES.get(0);
+        Optional<YamlValue> value = top.value("missing-days");
+        if (value.isPresent() && YamlChecks.isText(value.get())) {
+            rule = top.checks().word(value.get(), "missing-days", MISSING_DAY_RULES, List.of()).orElse(rule);
+        } else if (value.isPresent()) {
+            YamlSection section = YamlSection.of(value.get(), "missing-days", top.checks());
+            rule = section.word("rule", MISSING_DAY_RULES, List.of()).orElse(rule);
+            section.finish();
+        }
+        tree.put("rule", rule);
+        return rule;
+    }
+
+    /** The area, if its box is given and right. */
+    static Optional<AreaConfig> area(YamlSection section, Map<String, Object> tree) {
+        Optional<List<Double>> box = section.required("bbox", "Give west, south, east and north in the reference system of the "
+                + "target grid").flatMap(value -> section.checks().numbers(value, section.path("bbox"), 4, -FARTHEST, FARTHEST,
+                "coordinates in the reference system of the target grid"));
+        section.later("polygons");
+        section.finish();
+        box.ifPresent(list -> tree.put("bbox", list));
+        return box.filter(list -> {
+            boolean ordered = list.get(0) < list.get(2) && list.get(1) < list.get(3);
+            if (!ordered) {
+                section.problem("bbox", list + " is no box: west must be less than east and south less than north",
+                        "Give them in the order west, south, east, north");
+            }
+            return ordered;
+        }).map(list -> new AreaConfig(list.get(0), list.get(1), list.get(2), list.get(3)));
+    }
+
+    /** Texts of a list, each once. */
+    static List<String> names(YamlValue value, String key, YamlChecks checks, String form, String accepted) {
+        List<String> names = new ArrayList<>();
+        Set<String> seen = new HashSet<>();
+        for (YamlValue item : checks.items(value, key)) {
+            checks.text(item, key).ifPresent(name -> {
+                if (!name.matches(form)) {
+                    checks.problem(item, key, "'" + name + "' is not " + accepted, "");
+                } else if (!seen.add(name)) {
+                    checks.problem(item, key, "'" + name + "' is given twice", "Keep one of the two");
+                } else {
+                    names.add(name);
+                }
+            });
+        }
+        return names;
+    }
+}

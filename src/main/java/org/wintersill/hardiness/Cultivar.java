@@ -1,0 +1,39 @@
+package org.wintersill.hardiness;
+
+import java.io.Serializable;
+import java.util.Objects;
+
+/**
+ * A cultivar (or provenance, or a species as a whole) and its hardiness.
+ *
+ * @param id lower-case letters, digits and single hyphens; a folder name of the outputs
+ * @param name as people say it
+ * @param species botanical or common; may be empty
+ * @param organ what the lethal temperatures are for, such as {@code primary bud}; may be empty
+ * @param source where the numbers come from
+ * @param status how far they can be relied on
+ * @param model the rule that gives the lethal temperatures
+ */
+public record Cultivar(String id, String name, String species, String organ, String source, Status status,
+                       HardinessModel model) implements Serializable {
+
+    /** Longest id, in letters. */
+    public static final int LONGEST_ID = 40;
+
+    public Cultivar {
+        if (!isId(id)) {
+            throw new IllegalArgumentException("not a cultivar id: " + id);
+        }
+        Objects.requireNonNull(name);
+        Objects.requireNonNull(species);
+        Objects.requireNonNull(organ);
+        Objects.requireNonNull(source);
+        Objects.requireNonNull(status);
+        Objects.requireNonNull(model);
+    }
+
+    /** Whether a text has the form of an id. */
+    public static boolean isId(String text) {
+        return text.length() <= LONGEST_ID && text.matches("[a-z0-9]+(-[a-z0-9]+)*");
+    }
+}
