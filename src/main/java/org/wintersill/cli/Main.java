@@ -1,2 +1,73 @@
 package org.wintersill.cli;
-public final class Main { public static void main(String[] a) { } }
+
+import java.io.FileDescriptor;
+import java.io.FileOutputStream;
+import java.io.PrintStream;
+import java.nio.charset.StandardCharsets;
+import java.util.List;
+import org.wintersill.config.RunConfig;
+
+/** Where the program begins. */
+public final class Main {
+    private Main() {
+    }
+
+    public static void main(String[] arguments) {
+        PrintStream out = stream(FileDescriptor.out);
+        PrintStream err = stream(FileDescriptor.err);
+        Cancellation cancellation = new Cancellation();
+        Interruption interruption = new Interruption(cancellation);
+        interruption.watch();
+        int code;
+        try {
+            code = run(arguments, out, err, Terminal.onStandardError(), cancellation, commands());
+        } finally {
+            interruption.workEnded();
+        }
+        System.exit(code);
+    }
+
+    /** UTF-8 in every locale, so that results are the same bytes everywhere. */
+    private static PrintStream stream(FileDescriptor descriptor) {
+        return new PrintStream(new FileOutputStream(descriptor), true, StandardCharsets.UTF_8);
+    }
+
+    /** Does what the arguments say and returns the exit code; for callers within Java. */
+    public static int run(String[] arguments, PrintStream out, PrintStream err) {
+        return run(arguments, out, err, commands());
+    }
+
+    /** The same with other work behind the commands. */
+    static int run(String[] arguments, PrintStream out, PrintStream err, Commands commands) {
+        return run(arguments, out, err, false, new Cancellation(), commands);
+    }
+
+    static int run(String[] arguments, PrintStream out, PrintStream err, boolean terminal, Cancellation cancellation,
+                   Commands commands) {
+        return new Shell(new Session(commands, List.of(arguments), out, err, terminal, cancellation)).execute();
+    }
+
+    private static Commands commands() {
+        return new Commands() {
+            @Override
+            public int map(RunConfig config, MapOptions options, Console console) {
+                throw new UnsupportedOperationException("map");
+            }
+
+            @Override
+            public int plan(RunConfig config, PlanOptions options, Console console) {
+                throw new UnsupportedOperationException("plan");
+            }
+
+            @Override
+            public int inspect(InspectOptions options, Console console) {
+                throw new UnsupportedOperationException("inspect");
+            }
+
+            @Override
+            public int explain(RunConfig config, ExplainOptions options, Console console) {
+                throw new UnsupportedOperationException("explain");
+            }
+        };
+    }
+}

@@ -56,7 +56,7 @@ final class InputFinder {
                 given.add(text);
                 FilePatterns.Found found = new FilePatterns(base, endings).find(text);
                 if (found.files().isEmpty()) {
-                    checks.problems().add(Problem.input(found.what(), where(item, key), found.remedy()));
+                    checks.problems().add(Problem.input(found.what(), YamlChecks.where(item.place(), key), found.remedy()));
                 }
                 found.files().stream().filter(file -> !files.contains(file)).forEach(files::add);
             });
@@ -107,12 +107,8 @@ final class InputFinder {
         }
         String what = found.files().isEmpty() ? found.what() : "'" + text + "' stands for " + found.files().size() + " files";
         boolean folder = found.files().isEmpty() && what.startsWith("the folder");
-        checks.problems().add(Problem.input(folder ? "'" + text + "' is a folder" : what, where(value, key),
+        checks.problems().add(Problem.input(folder ? "'" + text + "' is a folder" : what, YamlChecks.where(value.place(), key),
                 folder || !found.files().isEmpty() ? "Name one file" : found.remedy()));
         return base;
-    }
-
-    private static String where(YamlValue value, String key) {
-        return value.place().startsWith("--") ? value.place() : value.place() + ", " + key;
     }
 }

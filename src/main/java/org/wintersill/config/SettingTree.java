@@ -94,7 +94,7 @@ final class SettingTree {
         return (way + "/" + text).replace('\\', java.io.File.separatorChar == '\\' ? '/' : '\\');
     }
 
-    private static boolean isAbsolute(String text) {
+    static boolean isAbsolute(String text) {
         return text.startsWith("/") || java.io.File.separatorChar == '\\'
                 && (text.startsWith("\\") || text.matches("[A-Za-z]:[/\\\\].*"));
     }

@@ -56,6 +56,12 @@ final class TemperatureSection {
         return minima.map(entry -> new TemperatureConfig(entry, maxima, means));
     }
 
+    /** One entry by itself. */
+    Optional<TemperatureEntry> entry(YamlValue.Mapping value, ForcingVariable forcing) {
+        Words nothing = new Words(Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty());
+        return entry(value, new YamlSection(value, "", checks), forcing, nothing, new LinkedHashMap<>());
+    }
+
     private Optional<TemperatureEntry> entry(YamlValue value, YamlSection parent, ForcingVariable forcing, Words forAll,
                                              Map<String, Object> parentTree) {
         String key = parent.path(forcing.word());

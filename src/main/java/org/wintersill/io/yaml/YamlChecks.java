@@ -19,6 +19,8 @@ public final class YamlChecks {
     private static final Pattern NUMBER = Pattern.compile("[-+]?(\\.[0-9]+|[0-9]+(\\.[0-9]*)?)([eE][-+]?[0-9]+)?");
     private static final Pattern COMMA_NUMBER = Pattern.compile("[-+]?[0-9]+,[0-9]+");
 
+    private static final Pattern LINE = Pattern.compile(":[0-9]+$");
+
     private final Problem.Kind kind;
     private final Problems problems;
 
@@ -38,8 +40,12 @@ public final class YamlChecks {
 
     /** Adds a problem at a place. */
     public void problem(String place, String key, String what, String remedy) {
-        String where = key.isEmpty() || place.startsWith("--") ? place : place + ", " + key;
-        problems.add(new Problem(kind, what, where, remedy));
+        problems.add(new Problem(kind, what, where(place, key), remedy));
+    }
+
+    /** Place and key; the key alone says nothing more about a value from a flag. */
+    public static String where(String place, String key) {
+        return key.isEmpty() || !LINE.matcher(place).find() ? place : place + ", " + key;
     }
 
     /** A text that says something. */

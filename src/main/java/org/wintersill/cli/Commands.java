@@ -1,0 +1,19 @@
+package org.wintersill.cli;
+
+import org.wintersill.config.RunConfig;
+
+/** The work behind the commands. Each returns an exit code and throws problems as they are. */
+public interface Commands {
+
+    /** Grids in, layers out. */
+    int map(RunConfig config, MapOptions options, Console console);
+
+    /** Everything that {@link #map} would check and decide; writes nothing. */
+    int plan(RunConfig config, PlanOptions options, Console console);
+
+    /** How input files are understood. */
+    int inspect(InspectOptions options, Console console);
+
+    /** One cell, night by night. */
+    int explain(RunConfig config, ExplainOptions options, Console console);
+}

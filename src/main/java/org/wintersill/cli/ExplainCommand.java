@@ -1,0 +1,90 @@
+package org.wintersill.cli;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.concurrent.Callable;
+import org.wintersill.config.RunConfig;
+import org.wintersill.problem.Problem;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Option;
+
+/** {@code explain}: one cell, night by night. */
+@Command(name = "explain", header = "Follow one cell through its winters, night by night.",
+        description = {"Shows the temperature of the source, the adjusted minimum, the lethal temperatures, the margin and the "
+                + "damage of every night, computed by the very code of map."},
+        footerHeading = "%nExamples:%n",
+        footer = {"  wintersill explain sample-grids/run.yaml --at-lonlat 8.25,46.5 --winter 2020-21",
+            "  wintersill explain sample-grids/run.yaml --at 2665000,1150000 --csv > cell.csv"})
+final class ExplainCommand implements Callable<Integer>, Manners.Kept {
+    private final Session session;
+
+    @Mixin
+    private RunArguments run;
+
+    @Option(names = "--at", paramLabel = "X,Y", description = "The place, in the reference system of the outputs.")
+    private String at;
+
+    @Option(names = "--at-lonlat", paramLabel = "LON,LAT", description = "The place, in degrees of longitude and latitude.")
+    private String atLonLat;
+
+    @Option(names = "--winter", paramLabel = "LABEL", description = "One winter only, such as 2021-22 (2022 in the south).")
+    private String winter;
+
+    @Option(names = "--cultivar", paramLabel = "ID", description = "One cultivar only. May be given several times.")
+    private List<String> cultivars = new ArrayList<>();
+
+    @Option(names = "--json", description = "Answer with one JSON document.")
+    private boolean json;
+
+    @Option(names = "--csv", description = "Answer with a table of comma-separated values.")
+    private boolean csv;
+
+    @Mixin
+    private Manners manners;
+
+    ExplainCommand(Session session) {
+        this.session = session;
+    }
+
+    @Override
+    public Manners manners() {
+        return manners;
+    }
+
+    @Override
+    public Integer call() {
+        return session.call(manners, console -> {
+            ExplainOptions options = options();
+            RunConfig config = run.config();
+            return session.commands().explain(config, options, console);
+        });
+    }
+
+    private ExplainOptions options() {
+        if ((at == null) == (atLonLat == null)) {
+            throw Problem.usage(at == null ? "no place is given" : "--at and --at-lonlat are both given", "",
+                    "Give either --at X,Y in the reference system of the outputs or --at-lonlat LON,LAT").asException();
+        }
+        if (json && csv) {
+            throw Problem.usage("--json and --csv are both given", "", "Keep one of the two").asException();
+        }
+        Place place = at == null ? Place.lonLat(atLonLat) : Place.parse(at, "--at", "X,Y");
+        ExplainOptions.Format format = json ? ExplainOptions.Format.JSON
+                : csv ? ExplainOptions.Format.CSV : ExplainOptions.Format.TEXT;
+        return new ExplainOptions(place.x(), place.y(), at == null, Optional.ofNullable(winter).map(ExplainCommand::label),
+                cultivars, format);
+    }
+
+    /** A winter's label; {@code 2021-2022} and {@code 2021-23} are caught here, a winter that is not in the record later. */
+    static String label(String text) {
+        boolean north = text.matches("\\d{4}-\\d{2}")
+                && (Integer.parseInt(text.substring(0, 4)) + 1) % 100 == Integer.parseInt(text.substring(5));
+        if (!north && !text.matches("\\d{4}")) {
+            throw Problem.usage("'" + text + "' is not the label of a winter", "--winter",
+                    "Write 2021-22 for the winter of 2021 to 2022, or 2022 on the southern hemisphere").asException();
+        }
+        return text;
+    }
+}

@@ -1,0 +1,71 @@
+package org.wintersill.cli;
+
+import java.util.concurrent.Callable;
+import org.wintersill.config.RunConfig;
+import org.wintersill.problem.Problem;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Option;
+
+/** {@code map}: the main job. */
+@Command(name = "map", header = "Make the layers: temperature grids in, damage and margin maps out.",
+        description = {"Reads daily minimum temperatures, brings them to the heights of a terrain model, follows every cultivar "
+                + "through every winter and writes GeoTIFF layers, a GeoPackage, tables and a record of what made them."},
+        footerHeading = "%nExamples:%n",
+        footer = {"  wintersill map sample-grids/run.yaml",
+            "  wintersill map sample-grids/run.yaml --out out-steep --set elevation.lapse-rate=6.5",
+            "  wintersill map --minimum 'sample-grids/tmin-*.nc' --dem sample-grids/dem.tif \\",
+            "      --cultivars sample-grids/cultivars.yaml --out out"})
+final class MapCommand implements Callable<Integer>, Manners.Kept {
+    private final Session session;
+
+    @Mixin
+    private RunArguments run;
+
+    @Option(names = "--overwrite", description = "Replace an earlier result in the output folder.")
+    private boolean overwrite;
+
+    @Option(names = "--resume", description = "Carry on an unfinished run in the output folder.")
+    private boolean resume;
+
+    @Option(names = "--dry-run", description = "Check and decide everything, as plan does, and write nothing.")
+    private boolean dryRun;
+
+    @Option(names = "--print-config", description = "Print the whole configuration with defaults as a run file, and stop. Save it "
+            + "beside the run file: its paths are relative to that folder.")
+    private boolean printConfig;
+
+    @Option(names = "--json", description = "Tell the result as one JSON document on standard output.")
+    private boolean json;
+
+    @Mixin
+    private Manners manners;
+
+    MapCommand(Session session) {
+        this.session = session;
+    }
+
+    @Override
+    public Manners manners() {
+        return manners;
+    }
+
+    @Override
+    public Integer call() {
+        return session.call(manners, console -> {
+            if (overwrite && resume) {
+                throw Problem.usage("--overwrite and --resume are both given", "", "Keep --resume to carry on, --overwrite to begin "
+                        + "anew").asException();
+            }
+            RunConfig config = run.config();
+            if (printConfig) {
+                console.result(config.toYaml());
+                return ExitCode.DONE;
+            }
+            if (dryRun) {
+                return session.commands().plan(config, new PlanOptions(json), console);
+            }
+            return session.commands().map(config, new MapOptions(overwrite, resume, json, session.arguments()), console);
+        });
+    }
+}
