@@ -16,8 +16,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import org.sqlite.SQLiteConfig;
-import org.sqlite.SQLiteErrorCode;
-import org.sqlite.SQLiteException;
 import org.wintersill.problem.Problem;
 import org.wintersill.problem.ProblemException;
 
@@ -43,7 +41,7 @@ public final class GeoPackageWriter implements AutoCloseable {
     private final Connection connection;
     private final Map<Integer, CrsRow> systems = new LinkedHashMap<>();
     private final Map<String, FeatureTable> tables = new LinkedHashMap<>();
-    private final Map<String, Constraint> constraints = new LinkedHashMap<>();
+    private final ColumnDescriptions columns = new ColumnDescriptions(this);
     private final Set<String> styledTables = new LinkedHashSet<>();
     private boolean hasMetadata;
     private boolean closed;
@@ -85,7 +83,7 @@ public final class GeoPackageWriter implements AutoCloseable {
             if (writer != null) {
                 writer.close();
             }
-            throw problem(file, e);
+            throw WritingProblem.of(file, e);
         }
     }
 
@@ -158,38 +156,11 @@ public final class GeoPackageWriter implements AutoCloseable {
                         table.geometryType(), table.srsId());
                 extension(table.name(), "geom", "gpkg_rtree_index", StandardTables.RTREE, "write-only");
             }
-            Set<String> names = new LinkedHashSet<>();
-            for (Column column : table.columns()) {
-                // Some programs show "name" as heading, some "title"; the former must differ from column to column.
-                describe(table.name(), column, names.add(column.heading()) ? column.heading() : column.name());
-            }
+            columns.describe(table);
             tables.put(table.name(), made);
             return made;
         } catch (SQLException e) {
             throw problem(e);
-        }
-    }
-
-    private void describe(String table, Column column, String name) throws SQLException {
-        Constraint constraint = column.constraint();
-        insert("INSERT INTO gpkg_data_columns VALUES (?, ?, ?, ?, ?, NULL, ?)", table, column.name(), name,
-                column.heading(), column.fullDescription(), constraint == null ? null : constraint.name());
-        if (constraint == null) {
-            return;
-        }
-        Constraint present = constraints.putIfAbsent(constraint.name(), constraint);
-        if (present != null) {
-            if (!present.equals(constraint)) {
-                throw new IllegalArgumentException("two constraints are called " + constraint.name());
-            }
-        } else if (constraint instanceof Constraint.Range range) {
-            insert("INSERT INTO gpkg_data_column_constraints VALUES (?, 'range', NULL, ?, 1, ?, 1, ?)", range.name(),
-                    range.min(), range.max(), range.description());
-        } else if (constraint instanceof Constraint.Enumeration list) {
-            for (Constraint.Value value : list.values()) {
-                insert("INSERT INTO gpkg_data_column_constraints VALUES (?, 'enum', ?, NULL, NULL, NULL, NULL, ?)",
-                        list.name(), value.value(), value.description());
-            }
         }
     }
 
@@ -274,7 +245,7 @@ public final class GeoPackageWriter implements AutoCloseable {
             closed = true;
         } catch (SQLException | IOException e) {
             close();
-            throw problem(file, e);
+            throw WritingProblem.of(file, e);
         }
     }
 
@@ -313,7 +284,7 @@ public final class GeoPackageWriter implements AutoCloseable {
         insert("INSERT INTO gpkg_extensions VALUES (?, ?, ?, ?, ?)", table, column, name, definition, scope);
     }
 
-    private void insert(String sql, Object... values) throws SQLException {
+    void insert(String sql, Object... values) throws SQLException {
         try (PreparedStatement statement = connection.prepareStatement(sql)) {
             for (int i = 0; i < values.length; i++) {
                 statement.setObject(i + 1, values[i]);
@@ -323,20 +294,6 @@ public final class GeoPackageWriter implements AutoCloseable {
     }
 
     ProblemException problem(SQLException e) {
-        return problem(file, e);
-    }
-
-    private static ProblemException problem(Path file, Exception e) {
-        SQLiteErrorCode code = e instanceof SQLiteException sqlite ? sqlite.getResultCode() : null;
-        if (code == SQLiteErrorCode.SQLITE_FULL) {
-            return Problem.output("The disk is full or the quota is used up", file.toString(),
-                    "Free some space or choose another output folder").asException(e);
-        }
-        if (code == SQLiteErrorCode.SQLITE_TOOBIG) {
-            return Problem.limit("One geometry is larger than a GeoPackage row can be (1 GB)", file.toString(),
-                    "Write the parts of each class as rows of their own (parts: true)").asException(e);
-        }
-        return Problem.output("The GeoPackage cannot be written: " + e.getMessage(), file.toString(),
-                "Check that the folder exists, may be written to and has space").asException(e);
+        return WritingProblem.of(file, e);
     }
 }

@@ -252,6 +252,19 @@ class GeoPackageWriterTest {
         }
     }
 
+    @Test
+    void columnsOfOneTitleKeepDifferentNames() throws Exception {
+        Path file = folder.resolve("a.gpkg");
+        try (GeoPackageWriter writer = GeoPackageWriter.create(file, SampleGeoPackage.LAST_CHANGE)) {
+            writer.features(TableDefinition.attributes("t", "t", "t",
+                    List.of(Column.text("a", "Same", "a"), Column.text("b", "Same", "b"))));
+            writer.finish();
+        }
+        try (Reading in = new Reading(file)) {
+            assertEquals(List.of("Same", "b"), in.column("SELECT name FROM gpkg_data_columns ORDER BY rowid"));
+        }
+    }
+
     /** A finished file, opened read-only. */
     private static final class Reading implements AutoCloseable {
         private final Connection connection;
