@@ -199,6 +199,8 @@ def good():
     Grid("incompressible.nc", noise * 0.5, fmt="NETCDF4", type="i1", fill=np.int8(-128), raw=noise,
          atts=dict(units="degC", standard_name="air_temperature", cell_methods="time: minimum", scale_factor=0.5),
          create=dict(zlib=True, complevel=1, shuffle=False, chunksizes=(1, 4, 5))).write().expect()
+    with h5py.File(path("incompressible.nc"), "r+") as f:
+        f["tasmin"].id.write_direct_chunk((2, 0, 0), noise[2].tobytes(), filter_mask=1)
     sparse = truth()
     sparse[2:4] = np.nan
     nc = netCDF4.Dataset(path("unwritten-chunks.nc"), "w")

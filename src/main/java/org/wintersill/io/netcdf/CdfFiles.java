@@ -41,14 +41,15 @@ final class CdfFiles {
                 return ClassicHeader.read(path, version);
             }
             if (isHdf5(head)) {
-                return hdf5(path, size);
+                return HdfHeader.read(path, size);
             }
             throw UnknownContent.describe(path, head).asException();
         } catch (IOException e) {
             throw CdfProblems.unreadable(path, e);
         } catch (ProblemException e) {
             throw e;
-        } catch (RuntimeException | StackOverflowError e) {
+        } catch (RuntimeException | StackOverflowError | OutOfMemoryError e) {
+            // jHDF allocates and recurses by what a damaged header says; the attempt is over and its memory free again
             throw CdfProblems.damaged(path, "its header cannot be decoded", e);
         }
     }
@@ -56,21 +57,6 @@ final class CdfFiles {
     private static byte[] head(Path path) throws IOException {
         try (java.io.InputStream in = Files.newInputStream(path)) {
             return in.readNBytes(64);
-        }
-    }
-
-    private static CdfHeader hdf5(Path path, long size) {
-        try {
-            return HdfHeader.read(path, size);
-        } catch (ProblemException e) {
-            throw e;
-        } catch (RuntimeException | StackOverflowError first) {
-            try {
-                return ForeignHeader.read(path, size);
-            } catch (IOException | RuntimeException | StackOverflowError second) {
-                first.addSuppressed(second);
-                throw CdfProblems.damaged(path, "its HDF5 structure cannot be decoded", first);
-            }
         }
     }
 }

@@ -9,8 +9,10 @@ import io.jhdf.api.Node;
 import io.jhdf.object.datatype.DataType;
 import io.jhdf.object.datatype.FixedPoint;
 import io.jhdf.object.datatype.FloatingPoint;
+import java.io.IOException;
 import java.lang.reflect.Array;
 import java.nio.ByteOrder;
+import java.nio.channels.FileChannel;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -18,6 +20,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
+import org.wintersill.problem.ProblemException;
 
 /**
  * Reads the metadata of netCDF-4 files, which are HDF5 files with dimension scales. Links that lead out of the file are
@@ -33,6 +36,7 @@ final class HdfHeader {
     private static final String PURE_DIMENSION = "This is a netCDF dimension but not a netCDF variable";
     private static final String NON_COORDINATE = "_nc4_non_coord_";
     private static final long ATTRIBUTE_LIMIT = 16 << 20;
+    static final String UNDECODED = "its description in the file cannot be decoded";
     private static final long LABEL_LIMIT = 64 << 10;
 
     private final HdfFile file;
@@ -47,8 +51,11 @@ final class HdfHeader {
     }
 
     /** @throws RuntimeException of jHDF's where it does not understand the file */
-    static CdfHeader read(Path path, long fileSize) {
-        try (HdfFile file = new HdfFile(path)) {
+    static CdfHeader read(Path path, long fileSize) throws IOException {
+        // the channel is ours so that it is closed even where jHDF gives up half way; there is nothing else to close, and
+        // HdfFile.close() of 0.13 fails for a file that it did not open itself
+        try (FileChannel channel = new BoundedChannel(path)) {
+            HdfFile file = new HdfFile(channel);
             long promised = file.getHdfBackingStorage().getSuperblock().getEndOfFileAddress();
             if (promised > fileSize) {
                 throw CdfProblems.truncated(path, promised, fileSize);
@@ -67,8 +74,8 @@ final class HdfHeader {
         }
         Map<String, CdfVariable> variables = new LinkedHashMap<>();
         for (Dataset dataset : datasets) {
-            if (!isPureDimension(dataset)) {
-                CdfVariable variable = variable(dataset);
+            CdfVariable variable = described(dataset);
+            if (variable != null) {
                 variables.put(variable.name(), variable);
             }
         }
@@ -89,6 +96,18 @@ final class HdfHeader {
         return dataset.getAttributes().get(name);
     }
 
+    /** The variable, or null for a mere dimension. One that jHDF cannot describe must not make the others unreadable. */
+    private CdfVariable described(Dataset dataset) {
+        try {
+            return isPureDimension(dataset) ? null : variable(dataset);
+        } catch (ProblemException e) {
+            throw e;
+        } catch (RuntimeException e) {
+            return new CdfVariable(plainName(dataset.getName()), RawType.OTHER, true, List.of(), new int[0], Map.of(),
+                    new Storage.Unreadable(UNDECODED));
+        }
+    }
+
     private CdfVariable variable(Dataset dataset) {
         DataType dataType = dataset.getDataType();
         RawType type = rawType(dataType);
@@ -103,7 +122,7 @@ final class HdfHeader {
             }
         }
         ObjectHeader header = ((AbstractNode) dataset).getHeader();
-        Storage storage = type.isNumeric() ? new HdfStorage(file, fileSize).of(dataset, header, shape, type)
+        Storage storage = type.isNumeric() ? new HdfStorage(file, path, fileSize).of(dataset, header, shape, type)
                 : labels(dataset, shape);
         return new CdfVariable(plainName(dataset.getName()), type, isLittleEndian(dataType), dimensions(dataset, shape.length),
                 shape, attributes, storage);

@@ -11,6 +11,7 @@ import io.jhdf.dataset.chunked.ChunkedDatasetV3;
 import io.jhdf.dataset.chunked.ChunkedDatasetV4;
 import io.jhdf.object.message.FilterPipelineMessage;
 import java.nio.ByteBuffer;
+import java.nio.file.Path;
 import java.util.Collection;
 import java.util.List;
 import java.util.Map;
@@ -22,10 +23,12 @@ final class HdfStorage {
     private static final long UNDEFINED = -1;
 
     private final HdfFile file;
+    private final Path path;
     private final long fileSize;
 
-    HdfStorage(HdfFile file, long fileSize) {
+    HdfStorage(HdfFile file, Path path, long fileSize) {
         this.file = file;
+        this.path = path;
         this.fileSize = fileSize;
     }
 
@@ -91,7 +94,7 @@ final class HdfStorage {
         }
         long begin = address + file.getUserBlockSize();
         if (begin < 0 || begin + size > fileSize) {
-            throw CdfProblems.truncated(file.getFileAsPath(), begin + size, fileSize);
+            throw CdfProblems.truncated(path, begin + size, fileSize);
         }
         int outer = shape.length == 0 || shape[0] == 0 ? 1 : shape[0];
         return new Storage.Contiguous(begin, size / outer);
@@ -163,7 +166,7 @@ final class HdfStorage {
             }
             long begin = address + file.getUserBlockSize();
             if (begin < 0 || entry.getSize() < 0 || begin + entry.getSize() > fileSize) {
-                throw CdfProblems.truncated(file.getFileAsPath(), begin + entry.getSize(), fileSize);
+                throw CdfProblems.truncated(path, begin + entry.getSize(), fileSize);
             }
             long[] offset = entry.getChunkOffset();
             int place = 0;

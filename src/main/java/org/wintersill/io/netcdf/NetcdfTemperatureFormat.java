@@ -77,10 +77,8 @@ public final class NetcdfTemperatureFormat implements TemperatureFormat {
         GridPlacement placement = horizontal.place(header, reader, variable, new CrsReading(crsParser, request.crs()), notices);
         sample(header, variable, order, packing, unit, placement, days);
         StorageLayout layout = placement.layout(variable, order, days.inOrder());
-        Unpacker unpacker = new Unpacker(packing, variable.littleEndian(), unit.factor(), unit.shift(), UnitChoice.COLDEST,
-                UnitChoice.WARMEST);
         SourceFile description = description(header, variable, days, packing, unit, placement, request);
-        return new NetcdfTemperatureSource(header, variable, order, unpacker, placement, days, layout, request.forcing(),
+        return new NetcdfTemperatureSource(header, variable, order, packing, unit, placement, days, layout, request.forcing(),
                 description);
     }
 
@@ -160,6 +158,6 @@ public final class NetcdfTemperatureFormat implements TemperatureFormat {
         if (variable.storage() instanceof Storage.Chunked chunked) {
             return dimensions + " in chunks of " + Arrays.toString(chunked.chunk()) + chunked.filterNames();
         }
-        return dimensions + (variable.storage() instanceof Storage.Contiguous ? " uncompressed" : " read through NetCDF-Java");
+        return dimensions + (variable.storage() instanceof Storage.Contiguous ? " uncompressed" : "");
     }
 }

@@ -7,6 +7,7 @@ import org.wintersill.temperature.DailyTemperatureSource;
 import org.wintersill.temperature.ForcingVariable;
 import org.wintersill.temperature.SourceFile;
 import org.wintersill.temperature.StorageLayout;
+import org.wintersill.temperature.TemperatureUnit;
 import org.wintersill.time.DayAxis;
 
 /** A daily record in one netCDF file. Immutable. */
@@ -14,21 +15,23 @@ final class NetcdfTemperatureSource implements DailyTemperatureSource {
     private final CdfHeader header;
     private final CdfVariable forcingVariable;
     private final Slabs.Order order;
-    private final Unpacker unpacker;
+    private final Packing packing;
+    private final TemperatureUnit unit;
     private final GridPlacement placement;
     private final RecordDays days;
     private final StorageLayout layout;
     private final ForcingVariable forcing;
     private final SourceFile description;
 
-    NetcdfTemperatureSource(CdfHeader header, CdfVariable variable, Slabs.Order order, Unpacker unpacker,
-                            GridPlacement placement, RecordDays days, StorageLayout layout, ForcingVariable forcing,
+    NetcdfTemperatureSource(CdfHeader header, CdfVariable variable, Slabs.Order order, Packing packing,
+                            TemperatureUnit unit, GridPlacement placement, RecordDays days, StorageLayout layout, ForcingVariable forcing,
                             SourceFile description) {
         // coordinates were read; of the header only what readers need is kept
         this.header = new CdfHeader(header.path(), header.format(), header.fileSize(), java.util.Map.of());
         this.forcingVariable = variable;
         this.order = order;
-        this.unpacker = unpacker;
+        this.packing = packing;
+        this.unit = unit;
         this.placement = placement;
         this.days = days;
         this.layout = layout;
@@ -63,6 +66,9 @@ final class NetcdfTemperatureSource implements DailyTemperatureSource {
 
     @Override
     public DailyTemperatureReader open() {
+        // made anew for each reader: its table would add up over thousands of files that are not open
+        Unpacker unpacker = new Unpacker(packing, forcingVariable.littleEndian(), unit.factor(), unit.shift(),
+                UnitChoice.COLDEST, UnitChoice.WARMEST);
         return new NetcdfTemperatureReader(header.path(), Slabs.open(header, forcingVariable, order, unpacker), placement,
                 days.records());
     }

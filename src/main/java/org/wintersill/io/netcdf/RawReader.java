@@ -201,8 +201,6 @@ final class RawReader implements AutoCloseable {
             System.arraycopy(inline.bytes(), 0, bytes, 0, Math.min(bytes.length, inline.bytes().length));
         } else if (variable.storage() instanceof Storage.Chunked chunked) {
             missing = gather(variable, chunked, bytes);
-        } else if (variable.storage() instanceof Storage.Foreign) {
-            return ForeignHeader.all(path, variable);
         } else if (variable.storage() instanceof Storage.Unreadable unreadable) {
             throw CdfLimits.unreadable(path, variable, unreadable);
         }

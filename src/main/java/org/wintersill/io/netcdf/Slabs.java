@@ -41,9 +41,6 @@ interface Slabs extends AutoCloseable {
         if (storage instanceof Storage.Contiguous contiguous) {
             return new ContiguousSlabs(new RawReader(header), variable, contiguous, order, unpacker);
         }
-        if (storage instanceof Storage.Foreign) {
-            return new ForeignSlabs(header, variable, order, unpacker);
-        }
         String reason = storage instanceof Storage.Unreadable unreadable ? unreadable.reason()
                 : "it is kept inside the header";
         throw CdfLimits.unreadable(header.path(), variable, new Storage.Unreadable(reason));

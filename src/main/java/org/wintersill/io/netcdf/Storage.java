@@ -53,10 +53,6 @@ sealed interface Storage {
     record Labels(List<String> texts) implements Storage {
     }
 
-    /** Values that NetCDF-Java reads for us, by variable name. */
-    record Foreign() implements Storage {
-    }
-
     /** Values that cannot be read, and why: a clause for a message. */
     record Unreadable(String reason) implements Storage {
     }

@@ -104,9 +104,15 @@ final class VariableChoice {
         return found;
     }
 
-    private ProblemException refusal(String what) {
+    private ProblemException refusal(String reason) {
+        String what = reason;
         String list = candidates.stream().limit(12).map(v -> v.name() + v.text("cell_methods").map(m -> " (" + m + ")")
                 .orElse(v.text("units").map(u -> " (" + u + ")").orElse(""))).collect(Collectors.joining(", "));
+        String undecoded = header.all().stream().filter(v -> v.storage() instanceof Storage.Unreadable u
+                && u.reason().equals(HdfHeader.UNDECODED)).map(CdfVariable::name).collect(Collectors.joining(", "));
+        if (!undecoded.isEmpty()) {
+            what += "; the description of " + undecoded + " cannot be decoded";
+        }
         String has = candidates.isEmpty() ? "; the file has no gridded variable in its root group" : "; the file has: " + list;
         return Problem.input(what + has, header.path().toString(),
                 candidates.isEmpty() ? "Check that it is the right file" : "Name the right one with variable").asException();

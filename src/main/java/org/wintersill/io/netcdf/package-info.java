@@ -2,8 +2,8 @@
  * <b>Purpose.</b> Reads daily temperatures and ground heights from netCDF files that follow the CF conventions, more or
  * less: classic, 64-bit offset, 64-bit data (CDF-5) and netCDF-4/HDF5.
  *
- * <p><b>May depend on.</b> {@code grid}, {@code time}, {@code temperature}, {@code elevation}, {@code problem}; jHDF and
- * NetCDF-Java, which nobody else sees.
+ * <p><b>May depend on.</b> {@code grid}, {@code time}, {@code temperature}, {@code elevation}, {@code problem}; jHDF,
+ * which nobody else sees.
  *
  * <p><b>Conventions.</b> A header ({@link org.wintersill.io.netcdf.CdfHeader}) is read first and kept; values are read
  * later, piece by piece, in the file's own order and type, and become north-up degrees Celsius with NaN for missing in

@@ -4,21 +4,21 @@ import java.io.IOException;
 import java.nio.file.Path;
 import ucar.nc2.NetcdfFile;
 
-/** Variables that NetCDF-Java reads for us. Slow, but for files that nobody else understands. */
-final class ForeignSlabs implements Slabs {
+/** Values as NetCDF-Java reads them: a second opinion for tests. */
+final class NetcdfJavaSlabs implements Slabs {
     private final Path path;
     private final NetcdfFile file;
     private final CdfVariable variable;
     private final Order order;
     private final Unpacker unpacker;
 
-    ForeignSlabs(CdfHeader header, CdfVariable variable, Order order, Unpacker unpacker) {
+    NetcdfJavaSlabs(CdfHeader header, CdfVariable variable, Order order, Unpacker unpacker) {
         this.path = header.path();
         this.variable = variable;
         this.order = order;
         this.unpacker = unpacker;
         try {
-            file = ForeignHeader.open(path);
+            file = NetcdfJavaHeader.open(path);
         } catch (IOException | RuntimeException e) {
             throw CdfProblems.damaged(path, "its HDF5 structure cannot be decoded", e);
         }
@@ -39,7 +39,7 @@ final class ForeignSlabs implements Slabs {
             origin[order.x()] = box.column();
             shape[order.y()] = box.rows();
             shape[order.x()] = box.columns();
-            double[] values = ForeignHeader.box(file, path, variable, origin, shape);
+            double[] values = NetcdfJavaHeader.box(file, path, variable, origin, shape);
             int rowStride = order.y() < order.x() ? box.columns() : 1;
             int columnStride = order.y() < order.x() ? 1 : box.rows();
             for (int j = 0; j < box.rows(); j++) {

@@ -14,15 +14,15 @@ import ucar.nc2.Dimension;
 import ucar.nc2.NetcdfFile;
 import ucar.nc2.Variable;
 
-/** Second reader of HDF5 files, NetCDF-Java, for those that jHDF does not understand. */
-final class ForeignHeader {
+/** Headers as NetCDF-Java understands them: a second opinion for tests. */
+final class NetcdfJavaHeader {
 
     static {
         // without this NetCDF-Java reads wrong values from classic files that were cut short
         System.setProperty("ucar.nc2.iosp.netcdf3.N3header.disallowFileTruncation", "true");
     }
 
-    private ForeignHeader() {
+    private NetcdfJavaHeader() {
     }
 
     /** Opens a file without interpreting it. */
@@ -60,7 +60,7 @@ final class ForeignHeader {
             }
         }
         RawType type = type(variable.getDataType(), variable.isUnsigned());
-        Storage storage = type.isNumeric() ? new Storage.Foreign()
+        Storage storage = type.isNumeric() ? new Storage.Unreadable("read by NetCDF-Java")
                 : new Storage.Unreadable("its values are no plain numbers");
         return new CdfVariable(variable.getShortName(), type, true, List.copyOf(dimensions), variable.getShape(), attributes,
                 storage);
@@ -78,16 +78,6 @@ final class ForeignHeader {
             default -> RawType.OTHER;
         };
         return unsigned ? signed.unsigned() : signed;
-    }
-
-    /** All values of a small variable. */
-    static double[] all(Path path, CdfVariable variable) {
-        CdfLimits.smallSize(path, variable);
-        try (NetcdfFile file = open(path)) {
-            return numbers(find(file, path, variable).read(), variable);
-        } catch (IOException | RuntimeException e) {
-            throw CdfProblems.damaged(path, "variable '" + variable.name() + "' cannot be decoded", e);
-        }
     }
 
     /** A box of values, in the order of the file. */
