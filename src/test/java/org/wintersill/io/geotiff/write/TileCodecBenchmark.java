@@ -21,8 +21,8 @@ import org.wintersill.layer.SampleType;
 
 /**
  * Time to compress and to read one tile of 256 x 256 values. MB/s = 65536 x bytes a value / time. Run it with
- * {@code mvn test-compile exec:java -Dexec.classpathScope=test
- * -Dexec.mainClass=org.wintersill.io.geotiff.write.TileCodecBenchmark}.
+ * {@code mvn test-compile exec:exec -Dexec.classpathScope=test -Dexec.executable=java
+ * -Dexec.args="-cp %classpath org.wintersill.io.geotiff.write.TileCodecBenchmark"}.
  */
 @State(Scope.Thread)
 @BenchmarkMode(Mode.AverageTime)
