@@ -2,15 +2,19 @@ package org.wintersill.config;
 
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import org.wintersill.io.yaml.YamlChecks;
 import org.wintersill.io.yaml.YamlReader;
 import org.wintersill.io.yaml.YamlSection;
 import org.wintersill.io.yaml.YamlValue;
 import org.wintersill.problem.Problem;
+import org.wintersill.problem.ProblemException;
 import org.wintersill.problem.Problems;
 
 /**
@@ -21,6 +25,7 @@ import org.wintersill.problem.Problems;
  */
 public final class ConfigReader {
     private static final String DEFAULT_TITLE = "Untitled run";
+    private static final Pattern LINE = Pattern.compile(":([0-9]{1,8})(, [^:]*)?$");
 
     private final Path base;
     private final Problems problems = new Problems();
@@ -88,9 +93,21 @@ public final class ConfigReader {
         LimitConfig limits = OutputSections.limits(section(top, "limits"), tree("limits"));
         top.later("scenario", "parcels");
         top.finish();
-        problems.throwIfAny();
+        throwInOrder();
         return new RunConfig(runFile, base, title, temperature.orElseThrow(), elevation, winter, missingDays, cultivars, damage,
                 statistics, classes, area, outputs, limits, effective);
+    }
+
+    /** All problems, those of the run file by line. */
+    private void throwInOrder() {
+        if (!problems.isEmpty()) {
+            throw new ProblemException(problems.all().stream().sorted(Comparator.comparingInt(ConfigReader::line)).toList());
+        }
+    }
+
+    private static int line(Problem problem) {
+        Matcher matcher = LINE.matcher(problem.where());
+        return matcher.find() ? Integer.parseInt(matcher.group(1)) : 0;
     }
 
     /** The section of a key; one without keys if it is not given. */

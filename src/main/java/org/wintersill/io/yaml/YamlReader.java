@@ -10,11 +10,15 @@ import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.regex.Pattern;
 import org.snakeyaml.engine.v2.api.LoadSettings;
 import org.snakeyaml.engine.v2.api.lowlevel.Parse;
+import org.snakeyaml.engine.v2.exceptions.Mark;
 import org.snakeyaml.engine.v2.exceptions.MarkedYamlEngineException;
-import org.snakeyaml.engine.v2.exceptions.YamlEngineException;
 import org.snakeyaml.engine.v2.exceptions.ReaderException;
+import org.snakeyaml.engine.v2.exceptions.YamlEngineException;
+import org.snakeyaml.engine.v2.exceptions.YamlVersionException;
+import org.wintersill.problem.NearestName;
 import org.wintersill.problem.Problem;
 import org.wintersill.problem.ProblemException;
 
@@ -22,6 +26,8 @@ import org.wintersill.problem.ProblemException;
 public final class YamlReader {
     /** No run file or list of cultivars comes near it (assumed). */
     static final int LARGEST_FILE = 4 * 1024 * 1024;
+
+    private static final Pattern UNQUOTED_PATTERN = Pattern.compile("(^|[\\[,:-])\\s*\\*");
 
     private final Problem.Kind kind;
 
@@ -66,10 +72,13 @@ public final class YamlReader {
         } catch (MarkedYamlEngineException e) {
             String place = e.getProblemMark().or(e::getContextMark)
                     .map(mark -> EventTree.place(name, mark.getLine() + 1)).orElse(name);
-            throw problem("this is not YAML: " + plain(e.getProblem()), place, hint(e.getProblem(), text)).asException(e);
+            throw problem("this is not YAML: " + plain(e.getProblem()), place,
+                    hint(e.getProblem(), text, e.getProblemMark().or(e::getContextMark).map(Mark::getLine).orElse(0))).asException(e);
         } catch (ReaderException e) {
             throw problem("there is a character that YAML does not allow (code " + e.getCodePoint() + ")",
                     EventTree.place(name, lineOf(text, e.getPosition())), "Save the file as plain UTF-8 text").asException(e);
+        } catch (YamlVersionException e) {
+            throw problem("only YAML 1.2 is read", EventTree.place(name, 1), "Remove the line that begins with %YAML").asException(e);
         } catch (YamlEngineException e) {
             throw problem("this is not YAML: " + plain(e.getMessage()), name, "").asException(e);
         }
@@ -91,22 +100,22 @@ public final class YamlReader {
     }
 
     private static String plain(String message) {
-        String oneLine = message == null ? "" : message.replaceAll("\\s+", " ").trim();
+        String oneLine = message == null ? "" : message.replaceAll("\\(Do not use .*", "").replaceAll("\\s+", " ").trim();
         return oneLine.endsWith(".") ? oneLine.substring(0, oneLine.length() - 1) : oneLine;
     }
 
-    private static String hint(String message, String text) {
-        if (message != null && message.contains("'\\t'") || text.lines().anyMatch(line -> line.startsWith("\t"))) {
+    private static String hint(String message, String text, int line) {
+        String there = text.lines().skip(line).findFirst().orElse("");
+        if (there.startsWith("\t")) {
             return "Indent with blanks, not with tabs";
+        }
+        if (UNQUOTED_PATTERN.matcher(there).find()) {
+            return "A text that begins with * (such as the pattern *.nc) needs quotation marks: '*.nc'";
         }
         if (message != null && message.contains("mapping values are not allowed")) {
             return "Check the indentation, and put texts that contain ': ' in quotation marks";
         }
-        if (message != null && message.contains("found undefined alias")) {
-            return "A text that begins with * (such as the pattern *.nc) needs quotation marks: '*.nc'";
-        }
-        return text.contains("*") ? "Check the brackets and the indentation; a text that begins with * needs quotation marks"
-                : "Check the brackets, the quotation marks and the indentation";
+        return "Check the brackets, the quotation marks and the indentation";
     }
 
     private static String nearby(Path file) {
@@ -116,7 +125,7 @@ public final class YamlReader {
         }
         String name = String.valueOf(file.getFileName());
         List<String> names = Neighbours.names(folder);
-        return org.wintersill.problem.NearestName.of(name, names).map(near -> "Did you mean " + near + "?")
+        return NearestName.of(name, names).map(near -> "Did you mean " + near + "?")
                 .orElse("Check the path");
     }
 
