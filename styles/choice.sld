@@ -12,13 +12,13 @@
           <RasterSymbolizer>
             <Opacity>1</Opacity>
             <ColorMap type="values">
-              <ColorMapEntry color="#5f5550" quantity="1" label="no cultivar" opacity="1"/>
-              <ColorMapEntry color="#efe8c8" quantity="2" label="1 cultivar" opacity="1"/>
-              <ColorMapEntry color="#aeccab" quantity="3" label="2 cultivars" opacity="1"/>
-              <ColorMapEntry color="#77aba0" quantity="4" label="3 cultivars" opacity="1"/>
-              <ColorMapEntry color="#3f89a0" quantity="5" label="4 cultivars" opacity="1"/>
-              <ColorMapEntry color="#32648e" quantity="6" label="5 cultivars" opacity="1"/>
-              <ColorMapEntry color="#20407c" quantity="7" label="6 cultivars" opacity="1"/>
+              <ColorMapEntry color="#5f5550" quantity="0" label="no cultivar" opacity="1"/>
+              <ColorMapEntry color="#efe8c8" quantity="1" label="1 cultivar" opacity="1"/>
+              <ColorMapEntry color="#aeccab" quantity="2" label="2 cultivars" opacity="1"/>
+              <ColorMapEntry color="#77aba0" quantity="3" label="3 cultivars" opacity="1"/>
+              <ColorMapEntry color="#3f89a0" quantity="4" label="4 cultivars" opacity="1"/>
+              <ColorMapEntry color="#32648e" quantity="5" label="5 cultivars" opacity="1"/>
+              <ColorMapEntry color="#20407c" quantity="6" label="6 cultivars" opacity="1"/>
             </ColorMap>
           </RasterSymbolizer>
         </Rule>

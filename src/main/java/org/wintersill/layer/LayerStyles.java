@@ -123,7 +123,8 @@ public final class LayerStyles {
     }
 
     /**
-     * How many cultivars meet the target. With more than six, neighbouring counts share a colour.
+     * How many cultivars meet the target; the number of a class is the count itself, from 0, since the layer is stored as
+     * floats. With more than six, neighbouring counts share a colour.
      *
      * @param cultivars number of cultivars that were compared, 1 to 254
      */
@@ -132,18 +133,13 @@ public final class LayerStyles {
             throw new IllegalArgumentException("a class layer holds up to 254 cultivars, not " + cultivars);
         }
         List<LayerStyle.Entry> entries = new ArrayList<>();
-        entries.add(new LayerStyle.Entry(choiceCode(0), "none", "no cultivar", Colour.hex(NO_CULTIVAR)));
+        entries.add(new LayerStyle.Entry(0, "none", "no cultivar", Colour.hex(NO_CULTIVAR)));
         for (int count = 1; count <= cultivars; count++) {
             String colour = CHOICE[spread(count - 1, cultivars, CHOICE.length)];
-            entries.add(new LayerStyle.Entry(choiceCode(count), Integer.toString(count),
+            entries.add(new LayerStyle.Entry(count, Integer.toString(count),
                     count == 1 ? "1 cultivar" : count + " cultivars", Colour.hex(colour)));
         }
         return new LayerStyle.Classes("choice", "Cultivars that meet the target", entries);
-    }
-
-    /** Stored number of the class {@code count cultivars}: one more than the count, since 0 stands for "missing". */
-    public static int choiceCode(int count) {
-        return count + 1;
     }
 
     /** One style of each kind, in a fixed order; styles made to measure stand here in their usual size. */

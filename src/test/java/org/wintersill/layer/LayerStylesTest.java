@@ -182,7 +182,7 @@ class LayerStylesTest {
             List<LayerStyle.Entry> entries = LayerStyles.choice(cultivars).entries();
             assertEquals(cultivars + 1, entries.size());
             for (int count = 0; count <= cultivars; count++) {
-                assertEquals(LayerStyles.choiceCode(count), entries.get(count).code());
+                assertEquals(count, entries.get(count).code());
             }
         }
         assertThrows(IllegalArgumentException.class, () -> LayerStyles.choice(0));
