@@ -2,25 +2,25 @@ package org.wintersill.grid;
 
 import java.util.Map;
 
-/**
- * Port: understands what files say about their coordinate reference system.
- *
- * <p>All methods throw {@link org.wintersill.problem.ProblemException} when the definition is not understood.
- */
+/** Port: turns the ways in which files and people name a coordinate reference system into a {@link Crs}. */
 public interface CrsParser {
 
-    /** The system of an authority code such as {@code EPSG:4326}. */
+    /**
+     * @param code authority and code such as {@code EPSG:2056}
+     * @throws org.wintersill.problem.ProblemException when the code is unknown
+     */
     Crs fromCode(String code);
 
-    /** The system of a definition in WKT 1 or WKT 2. */
+    /**
+     * @param wkt definition as WKT 1 or WKT 2
+     * @throws org.wintersill.problem.ProblemException when the text is damaged or its projection is not known
+     */
     Crs fromWkt(String wkt);
 
     /**
-     * The system of a CF grid mapping variable.
-     *
-     * @param attributes attributes by name; a value is a String, a Double, or a double[] where there are several numbers
-     * @param metresPerAxisUnit length in metres of one unit of the projected axes, in which false easting and northing
-     *                          are given too; 1 for angles
+     * @param attributes attributes of a CF grid-mapping variable: numbers, arrays of numbers or texts
+     * @param metresPerAxisUnit length in metres of one unit of the coordinate axes; 1 for degrees
+     * @throws org.wintersill.problem.ProblemException when the mapping is unknown or incomplete
      */
     Crs fromGridMapping(Map<String, Object> attributes, double metresPerAxisUnit);
 }
