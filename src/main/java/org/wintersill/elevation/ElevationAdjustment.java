@@ -16,7 +16,7 @@ public final class ElevationAdjustment {
     private final float[] sourceHeights;
     private final float[] targetHeights;
     private final LapseRates lapseRates;
-    private final float[] heightGain;
+    private final float[][] heightGain;
 
     private ElevationAdjustment(SourcePositions positions, float[] sourceHeights, float[] targetHeights, LapseRates lapseRates) {
         this.positions = positions;
@@ -54,15 +54,17 @@ public final class ElevationAdjustment {
         return new ElevationAdjustment(new SourcePositions(source, dem.grid(), demToSource), sourceHeights, dem.metres(), lapseRates);
     }
 
-    /** Interpolated source height minus target height by target cell, km; NaN where a corner or the target has no height. */
-    private float[] heightGains() {
+    /**
+     * Interpolated source height minus target height, {@code [row][column]}, km; NaN where a corner or the target has no height.
+     * One array a row, since the day loop is only fast on arrays that begin where the lane does.
+     */
+    private float[][] heightGains() {
         GridGeometry target = positions.target();
-        float[] gains = new float[Math.toIntExact(target.cells())];
+        float[][] gains = new float[target.rows()][target.columns()];
         for (int row = 0; row < target.rows(); row++) {
             for (int column = 0; column < target.columns(); column++) {
-                int cell = row * target.columns() + column;
                 double height = interpolate(sourceHeights, row, column);
-                gains[cell] = (float) ((height - targetHeights[cell]) / 1000);
+                gains[row][column] = (float) ((height - targetHeights[row * target.columns() + column]) / 1000);
             }
         }
         return gains;
@@ -124,8 +126,9 @@ public final class ElevationAdjustment {
         return sourceHeights;
     }
 
-    float[] heightGain() {
-        return heightGain;
+    /** Height gains of a target row, km; null where no heights are used. */
+    float[] heightGain(int row) {
+        return heightGain == null ? null : heightGain[row];
     }
 
     /** Whether a target cell can ever have a value: inside the source's cells, and with a height where heights are used. */

@@ -1,5 +1,7 @@
 package org.wintersill.elevation;
 
+import java.util.Arrays;
+
 /**
  * Brings one night's temperatures from the source grid to a lane of target rows. Run of an {@link ElevationAdjustment}, with
  * room of its own: one a worker.
@@ -8,11 +10,18 @@ public final class LaneAdjuster {
     private final ElevationAdjustment adjustment;
     private final SourcePositions positions;
     private final float[] blended;
+    private final float[] left;
+    private final float[] right;
+    private final float[] row;
 
     public LaneAdjuster(ElevationAdjustment adjustment) {
         this.adjustment = adjustment;
         positions = adjustment.positions();
         blended = new float[positions.source().columns()];
+        int columns = positions.target().columns();
+        left = new float[columns];
+        right = new float[columns];
+        row = new float[columns];
     }
 
     /**
@@ -27,14 +36,14 @@ public final class LaneAdjuster {
             pass(night, offset + firstRow * positions.target().columns(), rows * positions.target().columns(), out);
             return;
         }
-        for (int row = firstRow; row < firstRow + rows; row++) {
-            int start = (row - firstRow) * positions.target().columns();
+        for (int r = firstRow; r < firstRow + rows; r++) {
+            int start = (r - firstRow) * positions.target().columns();
             if (positions.isSeparable()) {
-                interpolateRow(night, offset, (float) lapse, row, out, start);
+                interpolateRow(night, offset, (float) lapse, r, out, start);
             } else {
-                interpolateCells(night, offset, (float) lapse, row, out, start);
+                interpolateCells(night, offset, (float) lapse, r, out, start);
             }
-            mend(night, offset, lapse, row, out, start);
+            mend(night, offset, lapse, r, out, start);
         }
     }
 
@@ -46,88 +55,102 @@ public final class LaneAdjuster {
     }
 
     /** Both axes independent: blend the two source rows once, then only along the row. Missing corners give NaN. */
-    private void interpolateRow(float[] night, int offset, float lapse, int row, float[] out, int start) {
+    private void interpolateRow(float[] night, int offset, float lapse, int targetRow, float[] out, int start) {
         int columns = positions.source().columns();
         int targetColumns = positions.target().columns();
-        int north = positions.north(row, 0);
+        int north = positions.north(targetRow, 0);
         if (north < 0) {
-            java.util.Arrays.fill(out, start, start + targetColumns, Float.NaN);
+            Arrays.fill(out, start, start + targetColumns, Float.NaN);
             return;
         }
         int upper = offset + north * columns;
         int lower = positions.source().rows() > 1 ? upper + columns : upper;
-        float south = positions.southWeight(row, 0);
+        blend(night, upper, lower, positions.southWeight(targetRow, 0), columns);
+        gather(positions.westByColumn(), columns > 1 ? 1 : 0, targetColumns);
+        alongRow(left, right, positions.eastWeightByColumn(), row, targetColumns);
+        float[] gain = adjustment.heightGain(targetRow);
+        if (gain != null) {
+            addHeight(gain, lapse, row, targetColumns);
+        }
+        System.arraycopy(row, 0, out, start, targetColumns);
+    }
+
+    private void blend(float[] night, int upper, int lower, float south, int columns) {
         for (int i = 0; i < columns; i++) {
             blended[i] = night[upper + i] + south * (night[lower + i] - night[upper + i]);
         }
-        int east = columns > 1 ? 1 : 0;
-        float[] gain = adjustment.heightGain();
-        int cell = row * targetColumns;
-        for (int column = 0; column < targetColumns; column++) {
-            int west = positions.west(0, column);
-            float value = Float.NaN;
-            if (west >= 0) {
-                float left = blended[west];
-                value = left + positions.eastWeight(0, column) * (blended[west + east] - left);
-            }
-            out[start + column] = value;
-        }
-        if (gain != null) {
-            for (int column = 0; column < targetColumns; column++) {
-                out[start + column] += lapse * gain[cell + column];
-            }
+    }
+
+    /** Values of the western and eastern neighbour of every target column; NaN beyond the source. */
+    private void gather(int[] west, int east, int cells) {
+        for (int i = 0; i < cells; i++) {
+            int at = west[i];
+            left[i] = at < 0 ? Float.NaN : blended[at];
+            right[i] = at < 0 ? Float.NaN : blended[at + east];
         }
     }
 
-    private void interpolateCells(float[] night, int offset, float lapse, int row, float[] out, int start) {
+    private static void alongRow(float[] left, float[] right, float[] weight, float[] row, int cells) {
+        for (int i = 0; i < cells; i++) {
+            row[i] = left[i] + weight[i] * (right[i] - left[i]);
+        }
+    }
+
+    private static void addHeight(float[] gain, float lapse, float[] row, int cells) {
+        for (int i = 0; i < cells; i++) {
+            row[i] += lapse * gain[i];
+        }
+    }
+
+    private void interpolateCells(float[] night, int offset, float lapse, int targetRow, float[] out, int start) {
         int columns = positions.source().columns();
         int east = columns > 1 ? 1 : 0;
         int below = positions.source().rows() > 1 ? columns : 0;
         int targetColumns = positions.target().columns();
-        float[] gain = adjustment.heightGain();
+        float[] gain = adjustment.heightGain(targetRow);
         for (int column = 0; column < targetColumns; column++) {
-            int west = positions.west(row, column);
-            int north = positions.north(row, column);
+            int west = positions.west(targetRow, column);
+            int north = positions.north(targetRow, column);
             if (west < 0 || north < 0) {
                 out[start + column] = Float.NaN;
                 continue;
             }
             int corner = offset + north * columns + west;
-            float wx = positions.eastWeight(row, column);
+            float wx = positions.eastWeight(targetRow, column);
             float upper = night[corner] + wx * (night[corner + east] - night[corner]);
             float lower = night[corner + below] + wx * (night[corner + below + east] - night[corner + below]);
-            float value = upper + positions.southWeight(row, column) * (lower - upper);
-            out[start + column] = gain == null ? value : value + lapse * gain[row * targetColumns + column];
+            float value = upper + positions.southWeight(targetRow, column) * (lower - upper);
+            out[start + column] = gain == null ? value : value + lapse * gain[column];
         }
     }
 
     /** Cells whose plain interpolation met a missing corner: leave it out and rescale, or call the cell missing. */
-    private void mend(float[] night, int offset, double lapse, int row, float[] out, int start) {
+    private void mend(float[] night, int offset, double lapse, int targetRow, float[] out, int start) {
         int targetColumns = positions.target().columns();
         for (int column = 0; column < targetColumns; column++) {
             float value = out[start + column];
             if (value != value) {
-                out[start + column] = withoutMissingCorners(night, offset, lapse, row, column);
+                out[start + column] = withoutMissingCorners(night, offset, lapse, targetRow, column);
             }
         }
     }
 
-    private float withoutMissingCorners(float[] night, int offset, double lapse, int row, int column) {
-        int containing = positions.containing(row, column);
+    private float withoutMissingCorners(float[] night, int offset, double lapse, int targetRow, int column) {
+        int containing = positions.containing(targetRow, column);
         if (containing < 0 || Float.isNaN(night[offset + containing])) {
             return Float.POSITIVE_INFINITY;
         }
         float[] heights = adjustment.sourceHeights();
-        float targetHeight = adjustment.targetHeight(row * positions.target().columns() + column);
+        float targetHeight = adjustment.targetHeight(targetRow * positions.target().columns() + column);
         if (heights != null && (Float.isNaN(targetHeight) || Float.isNaN(heights[containing]))) {
             return Float.POSITIVE_INFINITY;
         }
         int columns = positions.source().columns();
-        int corner = positions.north(row, column) * columns + positions.west(row, column);
+        int corner = positions.north(targetRow, column) * columns + positions.west(targetRow, column);
         double total = 0;
         double weights = 0;
         for (int k = 0; k < 4; k++) {
-            double weight = adjustment.cornerWeight(row, column, k);
+            double weight = adjustment.cornerWeight(targetRow, column, k);
             if (weight == 0) {
                 continue;
             }

@@ -102,6 +102,16 @@ public final class SourcePositions {
         return separable;
     }
 
+    /** Western neighbours by target column; only where positions are separable. Shared, not copied. */
+    int[] westByColumn() {
+        return west;
+    }
+
+    /** Weights of the eastern neighbours by target column; only where positions are separable. Shared, not copied. */
+    float[] eastWeightByColumn() {
+        return eastWeight;
+    }
+
     private int columnKey(int row, int column) {
         return separable ? column : row * target.columns() + column;
     }
