@@ -5,7 +5,6 @@ import java.io.FileOutputStream;
 import java.io.PrintStream;
 import java.nio.charset.StandardCharsets;
 import java.util.List;
-import org.wintersill.config.RunConfig;
 
 /** Where the program begins. */
 public final class Main {
@@ -50,26 +49,6 @@ public final class Main {
     }
 
     private static Commands commands() {
-        return new Commands() {
-            @Override
-            public int map(RunConfig config, MapOptions options, Console console) {
-                throw new UnsupportedOperationException("map");
-            }
-
-            @Override
-            public int plan(RunConfig config, PlanOptions options, Console console) {
-                throw new UnsupportedOperationException("plan");
-            }
-
-            @Override
-            public int inspect(InspectOptions options, Console console) {
-                throw new UnsupportedOperationException("inspect");
-            }
-
-            @Override
-            public int explain(RunConfig config, ExplainOptions options, Console console) {
-                throw new UnsupportedOperationException("explain");
-            }
-        };
+        return new RunCommands();
     }
 }

@@ -25,9 +25,6 @@ final class MapCommand implements Callable<Integer>, Manners.Kept {
     @Option(names = "--overwrite", description = "Replace an earlier result in the output folder.")
     private boolean overwrite;
 
-    @Option(names = "--resume", description = "Carry on an unfinished run in the output folder.")
-    private boolean resume;
-
     @Option(names = "--dry-run", description = "Check and decide everything, as plan does, and write nothing.")
     private boolean dryRun;
 
@@ -53,10 +50,6 @@ final class MapCommand implements Callable<Integer>, Manners.Kept {
     @Override
     public Integer call() {
         return session.call(manners, console -> {
-            if (overwrite && resume) {
-                throw Problem.usage("--overwrite and --resume are both given", "", "Keep --resume to carry on, --overwrite to begin "
-                        + "anew").asException();
-            }
             RunConfig config = run.config();
             if (printConfig) {
                 console.result(config.toYaml());
@@ -65,7 +58,7 @@ final class MapCommand implements Callable<Integer>, Manners.Kept {
             if (dryRun) {
                 return session.commands().plan(config, new PlanOptions(json), console);
             }
-            return session.commands().map(config, new MapOptions(overwrite, resume, json, session.arguments()), console);
+            return session.commands().map(config, new MapOptions(overwrite, json, session.arguments()), console);
         });
     }
 }

@@ -118,6 +118,7 @@ public final class WinterStore implements WinterSink, AutoCloseable {
         return values;
     }
 
+    /** Removes the file; closing again does nothing. */
     @Override
     public void close() {
         try {

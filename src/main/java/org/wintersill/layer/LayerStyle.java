@@ -31,7 +31,7 @@ public sealed interface LayerStyle extends Serializable {
     /**
      * One colour a class.
      *
-     * @param entries classes by their number, ascending, from 1 to 255
+     * @param entries classes by their number, ascending; from 1 to 255 where they are stored as bytes
      */
     record Classes(String id, String title, List<Entry> entries) implements LayerStyle {
         public Classes {

@@ -13,22 +13,22 @@ import java.util.function.DoubleFunction;
  */
 public final class LayerStyles {
     private static final String[] DANGER_TO_SAFETY = {
-        "#4f1710", "#96381a", "#cc6a2a", "#edb27c", "#f4f1e6", "#acd0dd", "#5b9fc4", "#2a659f", "#152f5c"};
+        "#4f1710", "#96381a", "#cc6a2a", "#edb27c", "#ebe4cb", "#acd0dd", "#5b9fc4", "#2a659f", "#152f5c"};
     private static final String[] DAMAGE = {
-        "#f8f5e4", "#f1d290", "#e5ad63", "#d9874b", "#c6623b", "#a5443e", "#84263f", "#581936", "#2e0d2c"};
+        "#f5f0da", "#f1d290", "#e5ad63", "#d9874b", "#c6623b", "#a5443e", "#84263f", "#581936", "#2e0d2c"};
     private static final String[] COLD_TO_MILD = {
         "#1d1238", "#292358", "#353579", "#3e4c91", "#41669c", "#3f81a7", "#5b99ab", "#73b2ad", "#98c9b2", "#c6dcba",
         "#f3f0c2"};
     private static final String[] EARLY_TO_LATE = {
         "#f5efd0", "#d7d5a0", "#adbd8c", "#74a68e", "#538b8d", "#3d6e89", "#2f527c", "#2b3765", "#241c4f"};
     private static final String[] OLD_TO_RECENT = {
-        "#2b1a3d", "#4c3469", "#6c538f", "#8b77af", "#af9dc4", "#d2c4d6", "#f5eee6"};
+        "#2b1a3d", "#4c3469", "#6c538f", "#8b77af", "#af9dc4", "#d2c4d6", "#efe3d6"};
     private static final String[] FEW_TO_MANY = {
         "#f3f1e2", "#c0d3aa", "#8eb392", "#619382", "#3f7077", "#274f62", "#14304a"};
     private static final String[] SHARE = {
-        "#f5f2ea", "#d4cad9", "#b3a5c5", "#9081b2", "#6c5f9f", "#4a4082", "#2a2363"};
+        "#ece6da", "#d4cad9", "#b3a5c5", "#9081b2", "#6c5f9f", "#4a4082", "#2a2363"};
     private static final String[] LOWER_TO_HIGHER = {
-        "#3a2566", "#6a54a0", "#a597c9", "#f3f2ee", "#cdbf6e", "#8f7f22", "#544503"};
+        "#3a2566", "#6a54a0", "#a597c9", "#e6e4dc", "#cdbf6e", "#8f7f22", "#544503"};
     private static final String[] OFTEN_TO_SELDOM = {
         "#3d1020", "#732d2e", "#a3553b", "#cb844a", "#dcbc7e", "#eef0dc"};
     private static final String NO_CULTIVAR = "#5f5550";
@@ -123,7 +123,8 @@ public final class LayerStyles {
     }
 
     /**
-     * How many cultivars meet the target. With more than six, neighbouring counts share a colour.
+     * How many cultivars meet the target; the number of a class is the count itself, from 0, since the layer is stored as
+     * floats. With more than six, neighbouring counts share a colour.
      *
      * @param cultivars number of cultivars that were compared, 1 to 254
      */
@@ -132,18 +133,13 @@ public final class LayerStyles {
             throw new IllegalArgumentException("a class layer holds up to 254 cultivars, not " + cultivars);
         }
         List<LayerStyle.Entry> entries = new ArrayList<>();
-        entries.add(new LayerStyle.Entry(choiceCode(0), "none", "no cultivar", Colour.hex(NO_CULTIVAR)));
+        entries.add(new LayerStyle.Entry(0, "none", "no cultivar", Colour.hex(NO_CULTIVAR)));
         for (int count = 1; count <= cultivars; count++) {
             String colour = CHOICE[spread(count - 1, cultivars, CHOICE.length)];
-            entries.add(new LayerStyle.Entry(choiceCode(count), Integer.toString(count),
+            entries.add(new LayerStyle.Entry(count, Integer.toString(count),
                     count == 1 ? "1 cultivar" : count + " cultivars", Colour.hex(colour)));
         }
         return new LayerStyle.Classes("choice", "Cultivars that meet the target", entries);
-    }
-
-    /** Stored number of the class {@code count cultivars}: one more than the count, since 0 stands for "missing". */
-    public static int choiceCode(int count) {
-        return count + 1;
     }
 
     /** One style of each kind, in a fixed order; styles made to measure stand here in their usual size. */

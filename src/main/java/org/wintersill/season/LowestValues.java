@@ -46,22 +46,19 @@ final class LowestValues {
     static void ofScaledDifference(float[][] nights, int count, float[] reference, float[] factor, int firstNight,
                                    float[] lowest, int cells) {
         int n = 0;
-        for (; n + 4 <= count; n += 4) {
+        for (; n + 2 <= count; n += 2) {
             int r = firstNight + n;
-            scaled4(nights[n], nights[n + 1], nights[n + 2], nights[n + 3], reference[r], reference[r + 1], reference[r + 2],
-                    reference[r + 3], factor[r], factor[r + 1], factor[r + 2], factor[r + 3], lowest, cells);
+            scaled2(nights[n], nights[n + 1], reference[r], reference[r + 1], factor[r], factor[r + 1], lowest, cells);
         }
         for (; n < count; n++) {
             scaled1(nights[n], reference[firstNight + n], factor[firstNight + n], lowest, cells);
         }
     }
 
-    private static void scaled4(float[] a, float[] b, float[] c, float[] d, float ra, float rb, float rc, float rd,
-                                float fa, float fb, float fc, float fd, float[] lowest, int cells) {
+    /** Two nights, not four: with four the body grows too large for the compiler to unroll, and stays scalar. */
+    private static void scaled2(float[] a, float[] b, float ra, float rb, float fa, float fb, float[] lowest, int cells) {
         for (int i = 0; i < cells; i++) {
-            float first = Math.min((a[i] - ra) * fa, (b[i] - rb) * fb);
-            float second = Math.min((c[i] - rc) * fc, (d[i] - rd) * fd);
-            lowest[i] = Math.min(lowest[i], Math.min(first, second));
+            lowest[i] = Math.min(lowest[i], Math.min((a[i] - ra) * fa, (b[i] - rb) * fb));
         }
     }
 

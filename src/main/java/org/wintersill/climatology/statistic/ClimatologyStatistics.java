@@ -17,10 +17,10 @@ public final class ClimatologyStatistics {
      * @param confidence level of the bounds, 0..1
      * @param target share of killing winters that is accepted
      * @param classes three limits of the frequency of killing winters, ascending
-     * @param winters number of winters of the run
+     * @param years year in which each winter of the run ends, ascending; never empty
      */
     public record Choices(int[] levels, int killing, FrequencyInterval interval, double confidence, double target,
-                          double[] classes, int winters) {
+                          double[] classes, int[] years) {
 
         /** Position of the killing level. */
         public int killingLevel() {
@@ -38,7 +38,7 @@ public final class ClimatologyStatistics {
 
     /** Layers of one cultivar. */
     public static List<ClimatologyStatistic> ofCultivar(Choices choices) {
-        double[][][] bounds = choices.interval().table(choices.winters(), choices.confidence());
+        double[][][] bounds = choices.interval().table(choices.years().length, choices.confidence());
         String words = (choices.interval() == FrequencyInterval.JEFFREYS ? "Jeffreys" : "Wilson") + ", "
                 + Math.round(choices.confidence() * 1000) / 10.0 + " % two-sided";
         int killing = choices.killingLevel();
@@ -46,7 +46,7 @@ public final class ClimatologyStatistics {
         list.add(new MarginMean());
         list.add(new MarginLow());
         list.add(new MarginWorst());
-        list.add(new WorstWinter());
+        list.add(new WorstWinter(choices.years()[0], choices.years()[choices.years().length - 1]));
         list.add(new DamageMean());
         for (int level = 0; level < choices.levels().length; level++) {
             for (DamageProbability.Part part : DamageProbability.Part.values()) {
@@ -61,7 +61,7 @@ public final class ClimatologyStatistics {
     }
 
     /** Layers that belong to no cultivar. */
-    public static List<ClimatologyStatistic> shared() {
-        return List.of(new ValidWinters(), new MeanMinimum());
+    public static List<ClimatologyStatistic> shared(Choices choices) {
+        return List.of(new ValidWinters(choices.years().length), new MeanMinimum());
     }
 }

@@ -45,6 +45,11 @@ public final class DamageProbability implements ClimatologyStatistic {
         this.boundWords = boundWords;
     }
 
+    /** Whether this is the frequency itself, not a bound, of the given level. */
+    public boolean isFrequencyOf(int wantedLevel) {
+        return part == Part.VALUE && level == wantedLevel;
+    }
+
     @Override
     public LayerDefinition layer() {
         String about = part == Part.VALUE ? "" : " (" + boundWords + ")";

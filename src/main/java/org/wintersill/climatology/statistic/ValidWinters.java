@@ -8,12 +8,18 @@ import org.wintersill.layer.SampleType;
 
 /** Number of winters that passed the completeness rule: the n of every other summary. */
 public final class ValidWinters implements ClimatologyStatistic {
+    private final int winters;
+
+    /** @param winters number of winters of the run, for the colours */
+    public ValidWinters(int winters) {
+        this.winters = winters;
+    }
 
     @Override
     public LayerDefinition layer() {
         return new LayerDefinition("valid-winters", "Valid winters",
                 "Number of winters that passed the completeness rule; missing where none did",
-                "1", SampleType.INT16, "", LayerStyles.count());
+                "1", SampleType.INT16, "", LayerStyles.count(winters));
     }
 
     @Override

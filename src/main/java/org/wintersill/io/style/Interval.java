@@ -6,8 +6,9 @@ import org.wintersill.layer.Colour;
 import org.wintersill.layer.LayerStyle;
 
 /**
- * A piece of a ramp for things that take one colour: from one stop up to, but not including, the next, in the colour half
- * way between the two. What lies beyond the ends of the ramp belongs to the first and the last piece.
+ * A piece of a ramp for things that take one colour: from one stop to the next, in the colour half way between the two.
+ * A value on a stop belongs to the piece below it, as QGIS has it; what lies beyond the ends of the ramp belongs to the
+ * first and the last piece.
  *
  * @param lower start, NaN for the first piece
  * @param upper end, NaN for the last piece
@@ -22,8 +23,12 @@ record Interval(double lower, double upper, Colour colour, String label) {
         for (int i = 0; i + 1 < stops.size(); i++) {
             LayerStyle.Stop from = stops.get(i);
             LayerStyle.Stop to = stops.get(i + 1);
-            pieces.add(new Interval(i == 0 ? Double.NaN : from.value(), i + 2 == stops.size() ? Double.NaN : to.value(),
-                    middle(from.colour(), to.colour()), from.label() + " to " + to.label()));
+            boolean first = i == 0;
+            boolean last = i + 2 == stops.size();
+            String label = first ? "up to " + to.label() : last ? "over " + from.label()
+                    : from.label() + " to " + to.label();
+            pieces.add(new Interval(first ? Double.NaN : from.value(), last ? Double.NaN : to.value(),
+                    middle(from.colour(), to.colour()), label));
         }
         return pieces;
     }

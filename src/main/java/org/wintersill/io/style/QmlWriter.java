@@ -94,7 +94,7 @@ public final class QmlWriter {
     }
 
     /**
-     * Style of polygons by a number: one colour between each two stops of the ramp, the lower stop counted in.
+     * Style of polygons by a number: one colour between each two stops of the ramp, the upper stop counted in.
      *
      * @param ramp the looks
      * @param column name of the numeric column

@@ -62,7 +62,7 @@ public final class SldWriter {
     }
 
     /**
-     * Style of polygons by a number: one rule between each two stops of the ramp, the lower stop counted in.
+     * Style of polygons by a number: one rule between each two stops of the ramp, the upper stop counted in.
      *
      * @param ramp the looks
      * @param column name of the numeric column
@@ -72,9 +72,9 @@ public final class SldWriter {
         for (Interval interval : Interval.of(ramp)) {
             xml.open("Rule").element("Name", interval.label()).element("Title", interval.label());
             xml.open("ogc:Filter").open("ogc:And");
-            comparison(xml, "ogc:PropertyIsGreaterThanOrEqualTo", column,
+            comparison(xml, "ogc:PropertyIsGreaterThan", column,
                     XmlText.number(interval.lowerOr(-Interval.FAR)));
-            comparison(xml, "ogc:PropertyIsLessThan", column, XmlText.number(interval.upperOr(Interval.FAR)));
+            comparison(xml, "ogc:PropertyIsLessThanOrEqualTo", column, XmlText.number(interval.upperOr(Interval.FAR)));
             xml.close().close();
             fill(xml, interval.colour());
             xml.close();

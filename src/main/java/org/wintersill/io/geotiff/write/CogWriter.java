@@ -43,7 +43,7 @@ public final class CogWriter implements RasterWriter {
         levels = PyramidLevel.of(header.grid().columns(), header.grid().rows());
         rowsWritten = new int[header.bands().size()];
         header.bands().forEach(band -> statistics.add(new ValueStatistics()));
-        press = new TilePress(header.layer().type(), workers, this::keep);
+        press = new TilePress(header.layer().type(), OverviewRule.Choice.of(header.layer()), workers, this::keep);
         try {
             spool = new TileSpool(file, levels, header.bands().size());
         } catch (IOException e) {
@@ -127,7 +127,7 @@ public final class CogWriter implements RasterWriter {
             if (spool != null) {
                 spool.close();
             }
-            if (begun && !finished) {
+            if (begun && !finished && Files.isRegularFile(file)) {
                 Files.deleteIfExists(file);
             }
         } catch (IOException e) {

@@ -1,5 +1,7 @@
 package org.wintersill.io.geotiff.write;
 
+import org.wintersill.layer.LayerDefinition;
+import org.wintersill.layer.LayerStyle;
 import org.wintersill.layer.SampleType;
 
 /**
@@ -17,31 +19,44 @@ final class OverviewRule {
     private OverviewRule() {
     }
 
+    /** The rules by name. */
+    enum Choice {
+        MEAN, FIRST, MODE;
+
+        /** The rule of a layer; counts that are stored as floats beside a quantity are still counts. */
+        static Choice of(LayerDefinition layer) {
+            if (layer.type() == SampleType.BYTE) {
+                return MODE;
+            }
+            return layer.type() == SampleType.INT16 || layer.style() instanceof LayerStyle.Classes ? FIRST : MEAN;
+        }
+    }
+
     /**
      * Halves a tile into one quarter of the tile above it.
      *
-     * @param type decides the rule
+     * @param choice which rule
      * @param below {@code [row * 256 + column]}, NaN for missing and beyond the edge of the grid
      * @param above tile that receives 128 x 128 cells
      * @param right whether the eastern quarters are meant
      * @param lower whether the southern quarters are meant
      */
-    static void halve(SampleType type, float[] below, float[] above, boolean right, boolean lower) {
+    static void halve(Choice choice, float[] below, float[] above, boolean right, boolean lower) {
         int start = (lower ? HALF * TILE : 0) + (right ? HALF : 0);
         for (int row = 0; row < HALF; row++) {
             for (int column = 0; column < HALF; column++) {
                 int from = 2 * row * TILE + 2 * column;
-                above[start + row * TILE + column] = cell(type, below[from], below[from + 1],
+                above[start + row * TILE + column] = cell(choice, below[from], below[from + 1],
                         below[from + TILE], below[from + TILE + 1]);
             }
         }
     }
 
-    private static float cell(SampleType type, float a, float b, float c, float d) {
-        return switch (type) {
-            case FLOAT32 -> mean(a, b, c, d);
-            case INT16 -> first(a, b, c, d);
-            case BYTE -> mode(a, b, c, d);
+    private static float cell(Choice choice, float a, float b, float c, float d) {
+        return switch (choice) {
+            case MEAN -> mean(a, b, c, d);
+            case FIRST -> first(a, b, c, d);
+            case MODE -> mode(a, b, c, d);
         };
     }
 

@@ -11,6 +11,7 @@ final class TileJob implements AutoCloseable {
     private static final int TILE = PyramidLevel.TILE;
 
     private final SampleType type;
+    private final OverviewRule.Choice overviews;
     private final TileCodec codec;
     private final float[] values = new float[TILE * TILE];
     private final ValueStatistics statistics = new ValueStatistics();
@@ -21,8 +22,9 @@ final class TileJob implements AutoCloseable {
     private int tile;
     private FutureTask<Void> task;
 
-    TileJob(SampleType type) {
+    TileJob(SampleType type, OverviewRule.Choice overviews) {
         this.type = type;
+        this.overviews = overviews;
         codec = new TileCodec(type);
     }
 
@@ -58,7 +60,7 @@ final class TileJob implements AutoCloseable {
                 for (int column = firstColumn; column < Math.min(firstColumn + 2, under.tilesAcross()); column++) {
                     int length = spool.read(level - 1, band, row * under.tilesAcross() + column, packedBelow);
                     codec.unpack(packedBelow, length, below);
-                    OverviewRule.halve(type, below, values, column > firstColumn, row > firstRow);
+                    OverviewRule.halve(overviews, below, values, column > firstColumn, row > firstRow);
                 }
             }
             codec.pack(values);

@@ -17,14 +17,16 @@ final class TilePress implements AutoCloseable {
     }
 
     private final SampleType type;
+    private final OverviewRule.Choice overviews;
     private final Executor workers;
     private final Taker taker;
     private final int most = 2 * Runtime.getRuntime().availableProcessors() + 2;
     private final ArrayDeque<TileJob> busy = new ArrayDeque<>();
     private final ArrayDeque<TileJob> idle = new ArrayDeque<>();
 
-    TilePress(SampleType type, Executor workers, Taker taker) {
+    TilePress(SampleType type, OverviewRule.Choice overviews, Executor workers, Taker taker) {
         this.type = type;
+        this.overviews = overviews;
         this.workers = workers;
         this.taker = taker;
     }
@@ -32,7 +34,7 @@ final class TilePress implements AutoCloseable {
     /** A job to fill and to {@link #submit}; the oldest one is finished first when all are busy. */
     TileJob next() throws IOException {
         if (idle.isEmpty() && busy.size() < most) {
-            return new TileJob(type);
+            return new TileJob(type, overviews);
         }
         if (idle.isEmpty()) {
             takeOldest();

@@ -1,0 +1,121 @@
+package org.wintersill.cli;
+
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import org.wintersill.config.RunConfig;
+import org.wintersill.engine.CancelledException;
+import org.wintersill.io.crs.GeoToolsCrs;
+import org.wintersill.io.json.JsonText;
+import org.wintersill.problem.Notices;
+import org.wintersill.problem.Problems;
+import org.wintersill.run.Caution;
+import org.wintersill.run.CellExplanation;
+import org.wintersill.run.ExplanationText;
+import org.wintersill.run.InputFormats;
+import org.wintersill.run.Inspection;
+import org.wintersill.run.InspectionText;
+import org.wintersill.run.MapRun;
+import org.wintersill.run.OutputFolder;
+import org.wintersill.run.PlanText;
+import org.wintersill.run.RunPlan;
+import org.wintersill.run.RunPlanner;
+import org.wintersill.run.RunReport;
+
+/** The commands on the rooms behind them. */
+final class RunCommands implements Commands {
+    private static final int NIGHTS_SHOWN = 10;
+
+    private final GeoToolsCrs crs = new GeoToolsCrs();
+    private final InputFormats formats = new InputFormats(crs);
+
+    private RunPlan plan(RunConfig config, Console console) {
+        return new RunPlanner(formats, crs).plan(config, console.notices());
+    }
+
+    @Override
+    public int map(RunConfig config, MapOptions options, Console console) {
+        OutputFolder.check(config.outputs().folder(), options.overwrite());
+        RunPlan plan = plan(config, console);
+        console.detail(PlanText.text(plan));
+        RunReport report;
+        try {
+            report = new MapRun(plan, options.overwrite(), crs, console.progress(), console.notices()).execute(console.cancellation());
+        } catch (CancelledException e) {
+            console.message("stopped; nothing was left in " + config.outputs().folder());
+            return ExitCode.INTERRUPTED;
+        }
+        if (options.json()) {
+            console.result(JsonText.of(document(plan, report)));
+        } else {
+            console.message(report.files() + " files in " + report.folder() + "; winters " + plan.seasons().get(0).label() + " to "
+                    + plan.seasons().get(plan.seasons().size() - 1).label());
+            console.message(Caution.SHORT);
+        }
+        return ExitCode.DONE;
+    }
+
+    private static Map<String, Object> document(RunPlan plan, RunReport report) {
+        Map<String, Object> document = new LinkedHashMap<>();
+        document.put("version", 1);
+        document.put("folder", report.folder().toString());
+        document.put("files", report.files());
+        document.put("winters", plan.seasons().stream().map(season -> season.label()).toList());
+        document.put("summary", report.folder().resolve("summary.json").toString());
+        document.put("record", report.folder().resolve(OutputFolder.RECORD).toString());
+        document.put("caution", Caution.SHORT);
+        return document;
+    }
+
+    @Override
+    public int plan(RunConfig config, PlanOptions options, Console console) {
+        OutputFolder.check(config.outputs().folder(), true);
+        RunPlan plan = plan(config, console);
+        console.result(options.json() ? JsonText.of(PlanText.document(plan)) : PlanText.text(plan));
+        return ExitCode.DONE;
+    }
+
+    @Override
+    public int inspect(InspectOptions options, Console console) {
+        Problems problems = new Problems();
+        List<Map<String, Object>> documents = new ArrayList<>();
+        StringBuilder text = new StringBuilder();
+        for (Path file : options.entry().files()) {
+            problems.attempt(() -> {
+                Notices notices = new Notices();
+                Inspection inspection = Inspection.of(formats.open(file, options.entry().request(), notices), notices);
+                documents.add(inspection.document());
+                text.append(InspectionText.of(inspection)).append('\n');
+            });
+        }
+        if (options.json()) {
+            Map<String, Object> document = new LinkedHashMap<>();
+            document.put("version", 1);
+            document.put("files", documents);
+            console.result(JsonText.of(document));
+        } else if (!text.isEmpty()) {
+            console.result(text.toString());
+        }
+        problems.throwIfAny();
+        return ExitCode.DONE;
+    }
+
+    @Override
+    public int explain(RunConfig config, ExplainOptions options, Console console) {
+        RunPlan plan = plan(config, console);
+        CellExplanation wanted = options.lonLat()
+                ? CellExplanation.atLongitudeLatitude(plan, crs, options.x(), options.y(), options.winter().orElse(null))
+                : CellExplanation.of(plan, options.x(), options.y(), options.winter().orElse(null));
+        if (!options.cultivars().isEmpty()) {
+            wanted = wanted.ofCultivars(options.cultivars());
+        }
+        console.result(switch (options.format()) {
+            case JSON -> ExplanationText.json(wanted);
+            case CSV -> ExplanationText.csv(wanted);
+            case TEXT -> ExplanationText.table(wanted, NIGHTS_SHOWN);
+        });
+        return ExitCode.DONE;
+    }
+}

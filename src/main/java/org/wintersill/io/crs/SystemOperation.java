@@ -1,0 +1,93 @@
+package org.wintersill.io.crs;
+
+import org.geotools.api.referencing.operation.MathTransform;
+import org.geotools.api.referencing.operation.NoninvertibleTransformException;
+import org.geotools.api.referencing.operation.TransformException;
+import org.wintersill.grid.CoordinateOperation;
+
+/**
+ * Coordinates of one system turned into those of another by way of longitude and latitude: inverse projection or
+ * rotation, prime meridian, datum, projection or rotation. Holds nothing that changes, so any thread may use it.
+ */
+final class SystemOperation implements CoordinateOperation {
+    private final SystemDefinition source;
+    private final SystemDefinition target;
+    private final DatumShift shift;
+    private final MathTransform unproject;
+    private final MathTransform project;
+    private final PoleRotation unrotate;
+    private final PoleRotation rotate;
+
+    SystemOperation(SystemDefinition source, SystemDefinition target, DatumShift shift) {
+        this.source = source;
+        this.target = target;
+        this.shift = shift;
+        try {
+            unproject = source.method() == null ? null : MapProjections.forward(source).inverse();
+        } catch (NoninvertibleTransformException e) {
+            throw new IllegalArgumentException("the projection of " + source.name() + " has no inverse", e);
+        }
+        project = target.method() == null ? null : MapProjections.forward(target);
+        unrotate = source.pole() == null ? null : new PoleRotation(source.pole());
+        rotate = target.pole() == null ? null : new PoleRotation(target.pole());
+    }
+
+    @Override
+    public void transform(double[] xy, int points) {
+        for (int i = 0; i < points; i++) {
+            int at = 2 * i;
+            boolean good = Double.isFinite(xy[at]) && Double.isFinite(xy[at + 1]) && toLonLat(xy, at) && fromLonLat(xy, at)
+                    && Double.isFinite(xy[at]) && Double.isFinite(xy[at + 1]);
+            if (!good) {
+                xy[at] = Double.NaN;
+                xy[at + 1] = Double.NaN;
+            }
+        }
+    }
+
+    private boolean toLonLat(double[] xy, int at) {
+        if (unproject != null) {
+            xy[at] *= source.metresPerUnit();
+            xy[at + 1] *= source.metresPerUnit();
+            if (!apply(unproject, xy, at)) {
+                return false;
+            }
+        }
+        if (Math.abs(xy[at + 1]) > 90) {
+            return false;
+        }
+        if (unrotate != null) {
+            unrotate.toTrue(xy, at);
+        }
+        xy[at] = PoleRotation.wrap(xy[at] + source.base().meridian());
+        if (!shift.isIdentity()) {
+            shift.apply(xy, at);
+        }
+        return true;
+    }
+
+    private boolean fromLonLat(double[] xy, int at) {
+        xy[at] = PoleRotation.wrap(xy[at] - target.base().meridian());
+        if (rotate != null) {
+            rotate.toRotated(xy, at);
+        }
+        if (project == null) {
+            return true;
+        }
+        if (!apply(project, xy, at)) {
+            return false;
+        }
+        xy[at] /= target.metresPerUnit();
+        xy[at + 1] /= target.metresPerUnit();
+        return true;
+    }
+
+    private static boolean apply(MathTransform transform, double[] xy, int at) {
+        try {
+            transform.transform(xy, at, xy, at, 1);
+            return true;
+        } catch (TransformException | IllegalArgumentException | ArithmeticException e) {
+            return false;
+        }
+    }
+}

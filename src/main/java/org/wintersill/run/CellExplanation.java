@@ -1,0 +1,210 @@
+package org.wintersill.run;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.wintersill.damage.ToleranceCurve;
+import org.wintersill.elevation.LaneAdjuster;
+import org.wintersill.grid.Block;
+import org.wintersill.grid.CoordinateOperations;
+import org.wintersill.hardiness.Cultivar;
+import org.wintersill.hardiness.LethalTemperatures;
+import org.wintersill.problem.NearestName;
+import org.wintersill.problem.Problem;
+import org.wintersill.season.CompletenessTally;
+import org.wintersill.season.NightCurve;
+import org.wintersill.season.WinterLane;
+import org.wintersill.season.WinterValues;
+import org.wintersill.temperature.DailyTemperatureReader;
+import org.wintersill.time.DayAxis;
+import org.wintersill.time.Season;
+
+/**
+ * One target cell, night by night: the very reader, adjustment, curves, completeness rule and fold of the main job, on a lane of
+ * one cell.
+ *
+ * @param x centre of the cell in the target's system
+ * @param y likewise
+ * @param crs the target's system
+ * @param elevation height of the cell, m; NaN without terrain model
+ * @param heightChange what the elevation adjustment bridges, m; NaN without terrain model
+ * @param cultivars in the order of the run
+ */
+public record CellExplanation(double x, double y, String crs, float elevation, float heightChange, List<CultivarCourse> cultivars) {
+
+    /** @param winters in the order of time */
+    public record CultivarCourse(Cultivar cultivar, List<Winter> winters) {
+    }
+
+    /**
+     * @param valid whether the winter counts
+     * @param margin lowest margin, K; NaN where the winter does not count
+     * @param damage fraction of buds killed
+     * @param worstNight date of the earliest night of the lowest margin; null where the winter does not count
+     */
+    public record Winter(String label, boolean valid, float margin, float damage, String worstNight, List<Night> nights) {
+    }
+
+    /**
+     * @param source value of the source cell, degC; NaN for missing
+     * @param interpolated value between source cells, before the change of height
+     * @param lapseRate K/km of the night
+     * @param tmin value at the cell's own height
+     */
+    public record Night(String date, float source, float interpolated, double lapseRate, float tmin, double lt10, double lt50,
+                        double lt90, double margin, double damage) {
+    }
+
+    /** The temperatures of one winter at the cell. */
+    private record Temperatures(boolean complete, float[] source, float[] interpolated, float[] tmin) {
+    }
+
+    /**
+     * Explains the cell that contains a place.
+     *
+     * @param plan the plan of the run
+     * @param x coordinate in the target's system
+     * @param winter label of one winter; null for all
+     * @throws org.wintersill.problem.ProblemException when the place is outside or the winter is not in the run
+     */
+    public static CellExplanation of(RunPlan plan, double x, double y, String winter) {
+        int column = plan.target().columnAt(x);
+        int row = plan.target().rowAt(y);
+        if (column < 0 || row < 0) {
+            boolean swapped = plan.target().columnAt(y) >= 0 && plan.target().rowAt(x) >= 0;
+            throw Problem.usage("the place " + x + "," + y + " is outside of the target grid, " + plan.target().describe(), "--at",
+                    swapped ? "Give x before y: the two seem to be swapped" : "Give x,y in the coordinates of "
+                            + plan.target().crs().label() + ", or --at-lonlat LON,LAT").asException();
+        }
+        List<Integer> wanted = new ArrayList<>();
+        for (int s = 0; s < plan.seasons().size(); s++) {
+            if (winter == null || plan.seasons().get(s).label().equals(winter)) {
+                wanted.add(s);
+            }
+        }
+        if (wanted.isEmpty()) {
+            throw Problem.usage("the run has no winter " + winter, "--winter", "Its winters are "
+                    + String.join(", ", plan.seasons().stream().map(Season::label).toList())).asException();
+        }
+        List<List<Winter>> courses = new ArrayList<>();
+        plan.cultivars().forEach(cultivar -> courses.add(new ArrayList<>()));
+        try (DailyTemperatureReader reader = plan.source().open()) {
+            for (int s : wanted) {
+                Temperatures temperatures = temperatures(plan, reader, plan.seasons().get(s), row, column);
+                addWinter(plan, s, temperatures, courses);
+            }
+        }
+        List<CultivarCourse> cultivars = new ArrayList<>();
+        for (int c = 0; c < courses.size(); c++) {
+            cultivars.add(new CultivarCourse(plan.cultivars().get(c), courses.get(c)));
+        }
+        int cell = row * plan.target().columns() + column;
+        return new CellExplanation(plan.target().centreX(column), plan.target().centreY(row), plan.target().crs().label(),
+                plan.adjustment().targetHeight(cell), plan.adjustment().heightChange(row, column), cultivars);
+    }
+
+    /** The same for a place given as WGS 84 longitude and latitude. */
+    public static CellExplanation atLongitudeLatitude(RunPlan plan, CoordinateOperations operations, double longitude, double latitude,
+                                                      String winter) {
+        double[] place = {longitude, latitude};
+        operations.between(operations.wgs84(), plan.target().crs()).transform(place, 1);
+        return of(plan, place[0], place[1], winter);
+    }
+
+    /**
+     * The same cell with only some of its cultivars.
+     *
+     * @throws org.wintersill.problem.ProblemException for an id that the run does not have
+     */
+    public CellExplanation ofCultivars(List<String> ids) {
+        List<String> known = cultivars.stream().map(course -> course.cultivar().id()).toList();
+        for (String id : ids) {
+            if (known.stream().noneMatch(id::equalsIgnoreCase)) {
+                throw Problem.usage("the run has no cultivar " + id, "--cultivar", NearestName.of(id, known)
+                        .map(name -> "Did you mean " + name + "? ").orElse("") + "Its cultivars are " + String.join(", ", known))
+                        .asException();
+            }
+        }
+        return new CellExplanation(x, y, crs, elevation, heightChange, cultivars.stream()
+                .filter(course -> ids.stream().anyMatch(course.cultivar().id()::equalsIgnoreCase)).toList());
+    }
+
+    private static Temperatures temperatures(RunPlan plan, DailyTemperatureReader reader, Season season, int row, int column) {
+        int nights = season.days();
+        float[] source = filled(nights);
+        float[] interpolated = filled(nights);
+        float[] tmin = filled(nights);
+        int[] rows = plan.adjustment().positions().sourceRows(row, row + 1);
+        int containing = plan.adjustment().positions().containing(row, column);
+        if (containing < 0) {
+            return new Temperatures(false, source, interpolated, tmin);
+        }
+        Block window = plan.job().window();
+        Block block = new Block(window.column(), window.row() + rows[0], window.columns(), rows[1] - rows[0]);
+        CompletenessTally tally = new CompletenessTally(season, plan.job().policy(), block.cells());
+        LaneAdjuster adjuster = new LaneAdjuster(plan.adjustment());
+        float[] slab = new float[block.cells()];
+        float[] lane = new float[plan.target().columns()];
+        int shift = -rows[0] * window.columns();
+        DayAxis axis = plan.source().days();
+        for (int night = 0; night < nights; night++) {
+            int position = axis.indexOf(season.firstDay() + night);
+            if (position < 0) {
+                tally.absent(night, 0, block.cells());
+                continue;
+            }
+            reader.read(position, 1, block, slab, 0, block.cells());
+            tally.accept(night, slab, 0, 0, block.cells());
+            source[night] = slab[shift + containing];
+            adjuster.adjust(slab, shift, 0, row, 1, lane);
+            interpolated[night] = value(lane[column]);
+            adjuster.adjust(slab, shift, plan.adjustment().lapseRates().ofMonth(season.date(night).month()), row, 1, lane);
+            tmin[night] = value(lane[column]);
+        }
+        return new Temperatures(tally.isComplete(shift + containing), source, interpolated, tmin);
+    }
+
+    private static float value(float laneValue) {
+        return laneValue == Float.POSITIVE_INFINITY ? Float.NaN : laneValue;
+    }
+
+    private static float[] filled(int count) {
+        float[] values = new float[count];
+        java.util.Arrays.fill(values, Float.NaN);
+        return values;
+    }
+
+    private static void addWinter(RunPlan plan, int s, Temperatures temperatures, List<List<Winter>> courses) {
+        Season season = plan.seasons().get(s);
+        NightCurve[] curves = plan.job().curves().get(s);
+        WinterLane lane = new WinterLane(curves.length, plan.job().levels(), 1);
+        float[][] night = new float[1][1];
+        for (int n = 0; n < season.days(); n++) {
+            float tmin = temperatures.tmin()[n];
+            night[0][0] = Float.isNaN(tmin) ? Float.POSITIVE_INFINITY : tmin;
+            lane.accept(curves, night, 1, n);
+        }
+        WinterValues values = lane.finish(cell -> temperatures.complete());
+        for (int c = 0; c < curves.length; c++) {
+            float worst = values.worstNight(c)[0];
+            boolean valid = !Float.isNaN(worst);
+            courses.get(c).add(new Winter(season.label(), valid, values.margin(c, 0)[0], values.damage(c)[0],
+                    valid ? season.date((int) worst).toString() : null,
+                    nights(season, plan, plan.cultivars().get(c), temperatures)));
+        }
+    }
+
+    private static List<Night> nights(Season season, RunPlan plan, Cultivar cultivar, Temperatures temperatures) {
+        LethalTemperatures course = cultivar.model().overSeason(season);
+        List<Night> nights = new ArrayList<>();
+        for (int n = 0; n < season.days(); n++) {
+            double lt10 = course.lt10()[n];
+            double lt50 = course.lt50()[n];
+            double lt90 = course.lt90()[n];
+            float tmin = temperatures.tmin()[n];
+            nights.add(new Night(season.date(n).toString(), temperatures.source()[n], temperatures.interpolated()[n],
+                    plan.adjustment().lapseRates().ofMonth(season.date(n).month()), tmin, lt10, lt50, lt90,
+                    tmin - lt50, ToleranceCurve.killedFraction(tmin, lt10, lt50, lt90)));
+        }
+        return nights;
+    }
+}

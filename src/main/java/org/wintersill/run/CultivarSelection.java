@@ -1,0 +1,53 @@
+package org.wintersill.run;
+
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.TreeMap;
+import org.wintersill.config.CultivarConfig;
+import org.wintersill.hardiness.Cultivar;
+import org.wintersill.io.cultivar.CultivarFile;
+import org.wintersill.problem.NearestName;
+import org.wintersill.problem.Notices;
+import org.wintersill.problem.Problem;
+import org.wintersill.problem.Problems;
+
+/** Reads the cultivar files of a run and picks the ones that are used. */
+record CultivarSelection(CultivarConfig config) {
+
+    List<Cultivar> read(Notices notices) {
+        Problems problems = new Problems();
+        Map<String, Cultivar> known = new TreeMap<>();
+        List<Cultivar> all = new ArrayList<>();
+        for (Path file : config.files()) {
+            problems.attempt(() -> {
+                for (Cultivar cultivar : CultivarFile.read(file, notices)) {
+                    if (known.putIfAbsent(cultivar.id().toLowerCase(Locale.ROOT), cultivar) != null) {
+                        problems.add(Problem.usage("the cultivar id " + cultivar.id() + " occurs more than once", file.toString(),
+                                "Give every cultivar an id of its own"));
+                    }
+                    all.add(cultivar);
+                }
+            });
+        }
+        problems.throwIfAny();
+        if (config.use().isEmpty()) {
+            return all;
+        }
+        List<Cultivar> used = new ArrayList<>();
+        for (String id : config.use()) {
+            Cultivar cultivar = known.get(id.toLowerCase(Locale.ROOT));
+            if (cultivar == null) {
+                String nearest = NearestName.of(id, known.keySet()).map(name -> "did you mean " + name + "? ").orElse("");
+                problems.add(Problem.usage("there is no cultivar " + id + " in the cultivar files", "cultivars.use",
+                        nearest + "Known are " + String.join(", ", known.keySet())));
+            } else {
+                used.add(cultivar);
+            }
+        }
+        problems.throwIfAny();
+        return used;
+    }
+}

@@ -1,0 +1,121 @@
+package org.wintersill.run;
+
+import java.io.IOException;
+import java.io.InputStream;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import org.wintersill.config.FileEntry;
+import org.wintersill.config.TemperatureEntry;
+import org.wintersill.elevation.ElevationField;
+import org.wintersill.elevation.ElevationFormat;
+import org.wintersill.grid.CrsParser;
+import org.wintersill.grid.GridGeometry;
+import org.wintersill.io.netcdf.NetcdfElevationFormat;
+import org.wintersill.io.netcdf.NetcdfTemperatureFormat;
+import org.wintersill.problem.Notices;
+import org.wintersill.problem.Problem;
+import org.wintersill.problem.Problems;
+import org.wintersill.temperature.DailyTemperatureSource;
+import org.wintersill.temperature.JoinedTemperatureSource;
+import org.wintersill.temperature.TemperatureFormat;
+import org.wintersill.temperature.TemperatureRequest;
+
+/** The list of input formats, and the choice of one by a file's first bytes. */
+public final class InputFormats {
+    private static final int HEAD = 16;
+    /** Enough problems for one message; the rest is usually the same mistake. */
+    private static final int MOST_PROBLEMS = 20;
+
+    private final List<TemperatureFormat> temperatureFormats;
+    private final List<ElevationFormat> elevationFormats;
+
+    public InputFormats(CrsParser crs) {
+        temperatureFormats = List.of(new NetcdfTemperatureFormat(crs));
+        elevationFormats = List.of(new NetcdfElevationFormat(crs));
+    }
+
+    /**
+     * Opens all files of an entry as one record.
+     *
+     * @throws org.wintersill.problem.ProblemException with every file's problem
+     */
+    public DailyTemperatureSource open(TemperatureEntry entry, Notices notices) {
+        return JoinedTemperatureSource.join(openEach(entry.files(), entry.request(), notices), notices);
+    }
+
+    private List<DailyTemperatureSource> openEach(List<Path> files, TemperatureRequest request, Notices notices) {
+        Problems problems = new Problems();
+        List<DailyTemperatureSource> sources = new ArrayList<>();
+        for (Path file : files) {
+            problems.attempt(() -> sources.add(open(file, request, notices)));
+            if (problems.all().size() >= MOST_PROBLEMS) {
+                break;
+            }
+        }
+        problems.throwIfAny();
+        return sources;
+    }
+
+    /** Opens one file. */
+    public DailyTemperatureSource open(Path file, TemperatureRequest request, Notices notices) {
+        byte[] head = head(file);
+        return temperatureFormats.stream().filter(format -> format.recognises(file, head)).findFirst()
+                .orElseThrow(() -> unknown(file, head, "netCDF or GeoTIFF").asException()).open(file, request, notices);
+    }
+
+    /** Reads ground heights. */
+    public ElevationField heights(FileEntry entry, Notices notices) {
+        return elevationFormat(entry.file()).read(entry.file(), entry.crs(), entry.unit(), notices);
+    }
+
+    /** The grid of ground heights, without reading them. */
+    public GridGeometry heightGrid(FileEntry entry, Notices notices) {
+        return elevationFormat(entry.file()).grid(entry.file(), entry.crs(), notices);
+    }
+
+    private ElevationFormat elevationFormat(Path file) {
+        byte[] head = head(file);
+        Optional<ElevationFormat> format = elevationFormats.stream().filter(known -> known.recognises(file, head)).findFirst();
+        return format.orElseThrow(() -> unknown(file, head, "GeoTIFF or netCDF").asException());
+    }
+
+    private static byte[] head(Path file) {
+        if (Files.isDirectory(file)) {
+            throw Problem.input("a file is needed, this is a folder", file.toString(), "Name the files in it, or use a pattern")
+                    .asException();
+        }
+        try (InputStream in = Files.newInputStream(file)) {
+            return in.readNBytes(HEAD);
+        } catch (java.nio.file.NoSuchFileException e) {
+            throw Problem.input("there is no such file", file.toString(), "Check the path; paths in a run file are relative to it")
+                    .asException(e);
+        } catch (IOException e) {
+            throw Problem.input("the file cannot be read: " + e.getMessage(), file.toString(), "Check its permissions").asException(e);
+        }
+    }
+
+    /** Says what a file that no format knows seems to be. */
+    private static Problem unknown(Path file, byte[] head, String accepted) {
+        String text = new String(head, StandardCharsets.ISO_8859_1).trim().toLowerCase(Locale.ROOT);
+        if (head.length == 0) {
+            return Problem.input("the file is empty", file.toString(), "Fetch it again");
+        }
+        if (head.length > 1 && (head[0] & 255) == 0x1f && (head[1] & 255) == 0x8b) {
+            return Problem.input("the file is compressed with gzip", file.toString(), "Unpack it first, for example with gunzip");
+        }
+        if (text.startsWith("pk")) {
+            return Problem.input("the file is a zip archive", file.toString(), "Unpack it first");
+        }
+        if (text.startsWith("<!doctype") || text.startsWith("<html")) {
+            return Problem.input("the file is a web page, probably a log-in or error page saved under this name", file.toString(),
+                    "Fetch the data again");
+        }
+        return Problem.input("the file is neither " + accepted.replace(" or ", " nor "), file.toString(),
+                "Give a " + accepted + " file");
+    }
+}

@@ -1,0 +1,110 @@
+package org.wintersill.run;
+
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.function.BooleanSupplier;
+import org.wintersill.engine.LocalEngine;
+import org.wintersill.engine.Progress;
+import org.wintersill.engine.WinterStore;
+import org.wintersill.engine.Workers;
+import org.wintersill.grid.CoordinateOperations;
+import org.wintersill.io.crs.CellAreas;
+import org.wintersill.io.crs.GeoKeys;
+import org.wintersill.io.geotiff.write.CogFormat;
+import org.wintersill.io.geotiff.write.GeoKeyTags;
+import org.wintersill.io.json.JsonText;
+import org.wintersill.layer.RasterFormat;
+import org.wintersill.problem.Notices;
+import org.wintersill.season.WinterValues;
+
+/** The main job: from a plan to a finished output folder. */
+public final class MapRun {
+    private final RunPlan plan;
+    private final boolean overwrite;
+    private final Progress progress;
+    private final Notices notices;
+    private final CoordinateOperations operations;
+
+    /** @param overwrite whether finished outputs in the folder may be replaced */
+    public MapRun(RunPlan plan, boolean overwrite, CoordinateOperations operations, Progress progress, Notices notices) {
+        this.plan = plan;
+        this.overwrite = overwrite;
+        this.progress = progress;
+        this.notices = notices;
+        this.operations = operations;
+    }
+
+    /**
+     * Runs the job.
+     *
+     * @param cancelled whether the user asked to stop
+     * @return areas by class, one a cultivar
+     * @throws org.wintersill.problem.ProblemException when an input is damaged or the outputs cannot be written; nothing is
+     *         left under a final name
+     * @throws org.wintersill.engine.CancelledException when the user asked to stop; likewise
+     */
+    public RunReport execute(BooleanSupplier cancelled) {
+        int cultivars = plan.cultivars().size();
+        Path target = plan.config().outputs().folder();
+        try (OutputFolder folder = OutputFolder.open(target, overwrite);
+                Workers workers = new Workers(plan.foldPlan().threads(), cancelled);
+                WinterStore store = new WinterStore(folder.unfinished("winters.tmp"),
+                        WinterValues.planes(cultivars, plan.job().levels()), plan.seasons().size(), plan.target().rows(),
+                        plan.target().columns())) {
+            new LocalEngine(plan.job(), plan.foldPlan()).run(store, workers, progress, notices);
+            Map<String, Object> record = RunRecord.begin(plan, workers);
+            RasterFormat format = new CogFormat(crs -> {
+                GeoKeys keys = GeoKeys.of(crs);
+                return new GeoKeyTags(keys.directory(), keys.doubles(), keys.ascii());
+            });
+            LayerOutput output = new LayerOutput(folder, format, plan.target(), plan.seasons(),
+                    Digests.ofText(JsonText.of(plan.config().effective())), workers.executor());
+            SummaryPass summaries = new SummaryPass(plan, store, output, new LayerSelection(plan.config().outputs().layers()),
+                    workers, progress);
+            writeLayers(summaries, cultivars);
+            List<ClassAreas> areas = tables(folder, output, summaries, record);
+            if (plan.config().outputs().netcdf()) {
+                new NetcdfOutput(plan, store, folder, operations, output.period()).write();
+            }
+            store.close();
+            RunRecord.complete(record, folder, notices, workers);
+            LayerOutput.write(folder.unfinished(OutputFolder.RECORD), JsonText.of(record));
+            workers.checkCancelled();
+            int files = folder.names().size() + 1;
+            folder.publish();
+            return new RunReport(target, files, areas);
+        }
+    }
+
+    private void writeLayers(SummaryPass summaries, int cultivars) {
+        boolean winters = plan.config().outputs().winters();
+        progress.begin("Layers", summaries.size(winters));
+        for (int c = 0; c < cultivars; c++) {
+            summaries.cultivar(c);
+        }
+        summaries.shared();
+        summaries.choice();
+        summaries.heightChange();
+        if (winters) {
+            summaries.winters();
+        }
+        progress.end();
+    }
+
+    private List<ClassAreas> tables(OutputFolder folder, LayerOutput output, SummaryPass summaries, Map<String, Object> record) {
+        double[] rowAreas = CellAreas.rowAreasKm2(plan.target());
+        List<ClassAreas> areas = new ArrayList<>();
+        for (byte[] classes : summaries.classes()) {
+            areas.add(ClassAreas.of(classes, plan.target().columns(), rowAreas, plan.adjustment()));
+        }
+        LayerOutput.write(folder.unfinished("summary.csv"), SummaryTables.csv(plan, areas));
+        LayerOutput.write(folder.unfinished("summary.json"), SummaryTables.json(plan, areas));
+        if (plan.config().outputs().geopackage()) {
+            PackageOutput.write(folder.unfinished("layers.gpkg"), plan, output.period(), summaries.classes(), areas,
+                    JsonText.of(record));
+        }
+        return areas;
+    }
+}

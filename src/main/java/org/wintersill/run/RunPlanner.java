@@ -1,0 +1,176 @@
+package org.wintersill.run;
+
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Set;
+import org.wintersill.climatology.FrequencyInterval;
+import org.wintersill.climatology.statistic.ClimatologyStatistics;
+import org.wintersill.climatology.statistic.Suitability;
+import org.wintersill.config.RunConfig;
+import org.wintersill.config.WinterConfig;
+import org.wintersill.engine.FoldJob;
+import org.wintersill.engine.FoldPlan;
+import org.wintersill.engine.FoldPlanner;
+import org.wintersill.engine.MemoryEstimate;
+import org.wintersill.grid.CoordinateOperations;
+import org.wintersill.grid.Crs;
+import org.wintersill.grid.GridGeometry;
+import org.wintersill.hardiness.Cultivar;
+import org.wintersill.problem.Notices;
+import org.wintersill.problem.Problem;
+import org.wintersill.problem.Problems;
+import org.wintersill.season.MissingDayPolicy;
+import org.wintersill.season.NightCurve;
+import org.wintersill.temperature.DailyTemperatureSource;
+import org.wintersill.time.MonthDay;
+import org.wintersill.time.Season;
+import org.wintersill.time.SeasonWindow;
+import org.wintersill.time.SeasonWindow.Hemisphere;
+
+/** Turns a configuration into a plan: opens every input, reconciles grids, calendars and curves, and refuses early. */
+public final class RunPlanner {
+    private final InputFormats formats;
+    private final CoordinateOperations operations;
+
+    public RunPlanner(InputFormats formats, CoordinateOperations operations) {
+        this.formats = formats;
+        this.operations = operations;
+    }
+
+    /**
+     * The plan.
+     *
+     * @param notices told of every assumption
+     * @throws org.wintersill.problem.ProblemException with all problems that can be found without each other
+     */
+    public RunPlan plan(RunConfig config, Notices notices) {
+        Problems problems = new Problems();
+        List<Cultivar> cultivars = new ArrayList<>();
+        List<DailyTemperatureSource> opened = new ArrayList<>();
+        problems.attempt(() -> cultivars.addAll(new CultivarSelection(config.cultivars()).read(notices)));
+        problems.attempt(() -> opened.add(formats.open(config.temperature().minimum(), notices)));
+        problems.attempt(() -> LayerSelection.check(config.outputs().layers(), choices(config, new int[] {0})));
+        problems.throwIfAny();
+        DailyTemperatureSource source = opened.get(0);
+        if (config.temperature().maximum().isPresent() || config.temperature().mean().isPresent()) {
+            notices.add("no model of this run needs the daily mean: maximum and mean temperatures are not read");
+        }
+        for (Cultivar cultivar : cultivars) {
+            if (!cultivar.status().dependable()) {
+                notices.add("the curve of cultivar " + cultivar.id() + " is " + cultivar.status().word()
+                        + ": do not plan by it");
+            }
+        }
+        String sourceName = source.files().isEmpty() ? "the record" : source.files().get(0).path();
+        TargetPlan targetPlan = TargetPlan.of(source.grid(), sourceName, config.elevation(), config.area(), formats, operations, notices);
+        GridGeometry target = targetPlan.target();
+        SeasonWindow window = window(config.winter(), target, notices);
+        MissingDayPolicy policy = MissingDayPolicy.named(config.missingDays()).orElseThrow();
+        WinterSelection winters = WinterSelection.of(source.days(), window, policy);
+        checkWinters(winters, source, sourceName);
+        checkCoverage(cultivars, window, config);
+        tellOfWinters(winters, notices);
+        ClimatologyStatistics.Choices choices = choices(config, winters.used().stream().mapToInt(Season::year).toArray());
+        FoldJob job = new FoldJob(source, targetPlan.window(), targetPlan.adjustment(), winters.used(), policy,
+                curves(cultivars, winters.used(), choices), choices.levels().length);
+        int threads = config.limits().threads().orElse(Runtime.getRuntime().availableProcessors());
+        long budget = Estimates.budget(config.limits());
+        long writers = Estimates.writerBytes(target, choices);
+        FoldPlan foldPlan = new FoldPlanner(job, threads, budget - Estimates.residentBytes(target, cultivars.size())).plan();
+        if (writers > budget) {
+            throw Problem.limit("writing the layers takes " + MemoryEstimate.text(writers)
+                    + " of memory, and the run may use " + MemoryEstimate.text(budget), "limits.memory",
+                    "Start Java with a larger -Xmx, raise limits.memory or choose a smaller area").asException();
+        }
+        return new RunPlan(config, source, target, targetPlan.adjustment(), window, winters.dropped(), cultivars, choices, job,
+                foldPlan, Estimates.of(job, foldPlan, writers, config.outputs()));
+    }
+
+    private static void checkWinters(WinterSelection winters, DailyTemperatureSource source, String sourceName) {
+        if (winters.used().isEmpty()) {
+            String found = winters.dropped().isEmpty() ? "no day lies inside the winter window"
+                    : winters.dropped().get(0).label() + ": " + winters.dropped().get(0).reason();
+            throw Problem.input("no winter of the record is complete enough to be used (" + source.days().date(0) + " to "
+                            + source.days().date(source.days().size() - 1) + "; " + found + ")", sourceName,
+                    "Give more files, another winter window or another rule for missing-days").asException();
+        }
+    }
+
+    private static void tellOfWinters(WinterSelection winters, Notices notices) {
+        for (RunPlan.DroppedWinter dropped : winters.dropped()) {
+            notices.add("winter " + dropped.label() + " is not used: " + dropped.reason());
+        }
+        int n = winters.used().size();
+        if (n < Suitability.FEWEST_WINTERS) {
+            notices.add("only " + n + " complete winters: too few for suitability classes");
+        }
+    }
+
+    private static void checkCoverage(List<Cultivar> cultivars, SeasonWindow window, RunConfig config) {
+        Problems problems = new Problems();
+        for (Cultivar cultivar : cultivars) {
+            cultivar.model().notCovering(window).ifPresent(reason -> problems.add(Problem.usage(
+                    "the curve of cultivar " + cultivar.id() + " does not cover the winter " + window.from() + " to " + window.to()
+                            + ": " + reason, config.cultivars().files().get(0).toString(),
+                    "Add rows for the missing dates, shorten the winter, or say outside: hold in the cultivar")));
+        }
+        problems.throwIfAny();
+    }
+
+    private static List<NightCurve[]> curves(List<Cultivar> cultivars, List<Season> seasons, ClimatologyStatistics.Choices choices) {
+        double[] others = java.util.Arrays.stream(choices.levels()).skip(1).asDoubleStream().toArray();
+        List<NightCurve[]> curves = new ArrayList<>();
+        for (Season season : seasons) {
+            curves.add(cultivars.stream().map(cultivar -> NightCurve.of(cultivar.model().overSeason(season), others))
+                    .toArray(NightCurve[]::new));
+        }
+        return curves;
+    }
+
+    /** Levels with LT50 first, whatever the order of the run file, since every margin refers to it. */
+    private static ClimatologyStatistics.Choices choices(RunConfig config, int[] years) {
+        Set<Integer> seen = new HashSet<>();
+        List<Integer> levels = new ArrayList<>(List.of(50));
+        seen.add(50);
+        for (int level : config.damage().levels()) {
+            if (seen.add(level)) {
+                levels.add(level);
+            }
+        }
+        return new ClimatologyStatistics.Choices(levels.stream().mapToInt(Integer::intValue).toArray(), config.damage().killing(),
+                FrequencyInterval.named(config.statistics().bounds()).orElseThrow(), config.statistics().interval(),
+                config.statistics().target(), config.classes().stream().mapToDouble(Double::doubleValue).toArray(), years);
+    }
+
+    private SeasonWindow window(WinterConfig config, GridGeometry target, Notices notices) {
+        Hemisphere hemisphere = config.hemisphere().orElseGet(() -> hemisphere(target, notices));
+        SeasonWindow standard = SeasonWindow.of(hemisphere);
+        MonthDay from = config.from().orElse(standard.from());
+        MonthDay to = config.to().orElse(standard.to());
+        boolean ownWindow = config.from().isPresent() || config.to().isPresent();
+        SeasonWindow window = new SeasonWindow(from, to, config.completeFrom().orElse(standard.completeFrom()),
+                config.completeTo().orElse(standard.completeTo()), hemisphere);
+        if (!window.isConsistent() && ownWindow && config.completeFrom().isEmpty() && config.completeTo().isEmpty()) {
+            window = new SeasonWindow(from, to, from, to, hemisphere);
+        }
+        if (!window.isConsistent()) {
+            throw Problem.usage("the part that must be complete, " + window.completeFrom() + " to " + window.completeTo()
+                    + ", is not inside the winter " + from + " to " + to, "winter.complete",
+                    "Give a part of the winter, such as " + from + ".." + to).asException();
+        }
+        return window;
+    }
+
+    private Hemisphere hemisphere(GridGeometry target, Notices notices) {
+        double[] centre = {(target.west() + target.east()) / 2, (target.north() + target.south()) / 2};
+        if (!target.crs().sameAs(operations.wgs84())) {
+            operations.between(target.crs(), operations.wgs84()).transform(centre, 1);
+        }
+        if (target.crs().kind() == Crs.Kind.GEOGRAPHIC && target.north() > 0 && target.south() < 0) {
+            notices.add("the grid lies on both sides of the equator; one winter window is used for all of it, set "
+                    + "winter.hemisphere to choose");
+        }
+        return centre[1] < 0 ? Hemisphere.SOUTH : Hemisphere.NORTH;
+    }
+}

@@ -1,0 +1,120 @@
+package org.wintersill.run;
+
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import org.wintersill.engine.Workers;
+import org.wintersill.hardiness.Cultivar;
+import org.wintersill.problem.Notices;
+import org.wintersill.temperature.SourceFile;
+
+/**
+ * {@code record.json}: what made the outputs. No clock, user, host or absolute path, so that the same input gives the same
+ * bytes; the number of threads and the memory limit stay out for the same reason, since no result depends on them.
+ */
+final class RunRecord {
+    private RunRecord() {
+    }
+
+    /** What is known before the outputs exist: program, configuration, inputs, winters, cultivars. */
+    static Map<String, Object> begin(RunPlan plan, Workers workers) {
+        Map<String, Object> record = new LinkedHashMap<>();
+        record.put("version", 1);
+        record.put("program", RunVersion.program());
+        record.put("title", plan.config().title());
+        record.put("caution", Caution.SHORT);
+        record.put("configuration", plan.config().effective());
+        record.put("inputs", inputs(plan, workers));
+        record.put("grid", plan.target().describe());
+        record.put("temperature-grid", plan.source().grid().describe());
+        record.put("winter-window", plan.window().from() + " to " + plan.window().to() + ", complete part "
+                + plan.window().completeFrom() + " to " + plan.window().completeTo());
+        record.put("winters", plan.seasons().stream().map(season -> season.label()).toList());
+        Map<String, Object> dropped = new LinkedHashMap<>();
+        plan.dropped().forEach(winter -> dropped.put(winter.label(), winter.reason()));
+        record.put("winters-not-used", dropped);
+        record.put("cultivars", plan.cultivars().stream().map(RunRecord::cultivar).toList());
+        return record;
+    }
+
+    private static Map<String, Object> cultivar(Cultivar cultivar) {
+        Map<String, Object> entry = new LinkedHashMap<>();
+        entry.put("id", cultivar.id());
+        entry.put("name", cultivar.name());
+        entry.put("species", cultivar.species());
+        entry.put("organ", cultivar.organ());
+        entry.put("status", cultivar.status().word());
+        entry.put("source", cultivar.source());
+        entry.put("model", cultivar.model().id());
+        return entry;
+    }
+
+    private static List<Map<String, Object>> inputs(RunPlan plan, Workers workers) {
+        List<Map<String, Object>> inputs = new ArrayList<>();
+        Path base = plan.config().baseFolder().toAbsolutePath().normalize();
+        List<Path> paths = new ArrayList<>();
+        for (SourceFile file : plan.source().files()) {
+            paths.add(Path.of(file.path()));
+            Map<String, Object> entry = entry(base, Path.of(file.path()), "minimum temperature");
+            entry.put("format", file.format());
+            entry.put("variable", file.variable());
+            entry.put("unit", file.unit());
+            entry.put("calendar", file.calendar());
+            entry.put("period", file.firstDate() + " to " + file.lastDate());
+            entry.put("days", file.dayCount());
+            entry.put("grid", file.grid());
+            inputs.add(entry);
+        }
+        plan.config().elevation().ifPresent(elevation -> {
+            add(inputs, paths, base, elevation.dem().file(), "terrain model");
+            elevation.sourceHeight().ifPresent(height -> add(inputs, paths, base, height.file(), "source heights"));
+        });
+        plan.config().cultivars().files().forEach(file -> add(inputs, paths, base, file, "cultivars"));
+        String[] digests = new String[paths.size()];
+        workers.forEach(paths.size(), (worker, task) -> digests[task] = Digests.ofFile(paths.get(task)));
+        for (int i = 0; i < digests.length; i++) {
+            inputs.get(i).put("bytes", paths.get(i).toFile().length());
+            inputs.get(i).put("sha256", digests[i]);
+        }
+        return inputs;
+    }
+
+    private static void add(List<Map<String, Object>> inputs, List<Path> paths, Path base, Path file, String role) {
+        paths.add(file);
+        inputs.add(entry(base, file, role));
+    }
+
+    private static Map<String, Object> entry(Path base, Path file, String role) {
+        Map<String, Object> entry = new LinkedHashMap<>();
+        Path absolute = file.toAbsolutePath().normalize();
+        boolean sameRoot = absolute.getRoot() != null && absolute.getRoot().equals(base.getRoot());
+        String name = sameRoot && absolute.startsWith(base) ? base.relativize(absolute).toString() : absolute.getFileName().toString();
+        entry.put("path", name.replace('\\', '/'));
+        entry.put("role", role);
+        return entry;
+    }
+
+    /** Adds what is known at the end: outputs with their fingerprints, notices with their counts. */
+    static void complete(Map<String, Object> record, OutputFolder folder, Notices notices, Workers workers) {
+        List<String> names = folder.names();
+        String[] digests = new String[names.size()];
+        long[] sizes = new long[names.size()];
+        workers.forEach(names.size(), (worker, task) -> {
+            Path file = folder.unfinished(names.get(task));
+            sizes[task] = file.toFile().length();
+            digests[task] = Digests.ofFile(file);
+        });
+        List<Map<String, Object>> outputs = new ArrayList<>();
+        for (int i = 0; i < digests.length; i++) {
+            Map<String, Object> entry = new LinkedHashMap<>();
+            entry.put("path", names.get(i));
+            entry.put("bytes", sizes[i]);
+            entry.put("sha256", digests[i]);
+            outputs.add(entry);
+        }
+        record.put("outputs", outputs);
+        record.put("notices", notices.counts());
+    }
+}

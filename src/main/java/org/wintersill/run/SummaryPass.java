@@ -1,0 +1,247 @@
+package org.wintersill.run;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+import org.wintersill.climatology.ClimatologyStatistic;
+import org.wintersill.climatology.WinterRecord;
+import org.wintersill.climatology.statistic.ClimatologyStatistics;
+import org.wintersill.climatology.statistic.DamageProbability;
+import org.wintersill.climatology.statistic.MarginLow;
+import org.wintersill.climatology.statistic.Suitability;
+import org.wintersill.engine.Progress;
+import org.wintersill.engine.WinterStore;
+import org.wintersill.engine.Workers;
+import org.wintersill.layer.LayerDefinition;
+import org.wintersill.layer.RasterHeader;
+import org.wintersill.layer.RasterWriter;
+import org.wintersill.season.WinterValues;
+
+/**
+ * From the stored winters to summary layers, strip after strip of tile rows: workers fill the rows of a strip, after which every
+ * layer's writer takes them. Keeps the class of every cell for tables and polygons.
+ */
+final class SummaryPass {
+    /** Rows that a worker fills at a time, so that all winters of them fit its memory. */
+    private static final int TASK_ROWS = 8;
+
+    private final RunPlan plan;
+    private final WinterStore store;
+    private final LayerOutput output;
+    private final LayerSelection selection;
+    private final Workers workers;
+    private final Progress progress;
+    private final int rows;
+    private final int columns;
+    private final int levels;
+    /** {@code [cultivar][cell]}: 1 to 4, 0 for missing. */
+    private final byte[][] classes;
+
+    SummaryPass(RunPlan plan, WinterStore store, LayerOutput output, LayerSelection selection, Workers workers, Progress progress) {
+        this.plan = plan;
+        this.store = store;
+        this.output = output;
+        this.selection = selection;
+        this.workers = workers;
+        this.progress = progress;
+        rows = plan.target().rows();
+        columns = plan.target().columns();
+        levels = plan.job().levels();
+        classes = new byte[plan.cultivars().size()][rows * columns];
+    }
+
+    /** Extra planes that the pass keeps in the store: frequency of killing winters and low margin of each cultivar. */
+    static int extraPlanes(int cultivars) {
+        return 2 * cultivars;
+    }
+
+    byte[][] classes() {
+        return classes;
+    }
+
+    /** One file and the values of the strip in work. */
+    private record OpenLayer(ClimatologyStatistic statistic, Optional<RasterWriter> writer, float[] strip) {
+    }
+
+    /** Writes the summary layers of a cultivar. */
+    void cultivar(int cultivar) {
+        List<ClimatologyStatistic> statistics = ClimatologyStatistics.ofCultivar(plan.choices());
+        write(statistics, Optional.of(cultivar));
+    }
+
+    /** Writes the summary layers that belong to no cultivar. */
+    void shared() {
+        write(ClimatologyStatistics.shared(plan.choices()), Optional.empty());
+    }
+
+    private void write(List<ClimatologyStatistic> statistics, Optional<Integer> cultivar) {
+        List<OpenLayer> layers = new ArrayList<>();
+        try {
+            int stripRows = Math.min(rows, output.rowsAtOnce());
+            for (ClimatologyStatistic statistic : statistics) {
+                LayerDefinition layer = statistic.layer();
+                Optional<RasterWriter> writer = selection.contains(layer.id())
+                        ? Optional.of(output.summary(layer, cultivar.map(plan.cultivars()::get))) : Optional.empty();
+                layers.add(new OpenLayer(statistic, writer, new float[stripRows * columns]));
+            }
+            for (int row = 0; row < rows; row += stripRows) {
+                int count = Math.min(stripRows, rows - row);
+                fill(layers, cultivar, row, count);
+                for (OpenLayer layer : layers) {
+                    float[] values = count == stripRows ? layer.strip() : Arrays.copyOf(layer.strip(), count * columns);
+                    int firstRow = row;
+                    layer.writer().ifPresent(writer -> writer.write(0, firstRow, count, values));
+                }
+                progress.advance((long) count * layers.size());
+                workers.checkCancelled();
+            }
+            layers.forEach(layer -> layer.writer().ifPresent(RasterWriter::finish));
+        } finally {
+            layers.forEach(layer -> layer.writer().ifPresent(RasterWriter::close));
+        }
+    }
+
+    private void fill(List<OpenLayer> layers, Optional<Integer> cultivar, int firstRow, int count) {
+        workers.forEach((count + TASK_ROWS - 1) / TASK_ROWS, (worker, task) -> {
+            int row = firstRow + task * TASK_ROWS;
+            int taskRows = Math.min(TASK_ROWS, firstRow + count - row);
+            WinterRecord record = record(cultivar, row, taskRows);
+            float[] out = new float[taskRows * columns];
+            for (OpenLayer layer : layers) {
+                layer.statistic().summarise(record, out, 0, out.length);
+                System.arraycopy(out, 0, layer.strip(), (row - firstRow) * columns, out.length);
+                cultivar.ifPresent(number -> keep(number, layer.statistic(), row, out));
+            }
+        });
+    }
+
+    /** Keeps what later steps need: classes in memory, frequency and low margin in the store. */
+    private void keep(int cultivar, ClimatologyStatistic statistic, int row, float[] values) {
+        if (statistic instanceof Suitability) {
+            for (int i = 0; i < values.length; i++) {
+                classes[cultivar][row * columns + i] = (byte) (values[i] == values[i] ? values[i] : 0);
+            }
+        } else if (statistic instanceof MarginLow) {
+            store.writeExtra(2 * cultivar + 1, row, values);
+        } else if (statistic instanceof DamageProbability probability
+                && probability.isFrequencyOf(plan.choices().killingLevel())) {
+            store.writeExtra(2 * cultivar, row, values);
+        }
+    }
+
+    private WinterRecord record(Optional<Integer> cultivar, int row, int count) {
+        int winters = plan.seasons().size();
+        float[][] minimum = new float[winters][];
+        float[][][] margins = new float[cultivar.isPresent() ? levels : 0][winters][];
+        float[][] damage = new float[cultivar.isPresent() ? winters : 0][];
+        for (int winter = 0; winter < winters; winter++) {
+            if (cultivar.isEmpty()) {
+                minimum[winter] = store.read(WinterValues.minimumPlane(), winter, row, count);
+                continue;
+            }
+            for (int level = 0; level < levels; level++) {
+                margins[level][winter] = store.read(WinterValues.marginPlane(cultivar.get(), level, levels), winter, row, count);
+            }
+            damage[winter] = store.read(WinterValues.damagePlane(cultivar.get(), levels), winter, row, count);
+        }
+        return new WinterRecord(plan.choices().years(), minimum, margins, damage);
+    }
+
+    /** Writes how many cultivars meet the target in each cell, and the best low margin. */
+    void choice() {
+        double target = plan.choices().target();
+        LayerDefinition layer = SharedLayers.choice(plan.cultivars().size(), target);
+        if (!selection.contains(layer.id())) {
+            return;
+        }
+        List<RasterHeader.Band> bands = List.of(new RasterHeader.Band("Cultivars that meet the target", "1"),
+                new RasterHeader.Band("Best margin, one winter in ten", "K"));
+        try (RasterWriter writer = output.bands(layer, bands)) {
+            int stripRows = Math.min(rows, output.rowsAtOnce());
+            for (int row = 0; row < rows; row += stripRows) {
+                int count = Math.min(stripRows, rows - row);
+                float[] meeting = new float[count * columns];
+                float[] best = new float[count * columns];
+                choose(row, count, target, meeting, best);
+                writer.write(0, row, count, meeting);
+                writer.write(1, row, count, best);
+                progress.advance(2L * count);
+            }
+            writer.finish();
+        }
+    }
+
+    private void choose(int row, int count, double target, float[] meeting, float[] best) {
+        Arrays.fill(meeting, Float.NaN);
+        Arrays.fill(best, Float.NaN);
+        for (int cultivar = 0; cultivar < plan.cultivars().size(); cultivar++) {
+            float[] frequency = store.readExtra(2 * cultivar, row, count);
+            float[] margin = store.readExtra(2 * cultivar + 1, row, count);
+            for (int i = 0; i < best.length; i++) {
+                if (margin[i] == margin[i]) {
+                    float meets = frequency[i] <= (float) target ? 1 : 0;
+                    meeting[i] = meeting[i] == meeting[i] ? meeting[i] + meets : meets;
+                    best[i] = best[i] >= margin[i] ? best[i] : margin[i];
+                }
+            }
+        }
+    }
+
+    /** Writes what the elevation adjustment bridged. */
+    void heightChange() {
+        LayerDefinition layer = SharedLayers.heightChange();
+        if (!plan.adjustment().hasHeights() || !selection.contains(layer.id())) {
+            return;
+        }
+        try (RasterWriter writer = output.summary(layer, Optional.empty())) {
+            int stripRows = Math.min(rows, output.rowsAtOnce());
+            for (int row = 0; row < rows; row += stripRows) {
+                int count = Math.min(stripRows, rows - row);
+                float[] values = new float[count * columns];
+                for (int i = 0; i < values.length; i++) {
+                    values[i] = plan.adjustment().heightChange(row + i / columns, i % columns);
+                }
+                writer.write(0, row, count, values);
+                progress.advance(count);
+            }
+            writer.finish();
+        }
+    }
+
+    /** Writes the layers with one band a winter. */
+    void winters() {
+        winterLayer(WinterLayers.MINIMUM, Optional.empty(), WinterValues.minimumPlane());
+        for (int c = 0; c < plan.cultivars().size(); c++) {
+            winterLayer(WinterLayers.MARGIN, Optional.of(c), WinterValues.marginPlane(c, 0, levels));
+            winterLayer(WinterLayers.DAMAGE, Optional.of(c), WinterValues.damagePlane(c, levels));
+            winterLayer(WinterLayers.WORST_NIGHT, Optional.of(c), WinterValues.worstNightPlane(c, levels));
+        }
+    }
+
+    private void winterLayer(LayerDefinition layer, Optional<Integer> cultivar, int plane) {
+        if (!selection.contains(layer.id())) {
+            return;
+        }
+        try (RasterWriter writer = output.winters(layer, cultivar.map(plan.cultivars()::get))) {
+            int stripRows = Math.min(rows, output.rowsAtOnce());
+            for (int winter = 0; winter < plan.seasons().size(); winter++) {
+                for (int row = 0; row < rows; row += stripRows) {
+                    int count = Math.min(stripRows, rows - row);
+                    writer.write(winter, row, count, store.read(plane, winter, row, count));
+                    progress.advance(count);
+                    workers.checkCancelled();
+                }
+            }
+            writer.finish();
+        }
+    }
+
+    /** Size of the whole pass in the unit of its progress. */
+    long size(boolean winterLayers) {
+        long layers = (long) ClimatologyStatistics.ofCultivar(plan.choices()).size() * plan.cultivars().size()
+                + ClimatologyStatistics.shared(plan.choices()).size() + 3;
+        long winters = winterLayers ? plan.seasons().size() * (1L + 3L * plan.cultivars().size()) : 0;
+        return rows * (layers + winters);
+    }
+}

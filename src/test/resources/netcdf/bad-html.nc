@@ -1,0 +1,3 @@
+
+<!DOCTYPE html>
+<html><title>Sign in</title></html>
