@@ -70,7 +70,6 @@ class MainTest {
         "map a.yaml b.yaml           | put it in quotation marks: --minimum 'tmin-*.nc'",
         "map --set title RUN         | does not have the form KEY=VALUE",
         "map --threads x RUN         | 'x' is not a number; accepted: whole numbers from 1 to 1024",
-        "map --overwrite --resume RUN| both given",
         "map --quiet --verbose RUN   | both given",
         "map none.yaml               | there is no such file",
         "map --out                   | missing",
@@ -111,7 +110,7 @@ class MainTest {
         assertEquals(64L << 20, commands.config.limits().memoryBytes().getAsLong());
         assertTrue(commands.config.elevation().isPresent());
         assertEquals(Path.of("made").toAbsolutePath(), commands.config.outputs().folder().toAbsolutePath().normalize());
-        assertTrue(commands.mapOptions.overwrite() && commands.mapOptions.json() && !commands.mapOptions.resume());
+        assertTrue(commands.mapOptions.overwrite() && commands.mapOptions.json());
         assertEquals(List.of("map", run, "--out", "made"), commands.mapOptions.arguments().subList(0, 4));
     }
 
