@@ -12,18 +12,20 @@ public final class Main {
     }
 
     public static void main(String[] arguments) {
-        PrintStream out = stream(FileDescriptor.out);
-        PrintStream err = stream(FileDescriptor.err);
+        System.exit(process(arguments, commands()));
+    }
+
+    /** The program as a process: with its own streams, and stopping when it is asked to end. */
+    static int process(String[] arguments, Commands commands) {
         Cancellation cancellation = new Cancellation();
         Interruption interruption = new Interruption(cancellation);
         interruption.watch();
-        int code;
         try {
-            code = run(arguments, out, err, Terminal.onStandardError(), cancellation, commands());
+            return run(arguments, stream(FileDescriptor.out), stream(FileDescriptor.err), Terminal.onStandardError(), cancellation,
+                    commands);
         } finally {
             interruption.workEnded();
         }
-        System.exit(code);
     }
 
     /** UTF-8 in every locale, so that results are the same bytes everywhere. */

@@ -1,0 +1,45 @@
+package org.wintersill.cli;
+
+import java.util.function.Consumer;
+import org.wintersill.config.RunConfig;
+
+/** Remembers what it was asked and does as told. */
+final class FakeCommands implements Commands {
+    String called = "";
+    RunConfig config;
+    MapOptions mapOptions;
+    ExplainOptions explainOptions;
+    InspectOptions inspectOptions;
+    int answer;
+    Consumer<Console> work = console -> { };
+
+    @Override
+    public int map(RunConfig given, MapOptions options, Console console) {
+        mapOptions = options;
+        return done("map", given, console);
+    }
+
+    @Override
+    public int plan(RunConfig given, PlanOptions options, Console console) {
+        return done("plan", given, console);
+    }
+
+    @Override
+    public int inspect(InspectOptions options, Console console) {
+        inspectOptions = options;
+        return done("inspect", null, console);
+    }
+
+    @Override
+    public int explain(RunConfig given, ExplainOptions options, Console console) {
+        explainOptions = options;
+        return done("explain", given, console);
+    }
+
+    private int done(String name, RunConfig given, Console console) {
+        called = name;
+        config = given;
+        work.accept(console);
+        return answer;
+    }
+}
