@@ -2,12 +2,10 @@ package org.wintersill.run;
 
 import java.io.IOException;
 import java.io.InputStream;
-import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 import org.wintersill.config.FileEntry;
 import org.wintersill.config.TemperatureEntry;
@@ -15,8 +13,11 @@ import org.wintersill.elevation.ElevationField;
 import org.wintersill.elevation.ElevationFormat;
 import org.wintersill.grid.CrsParser;
 import org.wintersill.grid.GridGeometry;
+import org.wintersill.io.geotiff.read.GeotiffElevationFormat;
+import org.wintersill.io.geotiff.read.GeotiffTemperatureFormat;
 import org.wintersill.io.netcdf.NetcdfElevationFormat;
 import org.wintersill.io.netcdf.NetcdfTemperatureFormat;
+import org.wintersill.io.netcdf.UnknownContent;
 import org.wintersill.problem.Notices;
 import org.wintersill.problem.Problem;
 import org.wintersill.problem.Problems;
@@ -35,8 +36,8 @@ public final class InputFormats {
     private final List<ElevationFormat> elevationFormats;
 
     public InputFormats(CrsParser crs) {
-        temperatureFormats = List.of(new NetcdfTemperatureFormat(crs));
-        elevationFormats = List.of(new NetcdfElevationFormat(crs));
+        temperatureFormats = List.of(new NetcdfTemperatureFormat(crs), new GeotiffTemperatureFormat(crs));
+        elevationFormats = List.of(new GeotiffElevationFormat(crs), new NetcdfElevationFormat(crs));
     }
 
     /**
@@ -65,7 +66,7 @@ public final class InputFormats {
     public DailyTemperatureSource open(Path file, TemperatureRequest request, Notices notices) {
         byte[] head = head(file);
         return temperatureFormats.stream().filter(format -> format.recognises(file, head)).findFirst()
-                .orElseThrow(() -> unknown(file, head, "netCDF or GeoTIFF").asException()).open(file, request, notices);
+                .orElseThrow(() -> UnknownContent.describe(file, head).asException()).open(file, request, notices);
     }
 
     /** Reads ground heights. */
@@ -81,7 +82,7 @@ public final class InputFormats {
     private ElevationFormat elevationFormat(Path file) {
         byte[] head = head(file);
         Optional<ElevationFormat> format = elevationFormats.stream().filter(known -> known.recognises(file, head)).findFirst();
-        return format.orElseThrow(() -> unknown(file, head, "GeoTIFF or netCDF").asException());
+        return format.orElseThrow(() -> UnknownContent.describe(file, head).asException());
     }
 
     private static byte[] head(Path file) {
@@ -97,25 +98,5 @@ public final class InputFormats {
         } catch (IOException e) {
             throw Problem.input("the file cannot be read: " + e.getMessage(), file.toString(), "Check its permissions").asException(e);
         }
-    }
-
-    /** Says what a file that no format knows seems to be. */
-    private static Problem unknown(Path file, byte[] head, String accepted) {
-        String text = new String(head, StandardCharsets.ISO_8859_1).trim().toLowerCase(Locale.ROOT);
-        if (head.length == 0) {
-            return Problem.input("the file is empty", file.toString(), "Fetch it again");
-        }
-        if (head.length > 1 && (head[0] & 255) == 0x1f && (head[1] & 255) == 0x8b) {
-            return Problem.input("the file is compressed with gzip", file.toString(), "Unpack it first, for example with gunzip");
-        }
-        if (text.startsWith("pk")) {
-            return Problem.input("the file is a zip archive", file.toString(), "Unpack it first");
-        }
-        if (text.startsWith("<!doctype") || text.startsWith("<html")) {
-            return Problem.input("the file is a web page, probably a log-in or error page saved under this name", file.toString(),
-                    "Fetch the data again");
-        }
-        return Problem.input("the file is neither " + accepted.replace(" or ", " nor "), file.toString(),
-                "Give a " + accepted + " file");
     }
 }

@@ -29,7 +29,7 @@ final class CfGridMapping {
     /** @throws IllegalArgumentException whose message says what the mapping lacks */
     static SystemDefinition read(GridMappingAttributes a, double metresPerUnit) {
         String mapping = a.text("grid_mapping_name");
-        GeographicBase base = base(a);
+        GeographicSystem base = base(a);
         if (mapping.equals("latitude_longitude")) {
             return SystemDefinition.geographic(base);
         }
@@ -125,7 +125,7 @@ final class CfGridMapping {
     }
 
     /** WGS 84 if the mapping gives no figure of the Earth. */
-    private static GeographicBase base(GridMappingAttributes a) {
+    private static GeographicSystem base(GridMappingAttributes a) {
         Ellipsoid figure;
         if (a.has("semi_major_axis")) {
             double major = a.required("semi_major_axis");
@@ -139,14 +139,14 @@ final class CfGridMapping {
         } else if (a.has("earth_radius")) {
             figure = WktReader.ellipsoid("sphere", 0, a.required("earth_radius"), 0);
         } else {
-            return GeographicBase.WGS84;
+            return GeographicSystem.WGS84;
         }
         double meridian = a.number("longitude_of_prime_meridian", 0);
-        GeographicBase base = GeographicBase.on(figure);
+        GeographicSystem base = GeographicSystem.on(figure);
         if (figure.sameFigure(Ellipsoid.GRS80) && !figure.sameFigure(Ellipsoid.WGS84)) {
-            base = GeographicBase.greenwich("GRS 1980", 0, "Unknown datum on GRS 1980", 0, Ellipsoid.GRS80);
+            base = GeographicSystem.greenwich("GRS 1980", 0, "Unknown datum on GRS 1980", 0, Ellipsoid.GRS80);
         }
-        return meridian == 0 ? base : new GeographicBase(base.name(), 0, base.datum(), 0, base.ellipsoid(),
+        return meridian == 0 ? base : new GeographicSystem(base.name(), 0, base.datum(), 0, base.ellipsoid(),
                 a.has("prime_meridian_name") ? a.text("prime_meridian_name") : "meridian", meridian, base.toWgs84());
     }
 

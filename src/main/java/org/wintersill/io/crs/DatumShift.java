@@ -11,13 +11,13 @@ import java.util.List;
 final class DatumShift {
     private static final double ARC_SECOND = Math.PI / 180 / 3600;
 
-    private final GeographicBase from;
-    private final GeographicBase to;
+    private final GeographicSystem from;
+    private final GeographicSystem to;
     private final double[][] out;
     private final double[][] in;
 
     /** @param fromShift and {@code toShift}: seven parameters each or none */
-    DatumShift(GeographicBase from, List<Double> fromShift, GeographicBase to, List<Double> toShift) {
+    DatumShift(GeographicSystem from, List<Double> fromShift, GeographicSystem to, List<Double> toShift) {
         this.from = from;
         this.to = to;
         this.out = fromShift.isEmpty() ? null : matrix(fromShift);

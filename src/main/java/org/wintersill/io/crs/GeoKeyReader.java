@@ -40,7 +40,7 @@ final class GeoKeyReader {
         return value > 0 && value < GeoKeys.USER_DEFINED;
     }
 
-    private static GeographicBase base(GeoKeys keys, CrsParser parser) {
+    private static GeographicSystem base(GeoKeys keys, CrsParser parser) {
         int code = keys.number(GeoKeys.GEOGRAPHIC_TYPE, 0);
         if (isCode(code)) {
             return SystemDefinition.of(parser.fromCode("EPSG:" + code)).base();
@@ -50,7 +50,7 @@ final class GeoKeyReader {
             throw new IllegalArgumentException("the angular unit has code " + unit + "; degrees (9102) are expected");
         }
         int datum = keys.number(GeoKeys.DATUM, 0);
-        for (GeographicBase known : new GeographicBase[] {GeographicBase.WGS84, GeographicBase.ETRS89, GeographicBase.NAD83}) {
+        for (GeographicSystem known : new GeographicSystem[] {GeographicSystem.WGS84, GeographicSystem.ETRS89, GeographicSystem.NAD83}) {
             if (datum == known.datumCode()) {
                 return known;
             }
@@ -62,7 +62,7 @@ final class GeoKeyReader {
         String citation = keys.text(GeoKeys.GEOGRAPHIC_CITATION);
         if (Double.isNaN(major) && (ellipsoid == 7030 || ellipsoid == 7019)) {
             Ellipsoid known = ellipsoid == 7030 ? Ellipsoid.WGS84 : Ellipsoid.GRS80;
-            return GeographicBase.greenwich(name(citation, "GCS Name", "unnamed"), 0, name(citation, "Datum", "unnamed"), 0, known);
+            return GeographicSystem.greenwich(name(citation, "GCS Name", "unnamed"), 0, name(citation, "Datum", "unnamed"), 0, known);
         }
         if (!Double.isFinite(major) || !Double.isFinite(inverse)) {
             throw new IllegalArgumentException("a user-defined system without its ellipsoid's axes");
@@ -70,7 +70,7 @@ final class GeoKeyReader {
         Ellipsoid figure = WktReader.ellipsoid(name(citation, "Ellipsoid", inverse == 0 ? "sphere" : "ellipsoid"),
                 isCode(ellipsoid) ? ellipsoid : 0, major, inverse);
         double meridian = keys.real(GeoKeys.MERIDIAN_LONGITUDE, 0);
-        return new GeographicBase(name(citation, "GCS Name", "unnamed"), 0, name(citation, "Datum", "unnamed").replace('_', ' '),
+        return new GeographicSystem(name(citation, "GCS Name", "unnamed"), 0, name(citation, "Datum", "unnamed").replace('_', ' '),
                 isCode(datum) ? datum : 0, figure, meridian == 0 ? "Greenwich" : name(citation, "Primem", "meridian"), meridian,
                 java.util.List.of());
     }
@@ -87,7 +87,7 @@ final class GeoKeyReader {
     }
 
     private static SystemDefinition projected(GeoKeys keys, CrsParser parser) {
-        GeographicBase base = base(keys, parser);
+        GeographicSystem base = base(keys, parser);
         int unit = keys.number(GeoKeys.LINEAR_UNITS, 9001);
         double metres = unit == GeoKeys.USER_DEFINED ? keys.real(GeoKeys.LINEAR_UNIT_SIZE, Double.NaN) : Units.metres(unit);
         if (!(metres > 0)) {

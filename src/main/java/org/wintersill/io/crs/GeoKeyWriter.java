@@ -61,7 +61,7 @@ final class GeoKeyWriter {
         }
     }
 
-    private static void base(GeoKeys.Builder keys, GeographicBase base) {
+    private static void base(GeoKeys.Builder keys, GeographicSystem base) {
         keys.put(GeoKeys.ANGULAR_UNITS, GeoKeys.DEGREE);
         if (hasKeyCode(base.code())) {
             keys.put(GeoKeys.GEOGRAPHIC_TYPE, base.code());

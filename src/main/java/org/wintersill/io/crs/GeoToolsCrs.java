@@ -17,7 +17,7 @@ import org.wintersill.problem.ProblemException;
  */
 public final class GeoToolsCrs implements CrsParser, CoordinateOperations {
     private static final String OTHER_SYSTEM = "Bring the data to another system first, for example with gdalwarp -t_srs EPSG:4326";
-    private static final Crs WGS84 = SystemDefinition.geographic(GeographicBase.WGS84).toCrs();
+    private static final Crs WGS84 = SystemDefinition.geographic(GeographicSystem.WGS84).toCrs();
 
     private final Map<Integer, Crs> byCode = new ConcurrentHashMap<>();
 
@@ -119,7 +119,7 @@ public final class GeoToolsCrs implements CrsParser, CoordinateOperations {
     }
 
     /** Parameters to WGS 84: those of the text; else, for a datum known by code, those of the EPSG dataset. */
-    private static List<Double> shift(GeographicBase base) {
+    private static List<Double> shift(GeographicSystem base) {
         if (!base.toWgs84().isEmpty() || base.code() == 0 || base.ellipsoid().sameFigure(Ellipsoid.WGS84)
                 || base.ellipsoid().sameFigure(Ellipsoid.GRS80)) {
             return base.toWgs84();

@@ -19,12 +19,12 @@ final class KnownSystems {
 
     static Optional<SystemDefinition> of(int code) {
         return switch (code) {
-            case 4326 -> Optional.of(SystemDefinition.geographic(GeographicBase.WGS84));
-            case 4258 -> Optional.of(SystemDefinition.geographic(GeographicBase.ETRS89));
-            case 4269 -> Optional.of(SystemDefinition.geographic(GeographicBase.NAD83));
-            case 3857 -> Optional.of(SystemDefinition.projected("WGS 84 / Pseudo-Mercator", 3857, GeographicBase.WGS84,
+            case 4326 -> Optional.of(SystemDefinition.geographic(GeographicSystem.WGS84));
+            case 4258 -> Optional.of(SystemDefinition.geographic(GeographicSystem.ETRS89));
+            case 4269 -> Optional.of(SystemDefinition.geographic(GeographicSystem.NAD83));
+            case 3857 -> Optional.of(SystemDefinition.projected("WGS 84 / Pseudo-Mercator", 3857, GeographicSystem.WGS84,
                     ProjectionMethod.PSEUDO_MERCATOR, Map.of(), 1));
-            case 3035 -> Optional.of(SystemDefinition.projected("ETRS89-extended / LAEA Europe", 3035, GeographicBase.ETRS89,
+            case 3035 -> Optional.of(SystemDefinition.projected("ETRS89-extended / LAEA Europe", 3035, GeographicSystem.ETRS89,
                     ProjectionMethod.LAMBERT_EQUAL_AREA,
                     Map.of(LATITUDE, 52.0, LONGITUDE, 10.0, EASTING, 4321000.0, NORTHING, 3210000.0), 1));
             default -> utm(code);
@@ -34,15 +34,15 @@ final class KnownSystems {
     private static Optional<SystemDefinition> utm(int code) {
         int zone = code % 100;
         return switch (code / 100) {
-            case 326 -> zone >= 1 && zone <= 60 ? zone("WGS 84", code, GeographicBase.WGS84, zone, true) : Optional.empty();
-            case 327 -> zone >= 1 && zone <= 60 ? zone("WGS 84", code, GeographicBase.WGS84, zone, false) : Optional.empty();
-            case 258 -> zone >= 28 && zone <= 38 ? zone("ETRS89", code, GeographicBase.ETRS89, zone, true) : Optional.empty();
-            case 269 -> zone >= 1 && zone <= 23 ? zone("NAD83", code, GeographicBase.NAD83, zone, true) : Optional.empty();
+            case 326 -> zone >= 1 && zone <= 60 ? zone("WGS 84", code, GeographicSystem.WGS84, zone, true) : Optional.empty();
+            case 327 -> zone >= 1 && zone <= 60 ? zone("WGS 84", code, GeographicSystem.WGS84, zone, false) : Optional.empty();
+            case 258 -> zone >= 28 && zone <= 38 ? zone("ETRS89", code, GeographicSystem.ETRS89, zone, true) : Optional.empty();
+            case 269 -> zone >= 1 && zone <= 23 ? zone("NAD83", code, GeographicSystem.NAD83, zone, true) : Optional.empty();
             default -> Optional.empty();
         };
     }
 
-    private static Optional<SystemDefinition> zone(String name, int code, GeographicBase base, int zone, boolean north) {
+    private static Optional<SystemDefinition> zone(String name, int code, GeographicSystem base, int zone, boolean north) {
         return Optional.of(SystemDefinition.projected(name + " / UTM zone " + zone + (north ? "N" : "S"), code, base,
                 ProjectionMethod.TRANSVERSE_MERCATOR, utmParameters(zone, north), 1));
     }

@@ -16,7 +16,7 @@ import org.wintersill.grid.Crs;
  * @param metresPerUnit length of one unit of the axes, metres; 1 for longitude and latitude
  * @param pole rotated pole or null
  */
-record SystemDefinition(String name, int code, GeographicBase base, ProjectionMethod method,
+record SystemDefinition(String name, int code, GeographicSystem base, ProjectionMethod method,
                         Map<ProjectionParameter, Double> parameters, double metresPerUnit, Crs.RotatedPole pole) {
 
     private static final double SAME = 1e-9;
@@ -35,16 +35,16 @@ record SystemDefinition(String name, int code, GeographicBase base, ProjectionMe
         parameters = Collections.unmodifiableMap(complete);
     }
 
-    static SystemDefinition geographic(GeographicBase base) {
+    static SystemDefinition geographic(GeographicSystem base) {
         return new SystemDefinition(base.name(), base.code(), base, null, Map.of(), 1, null);
     }
 
-    static SystemDefinition projected(String name, int code, GeographicBase base, ProjectionMethod method,
+    static SystemDefinition projected(String name, int code, GeographicSystem base, ProjectionMethod method,
                                       Map<ProjectionParameter, Double> parameters, double metresPerUnit) {
         return new SystemDefinition(name, code, base, method, parameters, metresPerUnit, null);
     }
 
-    static SystemDefinition rotated(GeographicBase base, Crs.RotatedPole pole) {
+    static SystemDefinition rotated(GeographicSystem base, Crs.RotatedPole pole) {
         return new SystemDefinition("Rotated pole at " + Wkt.number(pole.latitude()) + ", "
                 + Wkt.number(pole.longitude()), 0, base, null, Map.of(), 1, pole);
     }

@@ -48,7 +48,7 @@ final class Wkt1Writer {
         out.append(",PARAMETER[").append(quote(name)).append(',').append(Wkt.number(value)).append(']');
     }
 
-    private static String geographic(GeographicBase base) {
+    private static String geographic(GeographicSystem base) {
         Ellipsoid figure = base.ellipsoid();
         String shift = base.toWgs84().isEmpty() ? ""
                 : base.toWgs84().stream().map(Wkt::number).collect(Collectors.joining(",", ",TOWGS84[", "]"));
@@ -60,7 +60,7 @@ final class Wkt1Writer {
     }
 
     private static String datum(String name) {
-        return name.equals(GeographicBase.WGS84.datum()) ? "WGS_1984" : name.replaceAll("[^A-Za-z0-9+-]+", "_");
+        return name.equals(GeographicSystem.WGS84.datum()) ? "WGS_1984" : name.replaceAll("[^A-Za-z0-9+-]+", "_");
     }
 
     private static String authority(int code) {

@@ -57,7 +57,7 @@ final class Wkt2Writer {
         return "CS[ellipsoidal,2],AXIS[\"latitude\",north,ORDER[1]," + DEGREE + "],AXIS[\"longitude\",east,ORDER[2]," + DEGREE + ']';
     }
 
-    private static String datum(GeographicBase base) {
+    private static String datum(GeographicSystem base) {
         Ellipsoid figure = base.ellipsoid();
         return "DATUM[" + quote(base.datum()) + ",ELLIPSOID[" + quote(figure.name()) + ',' + Wkt.number(figure.semiMajor()) + ','
                 + Wkt.number(figure.inverseFlattening()) + ",LENGTHUNIT[\"metre\",1]]],PRIMEM[" + quote(base.meridianName()) + ','

@@ -57,8 +57,8 @@ final class WktReader {
         if (shift.size() != 7) {
             return inner;
         }
-        GeographicBase b = inner.base();
-        GeographicBase base = new GeographicBase(b.name(), b.code(), b.datum(), b.datumCode(), b.ellipsoid(), b.meridianName(),
+        GeographicSystem b = inner.base();
+        GeographicSystem base = new GeographicSystem(b.name(), b.code(), b.datum(), b.datumCode(), b.ellipsoid(), b.meridianName(),
                 b.meridian(), shift);
         return new SystemDefinition(inner.name(), inner.code(), base, inner.method(), inner.parameters(),
                 inner.metresPerUnit(), inner.pole());
@@ -91,7 +91,7 @@ final class WktReader {
                 .map(u -> u.numberAt(1)).orElse(DEGREE);
     }
 
-    private static GeographicBase base(Wkt node) {
+    private static GeographicSystem base(Wkt node) {
         Wkt datum = node.child("DATUM", "GEODETICDATUM", "TRF", "ENSEMBLE")
                 .orElseThrow(() -> new IllegalArgumentException("no DATUM"));
         Wkt figure = datum.child("SPHEROID", "ELLIPSOID")
@@ -109,7 +109,7 @@ final class WktReader {
         if (meridianName.equalsIgnoreCase("Paris")) {
             meridian = PARIS;
         }
-        GeographicBase read = new GeographicBase(node.text(0), node.epsg(), datumName(datum.text(0)), datum.epsg(), ellipsoid,
+        GeographicSystem read = new GeographicSystem(node.text(0), node.epsg(), datumName(datum.text(0)), datum.epsg(), ellipsoid,
                 meridianName, meridian, shift.subList(0, 7));
         return settled(read);
     }
@@ -124,17 +124,17 @@ final class WktReader {
     }
 
     /** The spellings of widespread systems all mean the same one; it is given its code. */
-    private static GeographicBase settled(GeographicBase read) {
+    private static GeographicSystem settled(GeographicSystem read) {
         if (read.code() != 0 && read.code() != 4326 || !read.toWgs84().isEmpty() || read.meridian() != 0) {
             return read;
         }
-        for (GeographicBase known : List.of(GeographicBase.WGS84, GeographicBase.ETRS89, GeographicBase.NAD83)) {
+        for (GeographicSystem known : List.of(GeographicSystem.WGS84, GeographicSystem.ETRS89, GeographicSystem.NAD83)) {
             boolean named = switch (Wkt.plain(read.datum())) {
                 case "worldgeodeticsystem1984", "wgs1984", "wgs84", "worldgeodeticsystem1984ensemble" ->
-                        known == GeographicBase.WGS84;
+                        known == GeographicSystem.WGS84;
                 case "europeanterrestrialreferencesystem1989", "etrs1989", "europeanterrestrialreferencesystem1989ensemble" ->
-                        known == GeographicBase.ETRS89;
-                case "northamericandatum1983", "northamerican1983" -> known == GeographicBase.NAD83;
+                        known == GeographicSystem.ETRS89;
+                case "northamericandatum1983", "northamerican1983" -> known == GeographicSystem.NAD83;
                 default -> false;
             };
             if (named && known.ellipsoid().sameFigure(read.ellipsoid())) {
@@ -146,13 +146,13 @@ final class WktReader {
 
     private static String datumName(String text) {
         String name = text.startsWith("D_") ? text.substring(2) : text;
-        return name.equals("WGS_1984") ? GeographicBase.WGS84.datum() : name.replace('_', ' ').trim();
+        return name.equals("WGS_1984") ? GeographicSystem.WGS84.datum() : name.replace('_', ' ').trim();
     }
 
     private static SystemDefinition projected(Wkt node) {
         Wkt baseNode = node.child("GEOGCS", "BASEGEOGCRS", "BASEGEODCRS", "GEOGCRS")
                 .orElseThrow(() -> new IllegalArgumentException("a projected system without its geographic one"));
-        GeographicBase base = base(baseNode);
+        GeographicSystem base = base(baseNode);
         Wkt conversion = node.child("CONVERSION").orElse(node);
         String name = conversion.child("PROJECTION", "METHOD").map(m -> m.text(0))
                 .orElseThrow(() -> new IllegalArgumentException("no PROJECTION"));

@@ -15,24 +15,24 @@ import java.util.List;
  * @param toWgs84 seven parameters of the position vector transformation to WGS 84 (EPSG method 9606: metres, seconds of
  *                arc, parts in a million), or none
  */
-record GeographicBase(String name, int code, String datum, int datumCode, Ellipsoid ellipsoid, String meridianName,
+record GeographicSystem(String name, int code, String datum, int datumCode, Ellipsoid ellipsoid, String meridianName,
                       double meridian, List<Double> toWgs84) {
 
-    static final GeographicBase WGS84 = greenwich("WGS 84", 4326, "World Geodetic System 1984", 6326, Ellipsoid.WGS84);
-    static final GeographicBase ETRS89 = greenwich("ETRS89", 4258, "European Terrestrial Reference System 1989", 6258,
+    static final GeographicSystem WGS84 = greenwich("WGS 84", 4326, "World Geodetic System 1984", 6326, Ellipsoid.WGS84);
+    static final GeographicSystem ETRS89 = greenwich("ETRS89", 4258, "European Terrestrial Reference System 1989", 6258,
             Ellipsoid.GRS80);
-    static final GeographicBase NAD83 = greenwich("NAD83", 4269, "North American Datum 1983", 6269, Ellipsoid.GRS80);
+    static final GeographicSystem NAD83 = greenwich("NAD83", 4269, "North American Datum 1983", 6269, Ellipsoid.GRS80);
 
-    GeographicBase {
+    GeographicSystem {
         toWgs84 = toWgs84.stream().allMatch(p -> p == 0) ? List.of() : List.copyOf(toWgs84);
     }
 
-    static GeographicBase greenwich(String name, int code, String datum, int datumCode, Ellipsoid ellipsoid) {
-        return new GeographicBase(name, code, datum, datumCode, ellipsoid, "Greenwich", 0, List.of());
+    static GeographicSystem greenwich(String name, int code, String datum, int datumCode, Ellipsoid ellipsoid) {
+        return new GeographicSystem(name, code, datum, datumCode, ellipsoid, "Greenwich", 0, List.of());
     }
 
     /** A figure of the Earth without a known datum, as climate models have it. */
-    static GeographicBase on(Ellipsoid ellipsoid) {
+    static GeographicSystem on(Ellipsoid ellipsoid) {
         if (ellipsoid.sameFigure(Ellipsoid.WGS84)) {
             return WGS84;
         }
@@ -41,7 +41,7 @@ record GeographicBase(String name, int code, String datum, int datumCode, Ellips
         return greenwich(what, 0, what, 0, ellipsoid);
     }
 
-    boolean samePlaces(GeographicBase other) {
+    boolean samePlaces(GeographicSystem other) {
         return ellipsoid.sameFigure(other.ellipsoid) && Math.abs(meridian - other.meridian) < 1e-9
                 && toWgs84.equals(other.toWgs84)
                 && (code == other.code || code == 0 || other.code == 0 || datumCode == other.datumCode);
