@@ -15,8 +15,8 @@ import picocli.CommandLine.Option;
         description = {"Shows the temperature of the source, the adjusted minimum, the lethal temperatures, the margin and the "
                 + "damage of every night, computed by the very code of map."},
         footerHeading = "%nExamples:%n",
-        footer = {"  wintersill explain sample-grids/run.yaml --at-lonlat 8.25,46.5 --winter 2020-21",
-            "  wintersill explain sample-grids/run.yaml --at 2665000,1150000 --csv > cell.csv"})
+        footer = {"  wintersill explain sample-grids/run.yaml --at-lonlat -37.2,50.1 --winter 2010-11",
+            "  wintersill explain sample-grids/run.yaml --at -37.2,50.1 --csv > cell.csv"})
 final class ExplainCommand implements Callable<Integer>, Manners.Kept {
     private final Session session;
 

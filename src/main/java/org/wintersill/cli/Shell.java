@@ -37,12 +37,16 @@ final class Shell {
             }
             return code;
         } catch (OutOfMemoryError e) {
-            session.err().println("error: Java ran out of memory.");
-            session.err().println("  remedy: Give it more, such as java -Xmx4g -jar wintersill.jar, or lower --memory.");
-            return ExitCode.LIMIT;
-        } catch (StackOverflowError e) {
+            return outOfMemory();
+        } catch (Error e) {
             return internal(e);
         }
+    }
+
+    private int outOfMemory() {
+        session.err().println("error: Java ran out of memory.");
+        session.err().println("  remedy: Give it more, such as java -Xmx4g -jar wintersill.jar, or lower --memory.");
+        return ExitCode.LIMIT;
     }
 
     private CommandLine commandLine() {
@@ -83,6 +87,11 @@ final class Shell {
                 problem.printStackTrace(session.err());
             }
             return problem.exitCode();
+        }
+        for (Throwable cause = failure.getCause(); cause != null; cause = cause.getCause()) {
+            if (cause instanceof OutOfMemoryError) {
+                return outOfMemory();
+            }
         }
         return internal(failure);
     }

@@ -191,12 +191,26 @@ class MainTest {
     }
 
     @Test
-    void lackOfMemoryIsALimit() {
+    void lackOfMemoryIsALimitInWhateverThreadItShows() {
         commands.work = console -> {
             throw new OutOfMemoryError();
         };
         assertEquals(5, run("map", run));
         assertTrue(err.contains("-Xmx"), err);
+        commands.work = console -> {
+            throw new IllegalStateException(new OutOfMemoryError());
+        };
+        assertEquals(5, run("map", run));
+        assertFalse(err.contains("\tat "), err);
+    }
+
+    @Test
+    void aBrokenInstallationIsAnInternalError() {
+        commands.work = console -> {
+            throw new NoClassDefFoundError("x");
+        };
+        assertEquals(1, run("map", run));
+        assertTrue(err.contains("Please report it"), err);
     }
 
     @Test
