@@ -28,11 +28,20 @@ import org.wintersill.run.RunReport;
 final class RunCommands implements Commands {
     private static final int NIGHTS_SHOWN = 10;
 
-    private final GeoToolsCrs crs = new GeoToolsCrs();
-    private final InputFormats formats = new InputFormats(crs);
+    /** Made when first needed: help and mistakes in a run file must not wait for it. */
+    private GeoToolsCrs crs;
+    private InputFormats formats;
+
+    private InputFormats formats() {
+        if (formats == null) {
+            crs = new GeoToolsCrs();
+            formats = new InputFormats(crs);
+        }
+        return formats;
+    }
 
     private RunPlan plan(RunConfig config, Console console) {
-        return new RunPlanner(formats, crs).plan(config, console.notices());
+        return new RunPlanner(formats(), crs).plan(config, console.notices());
     }
 
     @Override
@@ -85,7 +94,7 @@ final class RunCommands implements Commands {
         for (Path file : options.entry().files()) {
             problems.attempt(() -> {
                 Notices notices = new Notices();
-                Inspection inspection = Inspection.of(formats.open(file, options.entry().request(), notices), notices);
+                Inspection inspection = Inspection.of(formats().open(file, options.entry().request(), notices), notices);
                 documents.add(inspection.document());
                 text.append(InspectionText.of(inspection)).append('\n');
             });
