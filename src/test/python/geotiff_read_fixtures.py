@@ -112,7 +112,10 @@ def main():
     write("nodata-lowest-short.tif", celsius(hole=lowest), nodata=-3.4e38)
     write("nodata-undeclared.tif", celsius(), nodata=None)
     write("mask.tif", celsius(hole=0.0), nodata=None, mask=np.where(HOLE, 0, 255).astype(np.uint8), options=["COMPRESS=DEFLATE"] + tiles)
-    write("sparse.tif", celsius(), options=tiles + ["SPARSE_OK=YES"])
+    # Only the first tile of the first band is in the file; nodata everywhere else.
+    one = np.full((ROWS, COLUMNS), -9999, np.float32)
+    one[:16, :16] = celsius(1)[0][:16, :16]
+    write("sparse.tif", [one], options=tiles + ["SPARSE_OK=YES"], dates=("2003-01-15",))
     write("pixel-is-point.tif", celsius(), meta={"AREA_OR_POINT": "Point"})
     write("south-up.tif", [b[::-1] for b in celsius()], origin=(5.0, 45.6), cell=(0.1, 0.1), options=strips)
     write("unordered.tif", [celsius()[i] for i in (2, 0, 1)], dates=("tmin 20030117", "tmin 20030115", "tmin 20030116"))

@@ -98,6 +98,7 @@ class CrsFormsTest {
                 + "PARAMETER[\"False_Easting\",0],PARAMETER[\"False_Northing\",0],PARAMETER[\"Central_Meridian\",0],"
                 + "PARAMETER[\"Standard_Parallel_1\",-71],UNIT[\"Meter\",1]]");
         assertTrue(SYSTEMS.between(polar, SYSTEMS.fromCode("EPSG:3031")).isIdentity());
+        assertTrue(CrsDefinitions.sameSystem(polar, SYSTEMS.fromWkt(polar.wkt() + ",VERTCS[\"h\",VDATUM[\"h\"],UNIT[\"Meter\",1]]")));
         Crs compound = SYSTEMS.fromWkt("COMPD_CS[\"c\"," + SYSTEMS.fromCode("EPSG:3035").wkt()
                 + ",VERT_CS[\"h\",VERT_DATUM[\"h\",2005],UNIT[\"metre\",1],AXIS[\"Up\",UP]]]");
         assertEquals("EPSG:3035", compound.code());

@@ -72,7 +72,7 @@ class GeotiffTemperatureFormatTest {
         "deflate3-strips", "deflate3-tiles-apart", "packbits-strips", "packbits-tiles-apart", "zstd-strips", "zstd-tiles-apart",
         "zstd3-strips", "zstd3-tiles-apart", "big-endian", "big-endian-lzw2", "big-endian-deflate3", "bigtiff", "bigtiff-big-endian",
         "float64", "float64-lzw2", "int16-scaled", "int16-offset", "nodata-first", "kelvin", "fahrenheit", "nodata-nan", "nodata-lowest",
-        "nodata-lowest-short", "mask", "sparse", "south-up", "unordered", "overviews", "pixel-is-point"})
+        "nodata-lowest-short", "mask", "south-up", "unordered", "overviews", "pixel-is-point"})
     void everyKindOfFileHoldsTheSameTemperatures(String name) {
         DailyTemperatureSource source = open(name + ".tif", MINIMUM);
         assertEquals(40, source.grid().columns());
@@ -103,6 +103,14 @@ class GeotiffTemperatureFormatTest {
         assertEquals(expected(2, 2, 3), out[27]);
         assertEquals(99, out[11]);
         assertEquals(99, out[6]);
+    }
+
+    @Test
+    void tilesThatAreNotInTheFileHaveNoValues() {
+        float[] values = read(open("sparse.tif", MINIMUM), 0, 1, new Block(0, 0, 40, 24));
+        for (int i = 0; i < values.length; i++) {
+            assertEquals(i / 40 < 16 && i % 40 < 16 ? expected(0, i / 40, i % 40) : Float.NaN, values[i]);
+        }
     }
 
     @Test
