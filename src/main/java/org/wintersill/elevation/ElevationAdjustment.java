@@ -17,6 +17,7 @@ public final class ElevationAdjustment {
     private final float[] targetHeights;
     private final LapseRates lapseRates;
     private final float[][] heightGain;
+    private final int[][] containing;
 
     private ElevationAdjustment(SourcePositions positions, float[] sourceHeights, float[] targetHeights, LapseRates lapseRates) {
         this.positions = positions;
@@ -24,6 +25,7 @@ public final class ElevationAdjustment {
         this.targetHeights = targetHeights;
         this.lapseRates = lapseRates;
         heightGain = targetHeights == null ? null : heightGains();
+        containing = isPassThrough() ? null : containingCells();
     }
 
     /** The target is the source's own grid: temperatures are passed on. */
@@ -68,6 +70,21 @@ public final class ElevationAdjustment {
             }
         }
         return gains;
+    }
+
+    /** Source cell that contains each target cell, {@code [row][column]}; -1 where the target cell can have no value. */
+    private int[][] containingCells() {
+        GridGeometry target = positions.target();
+        int[][] cells = new int[target.rows()][target.columns()];
+        for (int row = 0; row < target.rows(); row++) {
+            for (int column = 0; column < target.columns(); column++) {
+                int cell = positions.containing(row, column);
+                boolean noHeight = targetHeights != null && (Float.isNaN(targetHeights[row * target.columns() + column])
+                        || cell >= 0 && Float.isNaN(sourceHeights[cell]));
+                cells[row][column] = noHeight ? -1 : cell;
+            }
+        }
+        return cells;
     }
 
     /** Plain bilinear value; NaN where any corner with a weight is NaN. */
@@ -120,6 +137,11 @@ public final class ElevationAdjustment {
     /** Heights of all target cells, shared; null where no heights are used. */
     float[] targetHeights() {
         return targetHeights;
+    }
+
+    /** Source cell that contains each cell of a target row; -1 where the target cell can have no value. Not for a pass-through. */
+    int[] containing(int row) {
+        return containing[row];
     }
 
     float[] sourceHeights() {

@@ -9,6 +9,8 @@ import java.util.Arrays;
 public final class LaneAdjuster {
     private final ElevationAdjustment adjustment;
     private final SourcePositions positions;
+    private final float[] above;
+    private final float[] below;
     private final float[] blended;
     private final float[] left;
     private final float[] right;
@@ -17,6 +19,8 @@ public final class LaneAdjuster {
     public LaneAdjuster(ElevationAdjustment adjustment) {
         this.adjustment = adjustment;
         positions = adjustment.positions();
+        above = new float[positions.source().columns()];
+        below = new float[positions.source().columns()];
         blended = new float[positions.source().columns()];
         int columns = positions.target().columns();
         left = new float[columns];
@@ -76,17 +80,23 @@ public final class LaneAdjuster {
     }
 
     private void blend(float[] night, int upper, int lower, float south, int columns) {
+        System.arraycopy(night, upper, above, 0, columns);
+        System.arraycopy(night, lower, below, 0, columns);
+        mix(above, below, south, blended, columns);
+    }
+
+    private static void mix(float[] above, float[] below, float south, float[] blended, int columns) {
         for (int i = 0; i < columns; i++) {
-            blended[i] = night[upper + i] + south * (night[lower + i] - night[upper + i]);
+            blended[i] = above[i] + south * (below[i] - above[i]);
         }
     }
 
-    /** Values of the western and eastern neighbour of every target column; NaN beyond the source. */
+    /** Values of the western and eastern neighbour of every target column; of the first column beyond the source, mended later. */
     private void gather(int[] west, int east, int cells) {
         for (int i = 0; i < cells; i++) {
             int at = west[i];
-            left[i] = at < 0 ? Float.NaN : blended[at];
-            right[i] = at < 0 ? Float.NaN : blended[at + east];
+            left[i] = blended[at];
+            right[i] = blended[at + east];
         }
     }
 
@@ -124,27 +134,27 @@ public final class LaneAdjuster {
         }
     }
 
-    /** Cells whose plain interpolation met a missing corner: leave it out and rescale, or call the cell missing. */
+    /**
+     * Cells that can have no value become infinite; cells whose plain interpolation met a missing corner are worked out without
+     * it, or are missing too.
+     */
     private void mend(float[] night, int offset, double lapse, int targetRow, float[] out, int start) {
-        int targetColumns = positions.target().columns();
-        for (int column = 0; column < targetColumns; column++) {
+        int[] containing = adjustment.containing(targetRow);
+        for (int column = 0; column < containing.length; column++) {
+            int source = containing[column];
             float value = out[start + column];
-            if (value != value) {
-                out[start + column] = withoutMissingCorners(night, offset, lapse, targetRow, column);
+            if (source < 0 || value != value) {
+                boolean missing = source < 0 || Float.isNaN(night[offset + source]);
+                out[start + column] = missing ? Float.POSITIVE_INFINITY
+                        : withoutMissingCorners(night, offset, lapse, targetRow, column);
             }
         }
     }
 
+    /** The value of a cell whose own source cell has one. */
     private float withoutMissingCorners(float[] night, int offset, double lapse, int targetRow, int column) {
-        int containing = positions.containing(targetRow, column);
-        if (containing < 0 || Float.isNaN(night[offset + containing])) {
-            return Float.POSITIVE_INFINITY;
-        }
         float[] heights = adjustment.sourceHeights();
         float targetHeight = adjustment.targetHeight(targetRow * positions.target().columns() + column);
-        if (heights != null && (Float.isNaN(targetHeight) || Float.isNaN(heights[containing]))) {
-            return Float.POSITIVE_INFINITY;
-        }
         int columns = positions.source().columns();
         int corner = positions.north(targetRow, column) * columns + positions.west(targetRow, column);
         double total = 0;

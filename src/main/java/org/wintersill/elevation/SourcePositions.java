@@ -1,5 +1,6 @@
 package org.wintersill.elevation;
 
+import java.util.Arrays;
 import org.wintersill.grid.CoordinateOperation;
 import org.wintersill.grid.GridGeometry;
 
@@ -19,6 +20,7 @@ public final class SourcePositions {
     private final boolean separable;
     /** Column of the western centre by target column (separable) or target cell; -1 beyond the source. */
     private final int[] west;
+    private final int[] westOrFirst;
     private final float[] eastWeight;
     private final int[] north;
     private final float[] southWeight;
@@ -48,6 +50,7 @@ public final class SourcePositions {
         } else {
             transformCells(targetToSource);
         }
+        westOrFirst = separable ? Arrays.stream(west).map(at -> Math.max(0, at)).toArray() : west;
     }
 
     private void transformCells(CoordinateOperation targetToSource) {
@@ -102,9 +105,9 @@ public final class SourcePositions {
         return separable;
     }
 
-    /** Western neighbours by target column; only where positions are separable. Shared, not copied. */
+    /** Western neighbours by target column, 0 beyond the source; only where positions are separable. Shared, not copied. */
     int[] westByColumn() {
-        return west;
+        return westOrFirst;
     }
 
     /** Weights of the eastern neighbours by target column; only where positions are separable. Shared, not copied. */

@@ -98,6 +98,7 @@ public final class FoldPlanner {
     private long positionBytes() {
         long cells = (long) job.targetRows() * job.targetColumns();
         long heights = job.adjustment().hasHeights() ? 2 * FLOAT * cells : 0;
+        heights += job.adjustment().isPassThrough() ? 0 : FLOAT * cells;
         return heights + (job.adjustment().positions().isSeparable() ? 0 : 6 * FLOAT * cells);
     }
 

@@ -145,7 +145,7 @@ final class SummaryPass {
             }
             damage[winter] = store.read(WinterValues.damagePlane(cultivar.get(), levels), winter, row, count);
         }
-        return new WinterRecord(plan.choices().years(), minimum, margins, damage);
+        return new WinterRecord(plan.choices().years(), cultivar.isPresent() ? new float[0][] : minimum, margins, damage, count * columns);
     }
 
     /** Writes how many cultivars meet the target in each cell, and the best low margin. */

@@ -11,6 +11,9 @@ package org.wintersill.season;
  * that add an offset to the index, which is ten times slower.
  */
 final class LowestValues {
+    /** Lifts any difference between two margins above the number of a night. */
+    private static final float FAR = 1e30f;
+
     private LowestValues() {
     }
 
@@ -59,6 +62,28 @@ final class LowestValues {
     private static void scaled2(float[] a, float[] b, float ra, float rb, float fa, float fb, float[] lowest, int cells) {
         for (int i = 0; i < cells; i++) {
             lowest[i] = Math.min(lowest[i], Math.min((a[i] - ra) * fa, (b[i] - rb) * fb));
+        }
+    }
+
+    /**
+     * Finds where in a stretch a value was reached: first[i] = the lowest n with nights[n][i] - reference[firstNight + n] equal to
+     * reached[i], exactly; a huge number where there is none.
+     *
+     * <p>reached is never above any of the differences, so (difference - reached) is zero on such nights and positive on all
+     * others, where multiplying by {@link #FAR} lifts it above every night's number: differences of temperatures are multiples of
+     * a float's last digit and never so small that this fails. Written so, it is vector code; with a comparison it would not be.
+     */
+    static void firstNightOf(float[] reached, float[][] nights, int count, float[] reference, int firstNight, float[] first,
+                             int cells) {
+        java.util.Arrays.fill(first, 0, cells, Float.POSITIVE_INFINITY);
+        for (int n = 0; n < count; n++) {
+            first1(reached, nights[n], reference[firstNight + n], n, first, cells);
+        }
+    }
+
+    private static void first1(float[] reached, float[] a, float ra, float na, float[] first, int cells) {
+        for (int i = 0; i < cells; i++) {
+            first[i] = Math.min(first[i], (a[i] - ra - reached[i]) * FAR + na);
         }
     }
 

@@ -48,12 +48,13 @@ public final class WinterAccumulator {
      * @param count number of nights
      * @param firstNight position in the window of the first
      * @param before room for one value a cell, overwritten
+     * @param reached room for one value a cell, overwritten
      */
-    public void accept(NightCurve curve, float[][] nights, int count, int firstNight, float[] before) {
+    public void accept(NightCurve curve, float[][] nights, int count, int firstNight, float[] before, float[] reached) {
         float[] margin = lowestMargin[0];
         System.arraycopy(margin, 0, before, 0, cells);
         LowestValues.ofDifference(nights, count, curve.lethal()[0], firstNight, margin, cells);
-        noteWorstNights(curve.lethal()[0], nights, count, firstNight, before);
+        noteWorstNights(curve.lethal()[0], nights, count, firstNight, before, reached);
         for (int level = 1; level < lowestMargin.length; level++) {
             LowestValues.ofDifference(nights, count, curve.lethal()[level], firstNight, lowestMargin[level], cells);
         }
@@ -62,15 +63,19 @@ public final class WinterAccumulator {
     }
 
     /** Where the stretch lowered the margin, finds the first night that reaches it: the same subtraction gives the same float. */
-    private void noteWorstNights(float[] lt50, float[][] nights, int count, int firstNight, float[] before) {
+    private void noteWorstNights(float[] lt50, float[][] nights, int count, int firstNight, float[] before, float[] reached) {
         float[] margin = lowestMargin[0];
-        for (int i = 0; i < cells; i++) {
+        int first = 0;
+        while (first < cells && !(margin[first] < before[first])) {
+            first++;
+        }
+        if (first == cells) {
+            return;
+        }
+        LowestValues.firstNightOf(margin, nights, count, lt50, firstNight, reached, cells);
+        for (int i = first; i < cells; i++) {
             if (margin[i] < before[i]) {
-                int n = 0;
-                while (n < count - 1 && nights[n][i] - lt50[firstNight + n] != margin[i]) {
-                    n++;
-                }
-                worstNight[i] = (short) (firstNight + n);
+                worstNight[i] = (short) (firstNight + (int) reached[i]);
             }
         }
     }

@@ -17,6 +17,7 @@ public final class WinterLane {
     private final int levels;
     private final float[] minimum;
     private final float[] before;
+    private final float[] reached;
     private final WinterAccumulator[] cultivars;
 
     public WinterLane(int cultivarCount, int levels, int cells) {
@@ -24,6 +25,7 @@ public final class WinterLane {
         this.levels = levels;
         minimum = new float[cells];
         before = new float[cells];
+        reached = new float[cells];
         cultivars = new WinterAccumulator[cultivarCount];
         for (int c = 0; c < cultivarCount; c++) {
             cultivars[c] = new WinterAccumulator(levels, cells);
@@ -37,7 +39,7 @@ public final class WinterLane {
 
     /** Bytes that a lane takes for each of its cells. */
     public static long bytesPerCell(int cultivarCount, int levels) {
-        return 8 + (long) cultivarCount * (4L * levels + 10);
+        return 12 + (long) cultivarCount * (4L * levels + 10);
     }
 
     /** Makes ready for the next winter. */
@@ -59,7 +61,7 @@ public final class WinterLane {
     public void accept(NightCurve[] curves, float[][] nights, int count, int firstNight) {
         LowestValues.ofDifference(nights, count, NO_REFERENCE, 0, minimum, cells);
         for (int c = 0; c < cultivars.length; c++) {
-            cultivars[c].accept(curves[c], nights, count, firstNight, before);
+            cultivars[c].accept(curves[c], nights, count, firstNight, before, reached);
         }
     }
 

@@ -61,9 +61,11 @@ public final class DamageProbability implements ClimatologyStatistic {
 
     @Override
     public void summarise(WinterRecord record, float[] out, int from, int to) {
+        int[] counts = record.counts();
+        int[] events = record.events(level);
         for (int cell = from; cell < to; cell++) {
-            int n = EventFrequency.winters(record, level, cell);
-            int k = EventFrequency.events(record, level, cell);
+            int n = counts[cell];
+            int k = events[cell];
             out[cell] = n == 0 ? Float.NaN : (float) switch (part) {
                 case VALUE -> (double) k / n;
                 case LOWER -> bounds[n][k][0];

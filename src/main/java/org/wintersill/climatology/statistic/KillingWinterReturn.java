@@ -45,9 +45,11 @@ public final class KillingWinterReturn implements ClimatologyStatistic {
 
     @Override
     public void summarise(WinterRecord record, float[] out, int from, int to) {
+        int[] counts = record.counts();
+        int[] events = record.events(level);
         for (int cell = from; cell < to; cell++) {
-            int n = EventFrequency.winters(record, level, cell);
-            int k = EventFrequency.events(record, level, cell);
+            int n = counts[cell];
+            int k = events[cell];
             if (n == 0 || !bound && k == 0) {
                 out[cell] = Float.NaN;
             } else {

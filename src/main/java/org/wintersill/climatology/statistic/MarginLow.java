@@ -23,7 +23,7 @@ public final class MarginLow implements ClimatologyStatistic {
     public void summarise(WinterRecord record, float[] out, int from, int to) {
         double[] margins = new double[record.winters()];
         for (int cell = from; cell < to; cell++) {
-            int n = WinterRecord.valid(record.margins()[0], cell, margins);
+            int n = WinterRecord.valid(record.margins(0), cell, margins);
             Arrays.sort(margins, 0, n);
             out[cell] = n == 0 ? Float.NaN : (float) Percentiles.type7(margins, n, SHARE);
         }

@@ -18,6 +18,6 @@ public final class MarginMean implements ClimatologyStatistic {
 
     @Override
     public void summarise(WinterRecord record, float[] out, int from, int to) {
-        MeanOverWinters.of(record.margins()[0], out, from, to);
+        MeanOverWinters.of(record.margins(0), out, from, to);
     }
 }

@@ -20,7 +20,7 @@ public final class MarginWorst implements ClimatologyStatistic {
     public void summarise(WinterRecord record, float[] out, int from, int to) {
         for (int cell = from; cell < to; cell++) {
             int worst = worstWinter(record, cell);
-            out[cell] = worst < 0 ? Float.NaN : record.margins()[0][worst][cell];
+            out[cell] = worst < 0 ? Float.NaN : record.margins(0)[worst][cell];
         }
     }
 
@@ -28,8 +28,8 @@ public final class MarginWorst implements ClimatologyStatistic {
     static int worstWinter(WinterRecord record, int cell) {
         int worst = -1;
         for (int w = 0; w < record.winters(); w++) {
-            float margin = record.margins()[0][w][cell];
-            if (margin == margin && (worst < 0 || margin < record.margins()[0][worst][cell])) {
+            float margin = record.margins(0)[w][cell];
+            if (margin == margin && (worst < 0 || margin < record.margins(0)[worst][cell])) {
                 worst = w;
             }
         }

@@ -39,7 +39,7 @@ public final class RequiredHardiness implements ClimatologyStatistic {
     public void summarise(WinterRecord record, float[] out, int from, int to) {
         double[] margins = new double[record.winters()];
         for (int cell = from; cell < to; cell++) {
-            int n = WinterRecord.valid(record.margins()[level], cell, margins);
+            int n = WinterRecord.valid(record.margins(level), cell, margins);
             out[cell] = n == 0 ? Float.NaN : (float) of(margins, n, target);
         }
     }

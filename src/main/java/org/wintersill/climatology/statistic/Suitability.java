@@ -38,10 +38,12 @@ public final class Suitability implements ClimatologyStatistic {
 
     @Override
     public void summarise(WinterRecord record, float[] out, int from, int to) {
+        int[] counts = record.counts();
+        int[] events = record.events(level);
         for (int cell = from; cell < to; cell++) {
-            int n = EventFrequency.winters(record, level, cell);
+            int n = counts[cell];
             out[cell] = n < FEWEST_WINTERS ? Float.NaN
-                    : classOf((double) EventFrequency.events(record, level, cell) / n, limits);
+                    : classOf((double) events[cell] / n, limits);
         }
     }
 

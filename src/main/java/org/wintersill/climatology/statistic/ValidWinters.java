@@ -24,14 +24,9 @@ public final class ValidWinters implements ClimatologyStatistic {
 
     @Override
     public void summarise(WinterRecord record, float[] out, int from, int to) {
+        int[] counts = record.counts();
         for (int cell = from; cell < to; cell++) {
-            int n = 0;
-            for (float[] winter : record.minimum()) {
-                if (winter[cell] == winter[cell]) {
-                    n++;
-                }
-            }
-            out[cell] = n == 0 ? Float.NaN : n;
+            out[cell] = counts[cell] == 0 ? Float.NaN : counts[cell];
         }
     }
 }

@@ -21,6 +21,11 @@ public final class CrsDefinitions {
         return Wkt2Writer.write(SystemDefinition.of(crs));
     }
 
+    /** Whether two systems give the same place the same coordinates, whatever their names; costs no look-up. */
+    public static boolean sameSystem(Crs a, Crs b) {
+        return a.sameAs(b) || SystemDefinition.of(a).samePlaces(SystemDefinition.of(b));
+    }
+
     /** The number of an EPSG code; empty for a system without one. */
     public static OptionalInt epsg(Crs crs) {
         return crs.code().matches("EPSG:[0-9]{1,9}") ? OptionalInt.of(Integer.parseInt(crs.code().substring(5)))

@@ -3,11 +3,15 @@ package org.wintersill.io.crs;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.List;
 import java.util.Map;
 import java.util.concurrent.ConcurrentHashMap;
 import org.geotools.api.referencing.FactoryException;
 import org.geotools.api.referencing.NoSuchAuthorityCodeException;
 import org.geotools.api.referencing.crs.CoordinateReferenceSystem;
+import org.geotools.api.referencing.crs.ProjectedCRS;
+import org.geotools.api.referencing.operation.MathTransform;
+import org.geotools.api.referencing.operation.TransformException;
 import org.geotools.referencing.CRS;
 import org.wintersill.problem.Problem;
 
@@ -37,7 +41,8 @@ final class EpsgDatabase {
         String label = "EPSG:" + code;
         try {
             CoordinateReferenceSystem system = CRS.decode(label, true);
-            return WktReader.read(((org.geotools.referencing.wkt.Formattable) system).toWKT(0, false));
+            SystemDefinition read = WktReader.read(((org.geotools.referencing.wkt.Formattable) system).toWKT(0, false));
+            return read.withShift(mended(system, read.base()));
         } catch (NoSuchAuthorityCodeException e) {
             throw Problem.input("There is no coordinate reference system '" + label + "'", "",
                     "Give the code of a geographic or projected system, such as EPSG:4326 or EPSG:3035").asException(e);
@@ -48,6 +53,41 @@ final class EpsgDatabase {
             throw Problem.input("The system " + label + " could not be looked up: " + e.getMessage(), "",
                     "Make a writable folder for the EPSG dataset and name it with -D" + FOLDER_PROPERTY + "=FOLDER").asException(e);
         }
+    }
+
+    /**
+     * GeoTools gives the three rotations of a coordinate frame transformation (EPSG method 9607) with the sign of only the
+     * first turned, where all three must be for the position vector convention. Its own operation between the same two
+     * systems is right and tells which signs are meant.
+     */
+    private static List<Double> mended(CoordinateReferenceSystem system, GeographicSystem base) throws FactoryException {
+        List<Double> p = base.toWgs84();
+        if (p.isEmpty() || p.get(4) == 0 && p.get(5) == 0) {
+            return p;
+        }
+        List<Double> turned = List.of(p.get(0), p.get(1), p.get(2), p.get(3), -p.get(4), -p.get(5), p.get(6));
+        MathTransform own = CRS.findMathTransform(CRS.getHorizontalCRS(geographic(system)), CRS.decode("EPSG:4326", true), true);
+        return misfit(own, base, turned) < misfit(own, base, p) ? turned : p;
+    }
+
+    private static CoordinateReferenceSystem geographic(CoordinateReferenceSystem system) {
+        return system instanceof ProjectedCRS projected ? projected.getBaseCRS() : system;
+    }
+
+    private static double misfit(MathTransform own, GeographicSystem base, List<Double> shift) {
+        double sum = 0;
+        for (double[] place : new double[][] {{5, 50}, {-70, -30}, {120, 15}}) {
+            double[] ours = place.clone();
+            double[] theirs = place.clone();
+            new DatumShift(base, shift, GeographicSystem.WGS84, List.of()).apply(ours, 0);
+            try {
+                own.transform(theirs, 0, theirs, 0, 1);
+            } catch (TransformException e) {
+                return Double.NaN;
+            }
+            sum += Math.hypot(ours[0] - theirs[0], ours[1] - theirs[1]);
+        }
+        return sum;
     }
 
     private static void chooseFolder() {

@@ -75,9 +75,9 @@ final class GeoKeyReader {
                 java.util.List.of());
     }
 
-    /** A part such as {@code GCS Name = ...} of a citation, as GDAL writes it (with bars) and we do (with semicolons). */
+    /** A part such as {@code GCS Name = ...} of a citation, as GDAL writes it. */
     private static String name(String citation, String key, String otherwise) {
-        for (String part : citation.split("[|;]")) {
+        for (String part : citation.split("[|]")) {
             int at = part.indexOf('=');
             if (at > 0 && part.substring(0, at).trim().equals(key)) {
                 return part.substring(at + 1).trim();

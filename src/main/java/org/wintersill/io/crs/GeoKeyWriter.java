@@ -68,8 +68,8 @@ final class GeoKeyWriter {
             return;
         }
         Ellipsoid figure = base.ellipsoid();
-        keys.put(GeoKeys.GEOGRAPHIC_TYPE, GeoKeys.USER_DEFINED).put(GeoKeys.GEOGRAPHIC_CITATION, "GCS Name = " + base.name()
-                + ";Datum = " + base.datum().replace(' ', '_') + ";Ellipsoid = " + figure.name() + ";Primem = " + base.meridianName());
+        keys.put(GeoKeys.GEOGRAPHIC_TYPE, GeoKeys.USER_DEFINED).putParts(GeoKeys.GEOGRAPHIC_CITATION, "GCS Name = " + base.name(),
+                "Datum = " + base.datum().replace(' ', '_'), "Ellipsoid = " + figure.name(), "Primem = " + base.meridianName());
         keys.put(GeoKeys.DATUM, hasKeyCode(base.datumCode()) ? base.datumCode() : GeoKeys.USER_DEFINED);
         keys.put(GeoKeys.ELLIPSOID, hasKeyCode(figure.code()) ? figure.code() : GeoKeys.USER_DEFINED)
                 .put(GeoKeys.SEMI_MAJOR, figure.semiMajor());

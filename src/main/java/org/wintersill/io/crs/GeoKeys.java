@@ -161,6 +161,16 @@ public record GeoKeys(int[] directory, double[] doubles, String ascii) {
             return this;
         }
 
+        /** A citation of several parts, each ended by a bar, as GDAL writes and reads it. */
+        Builder putParts(int key, String... parts) {
+            StringBuilder text = new StringBuilder();
+            for (String part : parts) {
+                text.append(part.replace('|', '/')).append('|');
+            }
+            keys.put(key, new String(text.toString().getBytes(StandardCharsets.US_ASCII), StandardCharsets.US_ASCII));
+            return this;
+        }
+
         GeoKeys build() {
             int[] directory = new int[4 + 4 * keys.size()];
             directory[0] = 1;

@@ -13,20 +13,54 @@ import static org.wintersill.io.crs.ProjectionParameter.SCALE;
 import org.geotools.api.parameter.ParameterValueGroup;
 import org.geotools.api.referencing.FactoryException;
 import org.geotools.api.referencing.operation.MathTransform;
+import org.geotools.api.referencing.operation.NoninvertibleTransformException;
+import org.geotools.api.referencing.operation.TransformException;
 import org.geotools.referencing.operation.DefaultMathTransformFactory;
 
-/** The map projections of GeoTools, set up from a definition: degrees to metres and back. */
+/** The map projections of GeoTools, set up from a definition, and transverse Mercator, which reaches farther here. */
 final class MapProjections {
     private static final DefaultMathTransformFactory FACTORY = new DefaultMathTransformFactory();
 
     private MapProjections() {
     }
 
-    /** @return longitude, latitude in degrees (from the system's own prime meridian) to metres; thread-safe */
-    static MathTransform forward(SystemDefinition system) {
+    /** @throws IllegalArgumentException when the numbers do not make a projection */
+    static PlaneProjection of(SystemDefinition system) {
+        if (system.method() == ProjectionMethod.TRANSVERSE_MERCATOR) {
+            return new TransverseMercator(system);
+        }
+        MathTransform forward = geoTools(system);
+        try {
+            MathTransform inverse = forward.inverse();
+            return new PlaneProjection() {
+                @Override
+                public boolean forward(double[] xy, int at) {
+                    return apply(forward, xy, at);
+                }
+
+                @Override
+                public boolean inverse(double[] xy, int at) {
+                    return apply(inverse, xy, at);
+                }
+            };
+        } catch (NoninvertibleTransformException e) {
+            throw new IllegalArgumentException("the projection of " + system.name() + " has no inverse", e);
+        }
+    }
+
+    private static boolean apply(MathTransform transform, double[] xy, int at) {
+        try {
+            transform.transform(xy, at, xy, at, 1);
+            return true;
+        } catch (TransformException | IllegalArgumentException | ArithmeticException e) {
+            return false;
+        }
+    }
+
+    private static MathTransform geoTools(SystemDefinition system) {
         try {
             return switch (system.method()) {
-                case TRANSVERSE_MERCATOR -> make(system, "Transverse_Mercator", "latitude_of_origin", "central_meridian");
+                case TRANSVERSE_MERCATOR -> throw new IllegalStateException("made by its own class");
                 case MERCATOR_1SP, PSEUDO_MERCATOR -> make(system, "Mercator_1SP", "latitude_of_origin", "central_meridian");
                 case MERCATOR_2SP -> make(system, "Mercator_2SP", "latitude_of_origin", "central_meridian");
                 case LAMBERT_CONIC_1SP -> make(system, "Lambert_Conformal_Conic_1SP", "latitude_of_origin", "central_meridian");

@@ -59,6 +59,13 @@ record SystemDefinition(String name, int code, GeographicSystem base, Projection
                 : new SystemDefinition(name, 0, base, method, parameters, metres, pole);
     }
 
+    /** The same system with other parameters to WGS 84. */
+    SystemDefinition withShift(java.util.List<Double> toWgs84) {
+        GeographicSystem shifted = new GeographicSystem(base.name(), base.code(), base.datum(), base.datumCode(), base.ellipsoid(),
+                base.meridianName(), base.meridian(), toWgs84);
+        return new SystemDefinition(name, code, shifted, method, parameters, metresPerUnit, pole);
+    }
+
     /** Same place for the same coordinates, whatever the names. */
     boolean samePlaces(SystemDefinition other) {
         if (code != 0 && code == other.code) {

@@ -1,8 +1,5 @@
 package org.wintersill.io.crs;
 
-import org.geotools.api.referencing.operation.MathTransform;
-import org.geotools.api.referencing.operation.NoninvertibleTransformException;
-import org.geotools.api.referencing.operation.TransformException;
 import org.wintersill.grid.CoordinateOperation;
 
 /**
@@ -13,8 +10,8 @@ final class SystemOperation implements CoordinateOperation {
     private final SystemDefinition source;
     private final SystemDefinition target;
     private final DatumShift shift;
-    private final MathTransform unproject;
-    private final MathTransform project;
+    private final PlaneProjection unproject;
+    private final PlaneProjection project;
     private final PoleRotation unrotate;
     private final PoleRotation rotate;
 
@@ -22,12 +19,8 @@ final class SystemOperation implements CoordinateOperation {
         this.source = source;
         this.target = target;
         this.shift = shift;
-        try {
-            unproject = source.method() == null ? null : MapProjections.forward(source).inverse();
-        } catch (NoninvertibleTransformException e) {
-            throw new IllegalArgumentException("the projection of " + source.name() + " has no inverse", e);
-        }
-        project = target.method() == null ? null : MapProjections.forward(target);
+        unproject = source.method() == null ? null : MapProjections.of(source);
+        project = target.method() == null ? null : MapProjections.of(target);
         unrotate = source.pole() == null ? null : new PoleRotation(source.pole());
         rotate = target.pole() == null ? null : new PoleRotation(target.pole());
     }
@@ -49,7 +42,7 @@ final class SystemOperation implements CoordinateOperation {
         if (unproject != null) {
             xy[at] *= source.metresPerUnit();
             xy[at + 1] *= source.metresPerUnit();
-            if (!apply(unproject, xy, at)) {
+            if (!unproject.inverse(xy, at)) {
                 return false;
             }
         }
@@ -74,20 +67,11 @@ final class SystemOperation implements CoordinateOperation {
         if (project == null) {
             return true;
         }
-        if (!apply(project, xy, at)) {
+        if (!project.forward(xy, at)) {
             return false;
         }
         xy[at] /= target.metresPerUnit();
         xy[at + 1] /= target.metresPerUnit();
         return true;
-    }
-
-    private static boolean apply(MathTransform transform, double[] xy, int at) {
-        try {
-            transform.transform(xy, at, xy, at, 1);
-            return true;
-        } catch (TransformException | IllegalArgumentException | ArithmeticException e) {
-            return false;
-        }
     }
 }

@@ -71,7 +71,8 @@ record Wkt(String keyword, List<String> values, List<Wkt> children) {
         Cursor cursor = new Cursor(text);
         Wkt root = cursor.element(cursor.word(), 0);
         cursor.blanks();
-        if (!cursor.atEnd()) {
+        // ESRI puts a vertical system behind the horizontal one.
+        if (!cursor.atEnd() && !text.substring(cursor.at).toUpperCase(Locale.ROOT).replaceAll("\\s", "").startsWith(",VERTCS")) {
             throw new IllegalArgumentException("text after the last bracket");
         }
         return root;

@@ -37,9 +37,25 @@ final class Wkt2Writer {
             out.append(",PARAMETER[").append(quote(slot.wkt2())).append(',').append(Wkt.number(value)).append(',').append(unitText)
                     .append(id(slot.epsg())).append(']');
         }
-        return out.append("],CS[Cartesian,2],AXIS[\"easting (E)\",east,ORDER[1],").append(unit)
-                .append("],AXIS[\"northing (N)\",north,ORDER[2],").append(unit).append(']').append(id(system.code())).append(']')
-                .toString();
+        String[] directions = directions(system);
+        return out.append("],CS[Cartesian,2],AXIS[\"easting (E)\",").append(directions[0]).append(",ORDER[1],").append(unit)
+                .append("],AXIS[\"northing (N)\",").append(directions[1]).append(",ORDER[2],").append(unit).append(']')
+                .append(id(system.code())).append(']').toString();
+    }
+
+    /** East and north; on a pole both run south (or north) along meridians, which GDAL counts from 0 where there is no code. */
+    private static String[] directions(SystemDefinition system) {
+        if (system.method() != ProjectionMethod.POLAR_A && system.method() != ProjectionMethod.POLAR_B) {
+            return new String[] {"east", "north"};
+        }
+        boolean north = system.value(system.method() == ProjectionMethod.POLAR_A ? ProjectionParameter.LATITUDE : ProjectionParameter.PARALLEL_1) > 0;
+        double from = system.code() == 0 ? 0 : system.value(ProjectionParameter.LONGITUDE);
+        return new String[] {(north ? "south" : "north") + meridian(from + 90), (north ? "south" : "north") + meridian(north ? from + 180 : from)};
+    }
+
+    private static String meridian(double longitude) {
+        double wrapped = longitude == 180 ? 180 : PoleRotation.wrap(longitude);
+        return ",MERIDIAN[" + Wkt.number(wrapped) + ',' + DEGREE + ']';
     }
 
     private static String rotated(SystemDefinition system) {

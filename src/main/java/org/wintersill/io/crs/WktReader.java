@@ -57,11 +57,7 @@ final class WktReader {
         if (shift.size() != 7) {
             return inner;
         }
-        GeographicSystem b = inner.base();
-        GeographicSystem base = new GeographicSystem(b.name(), b.code(), b.datum(), b.datumCode(), b.ellipsoid(), b.meridianName(),
-                b.meridian(), shift);
-        return new SystemDefinition(inner.name(), inner.code(), base, inner.method(), inner.parameters(),
-                inner.metresPerUnit(), inner.pole());
+        return inner.withShift(shift);
     }
 
     /** WKT 2 writes the scale difference of an abridged transformation as a factor near 1. */

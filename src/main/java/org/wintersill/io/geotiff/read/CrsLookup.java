@@ -5,6 +5,7 @@ import java.util.Optional;
 import java.util.concurrent.ConcurrentHashMap;
 import org.wintersill.grid.Crs;
 import org.wintersill.grid.CrsParser;
+import org.wintersill.io.crs.CrsDefinitions;
 import org.wintersill.io.crs.GeoKeys;
 import org.wintersill.problem.Problem;
 import org.wintersill.problem.ProblemException;
@@ -26,7 +27,7 @@ final class CrsLookup {
                         "Set crs: to its code, such as crs: EPSG:4326"));
             }
             Crs own = cached(keys, () -> GeoKeys.toCrs(keys, parser));
-            if (named.isPresent() && !named.get().sameAs(own)) {
+            if (named.isPresent() && !CrsDefinitions.sameSystem(named.get(), own)) {
                 throw file.refuse("The file is in " + own.label() + ", the run file says crs: " + given.get(),
                         "Take crs: out, or mend the file with gdal_edit.py -a_srs");
             }

@@ -1,7 +1,6 @@
 package org.wintersill.io.geotiff.read;
 
 import java.nio.file.Path;
-import java.util.Arrays;
 import java.util.Locale;
 import java.util.Optional;
 import org.wintersill.elevation.ElevationField;
@@ -21,7 +20,6 @@ import org.wintersill.problem.Problem;
 public final class GeotiffElevationFormat implements ElevationFormat {
     /** Void of int16 terrain models since SRTM, whether the file says so or not. */
     private static final double INT16_VOID = -32768;
-    private static final double[] UNDECLARED_VOIDS = {-9999, -32767, -99999};
     /** Beyond the deepest trench and the highest summit, metres. */
     private static final double LOWEST = -11500;
     private static final double HIGHEST = 9000;
@@ -59,14 +57,19 @@ public final class GeotiffElevationFormat implements ElevationFormat {
             boolean undeclared = header.nodata().isEmpty();
             boolean int16 = header.image().kind() == SampleKind.INT16;
             long[] odd = {0};
-            new GridWindow(header.place()).read(new WindowReader(file, header), new int[] {0}, grid.whole(), (band, row, column, stored) -> {
-                double height = stored * scale + offset;
-                boolean none = Double.isNaN(stored) || int16 && stored == INT16_VOID || undeclared && isVoid(stored);
-                if (!none && !(height >= LOWEST && height <= HIGHEST)) {
-                    odd[0]++;
-                    none = true;
+            WindowReader window = new WindowReader(file, header);
+            new GridWindow(header.place()).read(window, new int[] {0}, grid.whole(), (band, row, column, stored, count) -> {
+                int to = row * grid.columns() + column;
+                for (int i = 0; i < count; i++) {
+                    double value = stored[i];
+                    double height = value * scale + offset;
+                    boolean none = Double.isNaN(value) || int16 && value == INT16_VOID || undeclared && isVoid(value);
+                    if (!none && !(height >= LOWEST && height <= HIGHEST)) {
+                        odd[0]++;
+                        none = true;
+                    }
+                    heights[to + i] = none ? Float.NaN : (float) height;
                 }
-                heights[row * grid.columns() + column] = none ? Float.NaN : (float) height;
             });
             if (odd[0] > 0) {
                 notices.add(path + ": " + odd[0] + " heights outside " + (int) LOWEST + ".." + (int) HIGHEST + " m are taken as missing");
@@ -96,8 +99,9 @@ public final class GeotiffElevationFormat implements ElevationFormat {
                 + " more memory with -Xmx").asException(cause);
     }
 
+    /** What files hold for "no height" although they do not say so. */
     private static boolean isVoid(double stored) {
-        return Math.abs(stored) > 1e30 || Arrays.stream(UNDECLARED_VOIDS).anyMatch(v -> v == stored);
+        return Math.abs(stored) > 1e30 || stored == -9999 || stored == -32767 || stored == -99999;
     }
 
     private static double number(TiffFile file, GeotiffHeader header, String role, double usual) {
@@ -144,7 +148,8 @@ public final class GeotiffElevationFormat implements ElevationFormat {
         return switch (text.trim().toLowerCase(Locale.ROOT).replace('_', ' ').replace("-", " ")) {
             case "m", "metre", "meter", "metres", "meters", "mtr" -> 1;
             case "ft", "foot", "feet", "international foot", "international feet" -> FOOT;
-            case "us ft", "ftus", "us survey foot", "us survey feet", "foot us", "survey foot", "survey feet", "us foot", "us feet", "ussft", "sft", "usft" -> US_FOOT;
+            case "us ft", "ftus", "us survey foot", "us survey feet", "foot us", "survey foot", "survey feet", "us foot", "us feet",
+                    "ussft", "sft", "usft" -> US_FOOT;
             default -> throw file.refuse("The unit '" + text + "' " + whose + " is no unit of height that is known; m, ft and us-ft are",
                     "Check that the file holds heights, and set its unit with gdal_edit.py -units");
         };

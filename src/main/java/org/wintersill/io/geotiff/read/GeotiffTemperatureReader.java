@@ -28,8 +28,12 @@ final class GeotiffTemperatureReader implements DailyTemperatureReader {
             throw new IllegalArgumentException(block + " is not inside " + place.grid().describe());
         }
         int[] bands = Arrays.copyOfRange(bandOfDay, firstDay, firstDay + dayCount);
-        new GridWindow(place).read(window, bands, block, (day, row, column, stored) ->
-                out[offset + day * dayStride + (row - block.row()) * block.columns() + column - block.column()] = celsius(bands[day], stored));
+        new GridWindow(place).read(window, bands, block, (day, row, column, stored, count) -> {
+            int to = offset + day * dayStride + (row - block.row()) * block.columns() + column - block.column();
+            for (int i = 0; i < count; i++) {
+                out[to + i] = celsius(bands[day], stored[i]);
+            }
+        });
     }
 
     private float celsius(int band, double stored) {

@@ -24,7 +24,7 @@ final class GridWindow {
 
     /** @param shift column of the grid minus column of the file */
     private void part(WindowReader window, int[] bands, int row, int rows, int column, int columns, int shift, WindowReader.Sink sink) {
-        window.read(bands, row, rows, column, columns, (band, fileRow, fileColumn, stored) ->
-                sink.value(band, place.turnedRow(fileRow), fileColumn + shift, stored));
+        window.read(bands, row, rows, column, columns, (band, fileRow, fileColumn, stored, count) ->
+                sink.row(band, place.turnedRow(fileRow), fileColumn + shift, stored, count));
     }
 }

@@ -7,6 +7,9 @@ import java.nio.ByteOrder;
  * Undoes the differences that were taken before compression, in place: predictor 2 (TIFF 6.0 section 14, differences of
  * whole numbers of the sample's size, in the file's byte order) and predictor 3 (TIFF technical note 3: byte planes of
  * reals, most significant first whatever the byte order, then byte differences).
+ *
+ * <p>libtiff on little-endian machines writes the planes of big-endian files the other way round. Such files cannot be told
+ * from right ones by their tags, so a chunk is turned when that makes more of its values ordinary numbers.
  */
 final class Predictors {
     private Predictors() {
@@ -25,6 +28,31 @@ final class Predictors {
                 sum(buffer, row * rowBytes, rowBytes, image.samplesPerChunk(), image.kind().bytes());
             } else {
                 planes(raw, row * rowBytes, rowBytes, image.samplesPerChunk(), image.kind().bytes(), order, spare);
+            }
+        }
+        if (image.predictor() == 3 && order == ByteOrder.BIG_ENDIAN
+                && ordinary(image.kind(), raw, rows * rowBytes, ByteOrder.LITTLE_ENDIAN) > ordinary(image.kind(), raw, rows * rowBytes, order)) {
+            turn(raw, rows * rowBytes, image.kind().bytes());
+        }
+    }
+
+    /** Number of values that data are likely to hold: zero, missing, or of a middling size. */
+    private static int ordinary(SampleKind kind, byte[] raw, int length, ByteOrder order) {
+        ByteBuffer buffer = ByteBuffer.wrap(raw).order(order);
+        int count = 0;
+        for (int i = 0; i < length; i += kind.bytes()) {
+            double size = Math.abs(kind.get(buffer, i));
+            count += size > 1e-9 && size < 1e9 || size == 0 || !(size < 3e38) ? 1 : 0;
+        }
+        return count;
+    }
+
+    private static void turn(byte[] raw, int length, int bytes) {
+        for (int i = 0; i < length; i += bytes) {
+            for (int low = i, high = i + bytes - 1; low < high; low++, high--) {
+                byte held = raw[low];
+                raw[low] = raw[high];
+                raw[high] = held;
             }
         }
     }

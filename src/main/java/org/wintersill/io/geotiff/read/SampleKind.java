@@ -54,11 +54,39 @@ enum SampleKind {
         };
     }
 
-    /** A number as this type stores it, for comparison with stored values; NaN where it never equals one. */
-    double stored(double value) {
-        if (this == FLOAT32) {
-            return (float) value;
+    /**
+     * Many samples at once; a loop for each type, for this is where reading spends its time.
+     *
+     * @param at byte position of the first sample
+     * @param step bytes from one sample to the next
+     */
+    void get(ByteBuffer raw, int at, int step, double[] out, int count) {
+        switch (this) {
+            case INT16 -> {
+                for (int i = 0; i < count; i++) {
+                    out[i] = raw.getShort(at + i * step);
+                }
+            }
+            case FLOAT32 -> {
+                for (int i = 0; i < count; i++) {
+                    out[i] = raw.getFloat(at + i * step);
+                }
+            }
+            case FLOAT64 -> {
+                for (int i = 0; i < count; i++) {
+                    out[i] = raw.getDouble(at + i * step);
+                }
+            }
+            default -> {
+                for (int i = 0; i < count; i++) {
+                    out[i] = get(raw, at + i * step);
+                }
+            }
         }
-        return value;
+    }
+
+    /** A number as this type stores it, for comparison with stored values. */
+    double stored(double value) {
+        return this == FLOAT32 ? (float) value : value;
     }
 }

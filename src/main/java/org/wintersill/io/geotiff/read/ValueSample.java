@@ -22,9 +22,11 @@ final class ValueSample {
         for (double place : PLACES) {
             int row = (int) Math.min(image.height() - 1, Math.round(place * (image.height() - 1)));
             int rows = Math.min(ROWS, image.height() - row);
-            reader.read(new int[] {band}, row, rows, 0, image.width(), (b, r, c, stored) -> {
-                if (count[0] < MOST_VALUES && Double.isFinite(stored) && Math.abs(stored) < 1e30 && !(silent && isFill(stored))) {
-                    found[count[0]++] = stored;
+            reader.read(new int[] {band}, row, rows, 0, image.width(), (b, r, c, stored, n) -> {
+                for (int i = 0; i < n && count[0] < MOST_VALUES; i++) {
+                    if (Double.isFinite(stored[i]) && Math.abs(stored[i]) < 1e30 && !(silent && isFill(stored[i]))) {
+                        found[count[0]++] = stored[i];
+                    }
                 }
             });
             if (count[0] > 0) {

@@ -2,6 +2,7 @@ package org.wintersill.io.geotiff.read;
 
 import java.io.IOException;
 import java.nio.ByteBuffer;
+import java.util.Arrays;
 import org.wintersill.io.geotiff.read.ChunkCodec.DamagedChunk;
 import org.wintersill.problem.Problem;
 
@@ -10,15 +11,16 @@ import org.wintersill.problem.Problem;
  * missing (no-data value, internal mask, chunks that were left out, NaN) come as NaN. Used by one thread.
  */
 final class WindowReader {
-    /** Takes the values of a window. */
+    /** Takes the values of a window, piece of row by piece of row. */
     interface Sink {
         /**
          * @param band position in the list of bands that was asked for
          * @param row row of the file
-         * @param column column of the file
-         * @param stored value as stored, before scale and offset; NaN for none
+         * @param column column of the file of the first value
+         * @param stored values as stored, before scale and offset; NaN for none; the array is used again afterwards
+         * @param count number of values
          */
-        void value(int band, int row, int column, double stored);
+        void row(int band, int row, int column, double[] stored, int count);
     }
 
     /** Many programs write the lowest float with few digits; all of them are below this. */
@@ -70,19 +72,21 @@ final class WindowReader {
         ByteBuffer raw = values.chunk(image.chunkIndex(band, chunkRow, chunkColumn), chunkRow);
         int stride = image.samplesPerChunk() * kind.bytes();
         int inChunk = image.separate() ? 0 : band * kind.bytes();
-        int at = 0;
+        int count = right - left;
+        double[] stored = new double[count];
         for (int row = top; row < bottom; row++) {
-            int rowStart = (row - chunkRow * image.chunkHeight()) * (int) image.rowBytes() + inChunk;
-            for (int column = left; column < right; column++, at++) {
-                double stored = Double.NaN;
-                if (raw != null && (valid == null || valid[at])) {
-                    stored = kind.get(raw, rowStart + (column - chunkColumn * image.chunkWidth()) * stride);
-                    if (stored == nodata || lowest && stored <= LOWEST_FLOATS) {
-                        stored = Double.NaN;
+            if (raw == null) {
+                Arrays.fill(stored, Double.NaN);
+            } else {
+                int rowStart = (row - chunkRow * image.chunkHeight()) * (int) image.rowBytes() + inChunk;
+                kind.get(raw, rowStart + (left - chunkColumn * image.chunkWidth()) * stride, stride, stored, count);
+                for (int i = 0; i < count; i++) {
+                    if (stored[i] == nodata || lowest && stored[i] <= LOWEST_FLOATS || valid != null && !valid[(row - top) * count + i]) {
+                        stored[i] = Double.NaN;
                     }
                 }
-                sink.value(position, row, column, stored);
             }
+            sink.row(position, row, left, stored, count);
         }
     }
 
