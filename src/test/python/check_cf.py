@@ -26,7 +26,7 @@ def main(path):
                 print("N1 no global", name)
         for name, v in nc.variables.items():
             check_variable(nc, name, v)
-    with xarray.open_dataset(path, decode_cf=True) as ds:
+    with xarray.open_dataset(path, decode_timedelta=False) as ds:
         ds.load()
 
 
