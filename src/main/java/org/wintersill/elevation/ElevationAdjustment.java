@@ -1,5 +1,7 @@
 package org.wintersill.elevation;
 
+import java.util.function.IntPredicate;
+import java.util.stream.IntStream;
 import org.wintersill.grid.CoordinateOperation;
 import org.wintersill.grid.GridGeometry;
 
@@ -17,7 +19,8 @@ public final class ElevationAdjustment {
     private final float[] targetHeights;
     private final LapseRates lapseRates;
     private final float[][] heightGain;
-    private final int[][] containing;
+    private final int[][] missingColumns;
+    private final int[][] unevenColumns;
 
     private ElevationAdjustment(SourcePositions positions, float[] sourceHeights, float[] targetHeights, LapseRates lapseRates) {
         this.positions = positions;
@@ -25,7 +28,15 @@ public final class ElevationAdjustment {
         this.targetHeights = targetHeights;
         this.lapseRates = lapseRates;
         heightGain = targetHeights == null ? null : heightGains();
-        containing = isPassThrough() ? null : containingCells();
+        int rows = isPassThrough() ? 0 : positions.target().rows();
+        missingColumns = new int[rows][];
+        unevenColumns = new int[rows][];
+        for (int r = 0; r < rows; r++) {
+            int row = r;
+            missingColumns[row] = columns(row, column -> containing(row, column) < 0);
+            unevenColumns[row] = heightGain == null ? new int[0]
+                    : columns(row, column -> containing(row, column) >= 0 && Float.isNaN(heightGain[row][column]));
+        }
     }
 
     /** The target is the source's own grid: temperatures are passed on. */
@@ -72,19 +83,9 @@ public final class ElevationAdjustment {
         return gains;
     }
 
-    /** Source cell that contains each target cell, {@code [row][column]}; -1 where the target cell can have no value. */
-    private int[][] containingCells() {
-        GridGeometry target = positions.target();
-        int[][] cells = new int[target.rows()][target.columns()];
-        for (int row = 0; row < target.rows(); row++) {
-            for (int column = 0; column < target.columns(); column++) {
-                int cell = positions.containing(row, column);
-                boolean noHeight = targetHeights != null && (Float.isNaN(targetHeights[row * target.columns() + column])
-                        || cell >= 0 && Float.isNaN(sourceHeights[cell]));
-                cells[row][column] = noHeight ? -1 : cell;
-            }
-        }
-        return cells;
+    /** Columns of a target row for which something holds. */
+    private int[] columns(int row, IntPredicate holds) {
+        return IntStream.range(0, positions.target().columns()).filter(holds).toArray();
     }
 
     /** Plain bilinear value; NaN where any corner with a weight is NaN. */
@@ -139,9 +140,22 @@ public final class ElevationAdjustment {
         return targetHeights;
     }
 
-    /** Source cell that contains each cell of a target row; -1 where the target cell can have no value. Not for a pass-through. */
-    int[] containing(int row) {
-        return containing[row];
+    /** Source cell that contains a target cell; -1 where the target cell can have no value. */
+    int containing(int row, int column) {
+        int cell = positions.containing(row, column);
+        boolean noHeight = targetHeights != null && (Float.isNaN(targetHeights[row * positions.target().columns() + column])
+                || cell >= 0 && Float.isNaN(sourceHeights[cell]));
+        return noHeight ? -1 : cell;
+    }
+
+    /** Columns of a target row that can have no value, ascending. Not for a pass-through. */
+    int[] missingColumns(int row) {
+        return missingColumns[row];
+    }
+
+    /** Columns of a target row that can have a value, but with a source height missing beside them. Not for a pass-through. */
+    int[] unevenColumns(int row) {
+        return unevenColumns[row];
     }
 
     float[] sourceHeights() {

@@ -44,10 +44,13 @@ public final class LaneAdjuster {
             int start = (r - firstRow) * positions.target().columns();
             if (positions.isSeparable()) {
                 interpolateRow(night, offset, (float) lapse, r, out, start);
+                mendRow(night, offset, lapse, r, out, start);
             } else {
                 interpolateCells(night, offset, (float) lapse, r, out, start);
+                for (int column = 0; column < row.length; column++) {
+                    mend(night, offset, lapse, r, column, out, start + column);
+                }
             }
-            mend(night, offset, lapse, r, out, start);
         }
     }
 
@@ -61,30 +64,26 @@ public final class LaneAdjuster {
     /** Both axes independent: blend the two source rows once, then only along the row. Missing corners give NaN. */
     private void interpolateRow(float[] night, int offset, float lapse, int targetRow, float[] out, int start) {
         int columns = positions.source().columns();
-        int targetColumns = positions.target().columns();
         int north = positions.north(targetRow, 0);
         if (north < 0) {
-            Arrays.fill(out, start, start + targetColumns, Float.NaN);
-            return;
+            Arrays.fill(row, Float.POSITIVE_INFINITY);
+            Arrays.fill(blended, 0);
+        } else {
+            int upper = offset + north * columns;
+            System.arraycopy(night, upper, above, 0, columns);
+            System.arraycopy(night, positions.source().rows() > 1 ? upper + columns : upper, below, 0, columns);
+            mix(above, below, positions.southWeight(targetRow, 0), blended, columns);
+            gather(blended, positions.westByColumn(), columns > 1 ? 1 : 0, left, right, row.length);
+            alongRow(left, right, positions.eastWeightByColumn(), row, row.length);
+            float[] gain = adjustment.heightGain(targetRow);
+            if (gain != null) {
+                addHeight(gain, lapse, row, row.length);
+            }
         }
-        int upper = offset + north * columns;
-        int lower = positions.source().rows() > 1 ? upper + columns : upper;
-        blend(night, upper, lower, positions.southWeight(targetRow, 0), columns);
-        gather(positions.westByColumn(), columns > 1 ? 1 : 0, targetColumns);
-        alongRow(left, right, positions.eastWeightByColumn(), row, targetColumns);
-        float[] gain = adjustment.heightGain(targetRow);
-        if (gain != null) {
-            addHeight(gain, lapse, row, targetColumns);
-        }
-        System.arraycopy(row, 0, out, start, targetColumns);
+        System.arraycopy(row, 0, out, start, row.length);
     }
 
-    private void blend(float[] night, int upper, int lower, float south, int columns) {
-        System.arraycopy(night, upper, above, 0, columns);
-        System.arraycopy(night, lower, below, 0, columns);
-        mix(above, below, south, blended, columns);
-    }
-
+    /** The source row at the target row's northing. */
     private static void mix(float[] above, float[] below, float south, float[] blended, int columns) {
         for (int i = 0; i < columns; i++) {
             blended[i] = above[i] + south * (below[i] - above[i]);
@@ -92,7 +91,7 @@ public final class LaneAdjuster {
     }
 
     /** Values of the western and eastern neighbour of every target column; of the first column beyond the source, mended later. */
-    private void gather(int[] west, int east, int cells) {
+    private static void gather(float[] blended, int[] west, int east, float[] left, float[] right, int cells) {
         for (int i = 0; i < cells; i++) {
             int at = west[i];
             left[i] = blended[at];
@@ -136,18 +135,31 @@ public final class LaneAdjuster {
 
     /**
      * Cells that can have no value become infinite; cells whose plain interpolation met a missing corner are worked out without
-     * it, or are missing too.
+     * it, or are missing too. Only the columns that a missing source value can reach are looked at.
      */
-    private void mend(float[] night, int offset, double lapse, int targetRow, float[] out, int start) {
-        int[] containing = adjustment.containing(targetRow);
-        for (int column = 0; column < containing.length; column++) {
-            int source = containing[column];
-            float value = out[start + column];
-            if (source < 0 || value != value) {
-                boolean missing = source < 0 || Float.isNaN(night[offset + source]);
-                out[start + column] = missing ? Float.POSITIVE_INFINITY
-                        : withoutMissingCorners(night, offset, lapse, targetRow, column);
+    private void mendRow(float[] night, int offset, double lapse, int targetRow, float[] out, int start) {
+        for (int k = 0; k < blended.length; k++) {
+            if (Float.isNaN(blended[k])) {
+                int end = positions.firstColumnOf(k + 1);
+                for (int column = positions.firstColumnOf(k - 1); column < end; column++) {
+                    mend(night, offset, lapse, targetRow, column, out, start + column);
+                }
             }
+        }
+        for (int column : adjustment.missingColumns(targetRow)) {
+            out[start + column] = Float.POSITIVE_INFINITY;
+        }
+        // A source height may be missing where the temperature is not.
+        for (int column : adjustment.unevenColumns(targetRow)) {
+            mend(night, offset, lapse, targetRow, column, out, start + column);
+        }
+    }
+
+    private void mend(float[] night, int offset, double lapse, int targetRow, int column, float[] out, int at) {
+        if (Float.isNaN(out[at])) {
+            int source = adjustment.containing(targetRow, column);
+            boolean missing = source < 0 || Float.isNaN(night[offset + source]);
+            out[at] = missing ? Float.POSITIVE_INFINITY : withoutMissingCorners(night, offset, lapse, targetRow, column);
         }
     }
 

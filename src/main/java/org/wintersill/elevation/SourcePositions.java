@@ -21,6 +21,7 @@ public final class SourcePositions {
     /** Column of the western centre by target column (separable) or target cell; -1 beyond the source. */
     private final int[] west;
     private final int[] westOrFirst;
+    private final int[] firstColumn;
     private final float[] eastWeight;
     private final int[] north;
     private final float[] southWeight;
@@ -51,6 +52,20 @@ public final class SourcePositions {
             transformCells(targetToSource);
         }
         westOrFirst = separable ? Arrays.stream(west).map(at -> Math.max(0, at)).toArray() : west;
+        firstColumn = separable ? firstColumns() : new int[0];
+    }
+
+    /** First target column, by source column, whose centre is not west of all that the source column can reach. */
+    private int[] firstColumns() {
+        int[] first = new int[source.columns() + 1];
+        int column = 0;
+        for (int sourceColumn = 0; sourceColumn < first.length; sourceColumn++) {
+            while (column < west.length && (west[column] < 0 ? target.centreX(column) < source.west() : west[column] < sourceColumn)) {
+                column++;
+            }
+            first[sourceColumn] = column;
+        }
+        return first;
     }
 
     private void transformCells(CoordinateOperation targetToSource) {
@@ -108,6 +123,11 @@ public final class SourcePositions {
     /** Western neighbours by target column, 0 beyond the source; only where positions are separable. Shared, not copied. */
     int[] westByColumn() {
         return westOrFirst;
+    }
+
+    /** First target column whose western neighbour is the given source column or one east of it; only where separable. */
+    int firstColumnOf(int sourceColumn) {
+        return firstColumn[Math.max(0, Math.min(sourceColumn, source.columns()))];
     }
 
     /** Weights of the eastern neighbours by target column; only where positions are separable. Shared, not copied. */
