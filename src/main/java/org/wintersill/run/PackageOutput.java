@@ -38,8 +38,8 @@ final class PackageOutput {
             for (int c = 0; c < plan.cultivars().size(); c++) {
                 addCultivar(layer, plan, plan.cultivars().get(c), new ClassPolygons(grid, classes[c]), areas.get(c));
             }
-            layer.style(QmlWriter.polygons(LayerStyles.suitability(), "class_code"),
-                    SldWriter.polygons(LayerStyles.suitability(), "class_code"));
+            layer.style(QmlWriter.polygons(LayerStyles.suitability(), "class"),
+                    SldWriter.polygons(LayerStyles.suitability(), "class"));
             writer.metadata(VOCABULARY, record);
             writer.finish();
         }

@@ -82,7 +82,7 @@ public final class SuitabilityLayer {
                 row.elevationMax(), row.cells());
     }
 
-    /** Stores the look of the layer, as QML and SLD over the column {@code class_code}. */
+    /** Stores the look of the layer, as QML and SLD over the column {@code class}. */
     public void style(String qml, String sld) {
         writer.style(TABLE, classes.id(), qml, sld, classes.title());
     }
