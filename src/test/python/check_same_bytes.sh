@@ -18,7 +18,7 @@ trial() { # NAME THREADS LANGUAGE ZONE
   mkdir -p "$place"
   if ! (cd "$place" && LC_ALL=$5 TZ=$4 java -Duser.language="${3%_*}" -Duser.country="${3#*_}" -Duser.timezone="$4" -jar "$jar" map "$samples/run.yaml" --out out --threads "$2") \
       > "$work/stdout" 2> "$work/stderr"; then
-    echo "FAILED $1: $(tail -3 "$work/stderr" | tr '\n' ' ')"; failed=$((failed + 1)); return
+    echo "FAILED $1: $(grep -v -e "^note:" -e "Layers:" "$work/stderr" | head -5 | tr "\n" " " | cut -c1-300)"; failed=$((failed + 1)); return
   fi
   digest "$place/out" > "$work/now"
   if [ -z "$base" ]; then
