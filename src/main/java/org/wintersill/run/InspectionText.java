@@ -15,7 +15,7 @@ public final class InspectionText {
         line(text, "variable", file.variable() + ", unit " + file.unit());
         line(text, "days", file.dayCount() + " from " + file.firstDate() + " to " + file.lastDate() + ", " + file.calendar()
                 + " calendar");
-        if (inspection.missingDays() > 0) {
+        if (inspection.missingDays() > 0 && !file.details().containsKey("missing days")) {
             line(text, "missing days", inspection.missingDays() + ": " + String.join(", ", inspection.gaps()));
         }
         line(text, "grid", file.grid());

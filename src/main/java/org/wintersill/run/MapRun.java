@@ -102,8 +102,8 @@ public final class MapRun {
         LayerOutput.write(folder.unfinished("summary.csv"), SummaryTables.csv(plan, areas));
         LayerOutput.write(folder.unfinished("summary.json"), SummaryTables.json(plan, areas));
         if (plan.config().outputs().geopackage()) {
-            PackageOutput.write(folder.unfinished("layers.gpkg"), plan, output.period(), summaries.classes(), areas,
-                    JsonText.of(record));
+            new PackageOutput(plan, summaries, rowAreas, output.period())
+                    .write(folder.unfinished("layers.gpkg"), areas, JsonText.of(record));
         }
         return areas;
     }

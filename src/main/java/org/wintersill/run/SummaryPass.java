@@ -148,6 +148,32 @@ final class SummaryPass {
         return new WinterRecord(plan.choices().years(), cultivar.isPresent() ? new float[0][] : minimum, margins, damage, count * columns);
     }
 
+    /** Takes full-width rows of all summary layers of a cultivar. */
+    interface RowTaker {
+        /** @param values {@code [layer][row * columns + column]} */
+        void take(int firstRow, int rowCount, float[][] values);
+    }
+
+    /** The summary layers of a cultivar, in the order of {@link #eachRow}. */
+    List<LayerDefinition> cultivarLayers() {
+        return ClimatologyStatistics.ofCultivar(plan.choices()).stream().map(ClimatologyStatistic::layer).toList();
+    }
+
+    /** Gives the summaries of a cultivar once more, from the north, a few rows at a time. */
+    void eachRow(int cultivar, RowTaker taker) {
+        List<ClimatologyStatistic> statistics = ClimatologyStatistics.ofCultivar(plan.choices());
+        for (int row = 0; row < rows; row += TASK_ROWS) {
+            int count = Math.min(TASK_ROWS, rows - row);
+            WinterRecord record = record(Optional.of(cultivar), row, count);
+            float[][] values = new float[statistics.size()][count * columns];
+            for (int layer = 0; layer < values.length; layer++) {
+                statistics.get(layer).summarise(record, values[layer], 0, count * columns);
+            }
+            taker.take(row, count, values);
+            workers.checkCancelled();
+        }
+    }
+
     /** Writes how many cultivars meet the target in each cell, and the best low margin. */
     void choice() {
         double target = plan.choices().target();

@@ -14,7 +14,7 @@ final class WinterLayers {
             "Fraction of buds killed by the worst night of the winter", "1", SampleType.FLOAT32, "time: maximum within years",
             LayerStyles.damage());
     static final LayerDefinition WORST_NIGHT = new LayerDefinition("worst-night", "Worst night of the winter",
-            "Earliest night of the lowest margin, in days since the first day of the winter window", "days", SampleType.INT16, "",
+            "Earliest night of the lowest margin, in days since the first day of the winter window", "days", SampleType.INT16, "time: point within years",
             LayerStyles.night());
     static final LayerDefinition MINIMUM = new LayerDefinition("minimum", "Lowest minimum of the winter",
             "Lowest Tmin of the winter at the cell's own elevation", "degC", SampleType.FLOAT32, "time: minimum within years",

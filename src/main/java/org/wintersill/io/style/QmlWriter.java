@@ -89,8 +89,8 @@ public final class QmlWriter {
                     "label", entries.get(i).label(), "render", "true");
         }
         xml.close();
-        symbols(xml, entries.stream().map(LayerStyle.Entry::colour).toList());
-        return end(xml);
+        symbols(xml, entries.stream().map(LayerStyle.Entry::colour).toList(), Shape.FILL);
+        return end(xml, Shape.FILL);
     }
 
     /**
@@ -100,6 +100,15 @@ public final class QmlWriter {
      * @param column name of the numeric column
      */
     public static String graduatedPolygons(LayerStyle.Ramp ramp, String column) {
+        return graduated(ramp, column, Shape.FILL);
+    }
+
+    /** Style of points by a number; as {@link #graduatedPolygons}. */
+    public static String graduatedPoints(LayerStyle.Ramp ramp, String column) {
+        return graduated(ramp, column, Shape.MARKER);
+    }
+
+    private static String graduated(LayerStyle.Ramp ramp, String column, Shape shape) {
         XmlText xml = root("Symbology");
         xml.open("renderer-v2", "type", "graduatedSymbol", "attr", attribute(column), "graduatedMethod",
                 "GraduatedColor", "symbollevels", "0", "enableorderby", "0", "forceraster", "0");
@@ -112,8 +121,23 @@ public final class QmlWriter {
                     "label", interval.label(), "render", "true");
         }
         xml.close();
-        symbols(xml, intervals.stream().map(Interval::colour).toList());
-        return end(xml);
+        symbols(xml, intervals.stream().map(Interval::colour).toList(), shape);
+        return end(xml, shape);
+    }
+
+    /** What a symbol is drawn with, in the words of QGIS. */
+    private enum Shape {
+        FILL("fill", "SimpleFill", "2"), MARKER("marker", "SimpleMarker", "0");
+
+        private final String symbol;
+        private final String layer;
+        private final String geometryType;
+
+        Shape(String symbol, String layer, String geometryType) {
+            this.symbol = symbol;
+            this.layer = layer;
+            this.geometryType = geometryType;
+        }
     }
 
     /** A field name as it is when it is plain; otherwise in the quotes of QGIS's expressions. */
@@ -125,16 +149,22 @@ public final class QmlWriter {
         return new XmlText().open("qgis", "version", VERSION, "styleCategories", categories);
     }
 
-    private static void symbols(XmlText xml, List<Colour> colours) {
+    private static void symbols(XmlText xml, List<Colour> colours, Shape shape) {
         xml.open("symbols");
         for (int i = 0; i < colours.size(); i++) {
-            xml.open("symbol", "type", "fill", "name", Integer.toString(i), "alpha", "1", "clip_to_extent", "1",
+            xml.open("symbol", "type", shape.symbol, "name", Integer.toString(i), "alpha", "1", "clip_to_extent", "1",
                     "force_rhr", "0");
-            xml.open("layer", "class", "SimpleFill", "enabled", "1", "locked", "0", "pass", "0");
+            xml.open("layer", "class", shape.layer, "enabled", "1", "locked", "0", "pass", "0");
             property(xml, "color", rgba(colours.get(i)));
-            property(xml, "style", "solid");
+            if (shape == Shape.FILL) {
+                property(xml, "style", "solid");
+            } else {
+                property(xml, "name", "square");
+                property(xml, "size", "1.2");
+                property(xml, "size_unit", "MM");
+            }
             property(xml, "outline_color", rgba(Colour.hex(OUTLINE)));
-            property(xml, "outline_style", "solid");
+            property(xml, "outline_style", shape == Shape.FILL ? "solid" : "no");
             property(xml, "outline_width", "0.1");
             property(xml, "outline_width_unit", "MM");
             property(xml, "joinstyle", "bevel");
@@ -152,9 +182,9 @@ public final class QmlWriter {
         return colour.red() + "," + colour.green() + "," + colour.blue() + ",255";
     }
 
-    private static String end(XmlText xml) {
+    private static String end(XmlText xml, Shape shape) {
         xml.close();
-        xml.element("blendMode", "0").element("featureBlendMode", "0").element("layerGeometryType", "2");
+        xml.element("blendMode", "0").element("featureBlendMode", "0").element("layerGeometryType", shape.geometryType);
         return xml.close().finish();
     }
 }

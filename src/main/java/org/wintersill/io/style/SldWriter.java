@@ -1,5 +1,6 @@
 package org.wintersill.io.style;
 
+import java.util.function.BiConsumer;
 import org.wintersill.layer.Colour;
 import org.wintersill.layer.LayerStyle;
 import org.wintersill.layer.SampleType;
@@ -68,6 +69,15 @@ public final class SldWriter {
      * @param column name of the numeric column
      */
     public static String graduatedPolygons(LayerStyle.Ramp ramp, String column) {
+        return graduated(ramp, column, SldWriter::fill);
+    }
+
+    /** Style of points by a number; as {@link #graduatedPolygons}. */
+    public static String graduatedPoints(LayerStyle.Ramp ramp, String column) {
+        return graduated(ramp, column, SldWriter::mark);
+    }
+
+    private static String graduated(LayerStyle.Ramp ramp, String column, BiConsumer<XmlText, Colour> symbol) {
         XmlText xml = begin(ramp);
         for (Interval interval : Interval.of(ramp)) {
             xml.open("Rule").element("Name", interval.label()).element("Title", interval.label());
@@ -76,7 +86,7 @@ public final class SldWriter {
                     XmlText.number(interval.lowerOr(-Interval.FAR)));
             comparison(xml, "ogc:PropertyIsLessThanOrEqualTo", column, XmlText.number(interval.upperOr(Interval.FAR)));
             xml.close().close();
-            fill(xml, interval.colour());
+            symbol.accept(xml, interval.colour());
             xml.close();
         }
         return end(xml);
@@ -92,6 +102,12 @@ public final class SldWriter {
         xml.open("Stroke").element("CssParameter", OUTLINE, "name", "stroke")
                 .element("CssParameter", "0.3", "name", "stroke-width").close();
         xml.close();
+    }
+
+    private static void mark(XmlText xml, Colour colour) {
+        xml.open("PointSymbolizer").open("Graphic").open("Mark").element("WellKnownName", "square");
+        xml.open("Fill").element("CssParameter", colour.hex(), "name", "fill").close().close();
+        xml.element("Size", "4").close().close();
     }
 
     private static XmlText begin(LayerStyle style) {
