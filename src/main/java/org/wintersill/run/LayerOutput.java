@@ -20,7 +20,6 @@ import org.wintersill.layer.RasterFormat;
 import org.wintersill.layer.RasterHeader;
 import org.wintersill.layer.RasterWriter;
 import org.wintersill.problem.Problem;
-import org.wintersill.time.CfDate;
 import org.wintersill.time.Season;
 
 /**
@@ -109,12 +108,9 @@ final class LayerOutput {
         return seasons.get(seasons.size() - 1);
     }
 
-    /** End of the period as TIFF writes times; a day that the common calendar lacks becomes the 28th. */
+    /** End of the period as TIFF writes times. */
     private String dateTime() {
-        CfDate end = last().last();
-        String month = (end.month() < 10 ? "0" : "") + end.month();
-        int day = end.month() == 2 ? Math.min(28, end.day()) : Math.min(30, end.day());
-        return "%04d".formatted(end.year()) + ":" + month + ":" + (day < 10 ? "0" : "") + day + " 00:00:00";
+        return PeriodEnd.of(seasons).toString().replace('-', ':') + " 00:00:00";
     }
 
     static void write(Path file, String text) {

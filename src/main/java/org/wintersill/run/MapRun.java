@@ -60,7 +60,7 @@ public final class MapRun {
                 return new GeoKeyTags(keys.directory(), keys.doubles(), keys.ascii());
             });
             LayerOutput output = new LayerOutput(folder, format, plan.target(), plan.seasons(),
-                    Digests.ofText(JsonText.of(plan.config().effective())), workers.executor());
+                    Digests.ofText(JsonText.of(RunRecord.configuration(plan.config()))), workers.executor());
             SummaryPass summaries = new SummaryPass(plan, store, output, new LayerSelection(plan.config().outputs().layers()),
                     workers, progress);
             writeLayers(summaries, cultivars);

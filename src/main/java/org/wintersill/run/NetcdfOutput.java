@@ -16,7 +16,6 @@ import org.wintersill.io.netcdf.write.CfWinterWriter;
 import org.wintersill.io.netcdf.write.WinterFile;
 import org.wintersill.layer.LayerDefinition;
 import org.wintersill.season.WinterValues;
-import org.wintersill.time.CfDate;
 
 /** The winter layers as CF NetCDF: {@code <cultivar>/winters.nc} with margin, damage and worst night, and {@code shared/winters.nc}. */
 final class NetcdfOutput {
@@ -66,7 +65,6 @@ final class NetcdfOutput {
     }
 
     private Map<String, String> attributes(Optional<Cultivar> cultivar) {
-        CfDate end = plan.seasons().get(plan.seasons().size() - 1).last();
         String who = cultivar.map(known -> known.name() + " (" + known.species() + ", " + known.organ() + "; curve "
                 + known.status().word() + ", " + known.source() + ")").orElse("no cultivar");
         Map<String, String> attributes = new LinkedHashMap<>();
@@ -81,7 +79,7 @@ final class NetcdfOutput {
         attributes.put("institution", "not stated");
         attributes.put("license", "as the inputs");
         attributes.put("creator_name", "not stated");
-        attributes.put("date_created", new CfDate(end.year(), end.month(), Math.min(28, end.day())).toString());
+        attributes.put("date_created", PeriodEnd.of(plan.seasons()).toString());
         return attributes;
     }
 

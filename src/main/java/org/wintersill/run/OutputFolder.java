@@ -30,9 +30,9 @@ public final class OutputFolder implements AutoCloseable {
     private boolean published;
 
     private OutputFolder(Path folder, boolean madeFolder) {
-        this.folder = folder;
+        this.folder = folder.normalize();
         this.madeFolder = madeFolder;
-        hidden = folder.resolve(HIDDEN);
+        hidden = this.folder.resolve(HIDDEN);
     }
 
     /**

@@ -13,7 +13,6 @@ import org.wintersill.io.geopackage.SuitabilityLayer;
 import org.wintersill.io.style.QmlWriter;
 import org.wintersill.io.style.SldWriter;
 import org.wintersill.layer.LayerStyles;
-import org.wintersill.time.CfDate;
 
 /** {@code layers.gpkg}: suitability polygons of every cultivar with their areas, styles and the record. */
 final class PackageOutput {
@@ -42,7 +41,7 @@ final class PackageOutput {
      */
     void write(Path file, List<ClassAreas> areas, String record) {
         GridGeometry grid = plan.target();
-        try (GeoPackageWriter writer = GeoPackageWriter.create(file, lastChange(plan))) {
+        try (GeoPackageWriter writer = GeoPackageWriter.create(file, PeriodEnd.of(plan.seasons()) + "T00:00:00.000Z")) {
             int srs = writer.addCrs(CrsRow.of(grid.crs(), CrsDefinitions.wkt2(grid.crs()), CrsRow.FIRST_OWN_ID));
             SuitabilityLayer layer = new SuitabilityLayer(writer, srs, "Suitability, winters " + period,
                     plan.config().title() + ". Class by the frequency of killing winters, winters " + period + ", cells of "
@@ -93,11 +92,5 @@ final class PackageOutput {
         summaries.eachRow(number, layer::addRows);
         writer.style(table, "margin-low", QmlWriter.graduatedPoints(LayerStyles.margin(), "margin_low"),
                 SldWriter.graduatedPoints(LayerStyles.margin(), "margin_low"), "Margin, one winter in ten");
-    }
-
-    /** End of the period: never the clock, so that the same input gives the same bytes. */
-    private static String lastChange(RunPlan plan) {
-        CfDate end = plan.seasons().get(plan.seasons().size() - 1).last();
-        return new CfDate(end.year(), end.month(), Math.min(28, end.day())) + "T00:00:00.000Z";
     }
 }
