@@ -8,6 +8,7 @@ import java.nio.channels.FileChannel;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardOpenOption;
+import java.util.function.IntPredicate;
 import org.wintersill.problem.Problem;
 import org.wintersill.season.WinterValues;
 
@@ -26,20 +27,23 @@ public final class WinterStore implements WinterSink, AutoCloseable {
     private final int seasons;
     private final int rows;
     private final int columns;
+    private final IntPredicate wanted;
 
     /**
      * Opens an empty store.
      *
      * @param file where; removed when the store is closed
      * @param winterPlanes planes with a value a winter
+     * @param wanted which of them will be read; the others are not kept
      * @throws org.wintersill.problem.ProblemException when the file cannot be made
      */
-    public WinterStore(Path file, int winterPlanes, int seasons, int rows, int columns) {
+    public WinterStore(Path file, int winterPlanes, IntPredicate wanted, int seasons, int rows, int columns) {
         this.file = file;
         this.winterPlanes = winterPlanes;
         this.seasons = seasons;
         this.rows = rows;
         this.columns = columns;
+        this.wanted = wanted;
         try {
             channel = FileChannel.open(file, StandardOpenOption.CREATE_NEW, StandardOpenOption.READ, StandardOpenOption.WRITE);
         } catch (IOException e) {
@@ -61,7 +65,9 @@ public final class WinterStore implements WinterSink, AutoCloseable {
     @Override
     public void accept(int season, int firstRow, WinterValues values) {
         for (int plane = 0; plane < values.planeCount(); plane++) {
-            write(position(plane, season, firstRow), values.plane(plane));
+            if (wanted.test(plane)) {
+                write(position(plane, season, firstRow), values.plane(plane));
+            }
         }
     }
 

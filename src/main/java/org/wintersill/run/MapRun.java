@@ -4,7 +4,11 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 import java.util.function.BooleanSupplier;
+import java.util.function.IntPredicate;
+import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 import org.wintersill.engine.LocalEngine;
 import org.wintersill.engine.Progress;
 import org.wintersill.engine.WinterStore;
@@ -51,7 +55,7 @@ public final class MapRun {
         try (OutputFolder folder = OutputFolder.open(target, overwrite);
                 Workers workers = new Workers(plan.foldPlan().threads(), cancelled);
                 WinterStore store = new WinterStore(folder.unfinished("winters.tmp"),
-                        WinterValues.planes(cultivars, plan.job().levels()), plan.seasons().size(), plan.target().rows(),
+                        WinterValues.planes(cultivars, plan.job().levels()), wantedPlanes(cultivars), plan.seasons().size(), plan.target().rows(),
                         plan.target().columns())) {
             new LocalEngine(plan.job(), plan.foldPlan()).run(store, workers, progress, notices);
             Map<String, Object> record = RunRecord.begin(plan, workers);
@@ -76,6 +80,16 @@ public final class MapRun {
             folder.publish();
             return new RunReport(target, files, areas);
         }
+    }
+
+    /** Worst nights are only read again for layers with a value a winter. */
+    private IntPredicate wantedPlanes(int cultivars) {
+        if (plan.config().outputs().winters() || plan.config().outputs().netcdf()) {
+            return plane -> true;
+        }
+        Set<Integer> nights = IntStream.range(0, cultivars)
+                .mapToObj(cultivar -> WinterValues.worstNightPlane(cultivar, plan.job().levels())).collect(Collectors.toSet());
+        return plane -> !nights.contains(plane);
     }
 
     private void writeLayers(SummaryPass summaries, int cultivars) {
