@@ -30,6 +30,8 @@ final class Unpacker {
     private final float highest;
     /** Values of all 8- or 16-bit patterns; null for wider types. */
     private final float[] table;
+    /** Whether stored numbers are the values themselves, and every plausible one counts. */
+    private final boolean plain;
     /** Whether a plausible value can still be missing: then each one is looked at. */
     private final boolean wary;
 
@@ -58,6 +60,7 @@ final class Unpacker {
             careful |= converted >= this.lowest && converted <= this.highest;
         }
         this.wary = careful;
+        this.plain = !careful && packing.isIdentity() && factor == 1 && shift == 0;
     }
 
     private static VarHandle handle(Class<?> type, ByteOrder order) {
@@ -132,6 +135,9 @@ final class Unpacker {
     /** The same for byte-sorted numbers, little-endian ones without a detour. */
     private boolean planar(byte[] bytes, int from, int plane, int count, float[] out, int at) {
         if (littleEndian && packing.type() == RawType.FLOAT) {
+            if (plain) {
+                return planarFloats(bytes, from, plane, count, out, at);
+            }
             boolean wild = false;
             int second = from + plane;
             int third = second + plane;
@@ -162,6 +168,27 @@ final class Unpacker {
     }
 
     /** Stores one float; the common case is two comparisons. */
+    /** Byte-sorted floats that need no arithmetic: the usual case of large files. */
+    private boolean planarFloats(byte[] bytes, int from, int plane, int count, float[] out, int at) {
+        int second = from + plane;
+        int third = second + plane;
+        int fourth = third + plane;
+        boolean odd = false;
+        for (int i = 0; i < count; i++) {
+            float value = Float.intBitsToFloat(bytes[from + i] & 0xff | (bytes[second + i] & 0xff) << 8
+                    | (bytes[third + i] & 0xff) << 16 | bytes[fourth + i] << 24);
+            out[at + i] = value;
+            odd |= !(value >= lowest && value <= highest);
+        }
+        boolean wild = false;
+        for (int i = at; odd && i < at + count; i++) {
+            if (!(out[i] >= lowest && out[i] <= highest)) {
+                wild |= single(out[i], out, i);
+            }
+        }
+        return wild;
+    }
+
     private boolean single(float raw, float[] out, int at) {
         float value = convert(raw);
         if (value >= lowest && value <= highest && !wary) {
