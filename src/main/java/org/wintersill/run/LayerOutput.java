@@ -6,6 +6,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.concurrent.ExecutorService;
@@ -114,7 +115,7 @@ final class LayerOutput {
         CfDate end = last().last();
         String month = (end.month() < 10 ? "0" : "") + end.month();
         int day = end.month() == 2 ? Math.min(28, end.day()) : Math.min(30, end.day());
-        return "%04d".formatted(end.year()) + ":" + month + ":" + (day < 10 ? "0" : "") + day + " 00:00:00";
+        return String.format(Locale.ROOT, "%04d", end.year()) + ":" + month + ":" + (day < 10 ? "0" : "") + day + " 00:00:00";
     }
 
     static void write(Path file, String text) {
