@@ -25,7 +25,7 @@ final class RunRecord {
         record.put("program", RunVersion.program());
         record.put("title", plan.config().title());
         record.put("caution", Caution.SHORT);
-        record.put("configuration", plan.config().effective());
+        record.put("configuration", RecordedConfiguration.of(plan.config().effective()));
         record.put("inputs", inputs(plan, workers));
         record.put("grid", plan.target().describe());
         record.put("temperature-grid", plan.source().grid().describe());
