@@ -4,18 +4,21 @@ import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
 import java.util.function.UnaryOperator;
 import java.util.stream.Stream;
+import org.junit.jupiter.api.Assumptions;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.Arguments;
 import org.junit.jupiter.params.provider.MethodSource;
+import org.junit.jupiter.params.provider.ValueSource;
 import org.wintersill.time.CfDate;
 
 /** The way in which a record is stored never shows in the maps. */
@@ -156,6 +159,37 @@ class SameMapLaws {
         RunFolder here = RunFolder.of(folder.resolve("a"), new RecordFile(globe)).map();
         RunFolder there = RunFolder.of(folder.resolve("b"), new RecordFile(globe).rolled(12)).map();
         assertEquals(List.of(), RunFolder.differing(here.outputsButRecord(), there.outputsButRecord()));
+    }
+
+    @Test
+    void aGeotiffWithOneBandADayGivesTheSame() {
+        RunFolder run = new RunFolder(folder);
+        RecordInTiff.write(run.daily("tmin.tif"), RECORD);
+        assertSame(run.map());
+    }
+
+    @Test
+    void aGeotiffMayFollowANetcdf() {
+        RunFolder run = new RunFolder(folder);
+        new RecordFile(RECORD.between(new CfDate(2001, 1, 1), new CfDate(2003, 2, 3))).write(run.daily("tmin.nc"));
+        RecordInTiff.write(run.daily("tmin.tif"), RECORD.between(new CfDate(2003, 2, 4), new CfDate(2004, 12, 31)));
+        assertSame(run.map());
+    }
+
+    /** Chunks and compression of netCDF-4, written by an independent library. */
+    @ParameterizedTest
+    @ValueSource(strings = {"1,5,6", "40,2,4", "1000,5,6", "7,1,1"})
+    void chunksAndDeflateChangeNothing(String chunks) throws Exception {
+        Path python = Path.of("/usr/bin/python3");
+        Assumptions.assumeTrue(Files.isExecutable(python), "no /usr/bin/python3 here");
+        Assumptions.assumeTrue(new ProcessBuilder(python.toString(), "-c", "import netCDF4").start().waitFor() == 0,
+                "python3 has no netCDF4 here");
+        RunFolder run = new RunFolder(folder);
+        new RecordFile(RECORD).write(run.path("classic.nc"));
+        Process rechunk = new ProcessBuilder(python.toString(), Path.of("src/test/python/rechunk_netcdf.py").toString(),
+                run.path("classic.nc").toString(), run.daily("tmin.nc").toString(), chunks).inheritIO().start();
+        assertEquals(0, rechunk.waitFor());
+        assertSame(run.map());
     }
 
     private static void assertSame(RunFolder run) {
