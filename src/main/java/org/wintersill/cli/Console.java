@@ -116,7 +116,7 @@ public final class Console {
             char c = text.charAt(i);
             boolean control = Character.isISOControl(c) && c != '\n' && c != '\t' || c >= '\u202a' && c <= '\u202e'
                     || c >= '\u2066' && c <= '\u2069';
-            clean.append(control ? String.format("\\u%04x", (int) c) : c);
+            clean.append(control ? String.format(java.util.Locale.ROOT, "\\u%04x", (int) c) : c);
         }
         return clean.toString();
     }

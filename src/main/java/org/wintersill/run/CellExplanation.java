@@ -49,9 +49,10 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
      * @param interpolated value between source cells, before the change of height
      * @param lapseRate K/km of the night
      * @param tmin value at the cell's own height
+     * @param margin with the fold's own arithmetic, so that the lowest of a winter's nights is the winter's margin to the bit
      */
     public record Night(String date, float source, float interpolated, double lapseRate, float tmin, double lt10, double lt50,
-                        double lt90, double margin, double damage) {
+                        double lt90, float margin, double damage) {
     }
 
     /** The temperatures of one winter at the cell. */
@@ -189,11 +190,11 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             boolean valid = !Float.isNaN(worst);
             courses.get(c).add(new Winter(season.label(), valid, values.margin(c, 0)[0], values.damage(c)[0],
                     valid ? season.date((int) worst).toString() : null,
-                    nights(season, plan, plan.cultivars().get(c), temperatures)));
+                    nights(season, plan, plan.cultivars().get(c), curves[c], temperatures)));
         }
     }
 
-    private static List<Night> nights(Season season, RunPlan plan, Cultivar cultivar, Temperatures temperatures) {
+    private static List<Night> nights(Season season, RunPlan plan, Cultivar cultivar, NightCurve curve, Temperatures temperatures) {
         LethalTemperatures course = cultivar.model().overSeason(season);
         List<Night> nights = new ArrayList<>();
         for (int n = 0; n < season.days(); n++) {
@@ -203,7 +204,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             float tmin = temperatures.tmin()[n];
             nights.add(new Night(season.date(n).toString(), temperatures.source()[n], temperatures.interpolated()[n],
                     plan.adjustment().lapseRates().ofMonth(season.date(n).month()), tmin, lt10, lt50, lt90,
-                    tmin - lt50, ToleranceCurve.killedFraction(tmin, lt10, lt50, lt90)));
+                    tmin - curve.lethal()[0][n], ToleranceCurve.killedFraction(tmin, lt10, lt50, lt90)));
         }
         return nights;
     }

@@ -63,8 +63,8 @@ public final class MapRun {
                 GeoKeys keys = GeoKeys.of(crs);
                 return new GeoKeyTags(keys.directory(), keys.doubles(), keys.ascii());
             });
-            LayerOutput output = new LayerOutput(folder, format, plan.target(), plan.seasons(),
-                    Digests.ofText(JsonText.of(RunRecord.configuration(plan.config()))), workers.executor());
+            String digest = Digests.ofText(JsonText.of(RecordedConfiguration.of(plan.config().effective())));
+            LayerOutput output = new LayerOutput(folder, format, plan.target(), plan.seasons(), digest, workers.executor());
             SummaryPass summaries = new SummaryPass(plan, store, output, new LayerSelection(plan.config().outputs().layers()),
                     workers, progress);
             writeLayers(summaries, cultivars);

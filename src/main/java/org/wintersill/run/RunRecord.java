@@ -5,7 +5,6 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import org.wintersill.config.RunConfig;
 import org.wintersill.engine.Workers;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.problem.Notices;
@@ -26,7 +25,7 @@ final class RunRecord {
         record.put("program", RunVersion.program());
         record.put("title", plan.config().title());
         record.put("caution", Caution.SHORT);
-        record.put("configuration", configuration(plan.config()));
+        record.put("configuration", RecordedConfiguration.of(plan.config().effective()));
         record.put("inputs", inputs(plan, workers));
         record.put("grid", plan.target().describe());
         record.put("temperature-grid", plan.source().grid().describe());
@@ -38,21 +37,6 @@ final class RunRecord {
         record.put("winters-not-used", dropped);
         record.put("cultivars", plan.cultivars().stream().map(RunRecord::cultivar).toList());
         return record;
-    }
-
-    /**
-     * The configuration without what no value depends on: threads and memory, and the name of the output folder. The same run gives
-     * the same record wherever it is made.
-     */
-    static Map<String, Object> configuration(RunConfig config) {
-        Map<String, Object> configuration = new LinkedHashMap<>(config.effective());
-        configuration.remove("limits");
-        if (configuration.get("outputs") instanceof Map<?, ?> outputs) {
-            Map<Object, Object> kept = new LinkedHashMap<>(outputs);
-            kept.remove("folder");
-            configuration.put("outputs", kept);
-        }
-        return configuration;
     }
 
     private static Map<String, Object> cultivar(Cultivar cultivar) {

@@ -16,17 +16,17 @@ import java.util.zip.Inflater;
  * A second reading of TIFF 6.0, BigTIFF and Technical Note 3, kept apart from the code under test: little-endian, tiled,
  * Deflate, planes apart.
  */
-final class PlainTiff {
+public final class PlainTiff {
     private static final int[] TYPE_BYTES = {0, 1, 1, 2, 4, 8, 1, 1, 2, 4, 8, 4, 8, 4, 0, 0, 8, 8, 8};
 
     /** Tag to its value: long[], double[] or String. */
-    final List<TreeMap<Integer, Object>> directories = new ArrayList<>();
+    public final List<TreeMap<Integer, Object>> directories = new ArrayList<>();
     /** Where each directory begins. */
     final List<Long> starts = new ArrayList<>();
     final boolean big;
     final ByteBuffer bytes;
 
-    PlainTiff(Path file) throws IOException {
+    public PlainTiff(Path file) throws IOException {
         bytes = ByteBuffer.wrap(Files.readAllBytes(file)).order(ByteOrder.LITTLE_ENDIAN);
         if (bytes.getShort(0) != 0x4949) {
             throw new IOException("not little-endian");
@@ -85,20 +85,20 @@ final class PlainTiff {
         return values;
     }
 
-    long[] numbers(int level, int tag) {
+    public long[] numbers(int level, int tag) {
         return (long[]) directories.get(level).get(tag);
     }
 
-    long number(int level, int tag) {
+    public long number(int level, int tag) {
         return numbers(level, tag)[0];
     }
 
-    String text(int level, int tag) {
+    public String text(int level, int tag) {
         return (String) directories.get(level).get(tag);
     }
 
     /** Stored values of a band, {@code [row * columns + column]}, the missing value as it stands in the file. */
-    float[] band(int level, int band) throws DataFormatException {
+    public float[] band(int level, int band) throws DataFormatException {
         int columns = (int) number(level, 256);
         int rows = (int) number(level, 257);
         int side = (int) number(level, 322);
