@@ -84,6 +84,18 @@ class OutputFolderTest {
     }
 
     @Test
+    void aForgedRecordReachesNothingOutside() throws Exception {
+        run.map();
+        Path outside = Files.createDirectories(run.path("elsewhere"));
+        Files.writeString(outside.resolve("a.txt"), "mine");
+        Files.createSymbolicLink(run.path("out/link"), outside);
+        Files.writeString(run.path("out/record.json"), "{\"outputs\": [{\"path\": \"../elsewhere/a.txt\"}, {\"path\": \"link/a.txt\"}, "
+                + "{\"path\": \"" + outside.resolve("a.txt") + "\"}, {\"path\": \"\\u0000\"}, {\"path\": \"..\"}, {\"path\": 3}, 7]}");
+        run.map("--overwrite");
+        assertEquals("mine", Files.readString(outside.resolve("a.txt")));
+    }
+
+    @Test
     void whatAKilledRunLeftBehindIsInNobodysWay() throws Exception {
         run.map();
         Map<String, byte[]> whole = RunFolder.files(run.path("out"));
