@@ -45,8 +45,8 @@ public final class MapRun {
      *
      * @param cancelled whether the user asked to stop
      * @return areas by class, one a cultivar
-     * @throws org.wintersill.problem.ProblemException when an input is damaged or the outputs cannot be written; nothing is
-     *         left under a final name
+     * @throws org.wintersill.problem.ProblemException when an input is damaged or no winter counts anywhere, or the outputs
+     *         cannot be written; nothing is left under a final name
      * @throws org.wintersill.engine.CancelledException when the user asked to stop; likewise
      */
     public RunReport execute(BooleanSupplier cancelled) {
@@ -58,6 +58,7 @@ public final class MapRun {
                         WinterValues.planes(cultivars, plan.job().levels()), wantedPlanes(cultivars), plan.seasons().size(), plan.target().rows(),
                         plan.target().columns())) {
             new LocalEngine(plan.job(), plan.foldPlan()).run(store, workers, progress, notices);
+            CountingWinters.require(plan, store);
             Map<String, Object> record = RunRecord.begin(plan, workers);
             RasterFormat format = new CogFormat(crs -> {
                 GeoKeys keys = GeoKeys.of(crs);

@@ -109,11 +109,12 @@ public final class OutputFolder implements AutoCloseable {
         }
     }
 
-    /** Moves every file to its name, the record last, and forces each to disk. */
+    /** Moves every file to its name, the record last, and forces each to disk; what an earlier run alone had written goes. */
     public void publish() {
         try {
-            Files.deleteIfExists(folder.resolve(RECORD));
             List<String> order = new ArrayList<>(names());
+            ReplacedOutputs.remove(folder, order);
+            Files.deleteIfExists(folder.resolve(RECORD));
             order.add(RECORD);
             for (String name : order) {
                 Path from = hidden.resolve(name);

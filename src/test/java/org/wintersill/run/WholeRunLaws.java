@@ -198,7 +198,8 @@ class WholeRunLaws {
     void everyCalendarHasItsWinters(CfCalendar calendar) {
         int lastDay = calendar == CfCalendar.DAYS_360 ? 30 : 31;
         ColdRecord record = ColdRecord.made(2, 3, calendar, new CfDate(1999, 8, 1), new CfDate(2002, 7, lastDay), false, 11);
-        RunFolder run = map(record);
+        RunFolder run = RunFolder.of(folder, new RecordFile(record)).map("--set", "outputs.netcdf=true", "--set",
+                "outputs.geopackage=true", "--set", "outputs.layers=default");
         RasterFile night = run.raster("oat/winters/worst-night");
         RasterFile minimum = run.raster("shared/winters/minimum");
         RasterFile margin = run.raster("oat/winters/margin");
@@ -218,5 +219,22 @@ class WholeRunLaws {
                 assertTrue(tmin >= minimum.bands()[winter][cell] - 1e-6f && !Float.isNaN(margin.bands()[winter][cell]));
             }
         }
+    }
+
+    @Test
+    void aWinterMayEndOnADayThatOnlyItsCalendarHas() {
+        ColdRecord record = ColdRecord.made(2, 3, CfCalendar.DAYS_360, new CfDate(1999, 8, 1), new CfDate(2002, 7, 30), false, 11);
+        int last = record.day(new CfDate(2001, 2, 30));
+        RunFolder run = RunFolder.of(folder, new RecordFile(record.changed((day, cell, value) -> day == last ? -900 : value)));
+        run.map("--set", "winter={from: 10-30, to: 02-30, complete: 11-01..02-30}", "--set", "outputs.netcdf=true", "--set",
+                "outputs.geopackage=true", "--set", "outputs.layers=default");
+        RasterFile night = run.raster("oat/winters/worst-night");
+        assertEquals(List.of("1999-00", "2000-01", "2001-02"), List.of(night.names()));
+        for (float value : night.bands()[1]) {
+            assertEquals(120, value, "from 10-30 to 02-30 are 121 days of this calendar");
+        }
+        String explained = Program.run("explain", run.path("run.yaml").toString(), "--at", "-9.9,49.9", "--winter", "2000-01", "--json",
+                "--set", "winter={from: 10-30, to: 02-30, complete: 11-01..02-30}").expect(0).out();
+        assertTrue(explained.contains("\"worst-night\" : \"2001-02-30\""), "dates are those of the file's calendar");
     }
 }

@@ -1,5 +1,5 @@
 /**
- * <b>Purpose.</b> JSON and CSV texts, the same bytes on every machine.
+ * <b>Purpose.</b> JSON and CSV texts, the same bytes on every machine; names read back from them.
  *
  * <p><b>May depend on.</b> The JDK, Jackson, Commons CSV.
  *
