@@ -3,7 +3,7 @@
 #   run_bench.sh JAR FOLDER SIZE [REPEATS]
 # FOLDER keeps the grids (made when absent). SIZE: S (200 x 200, 10 years), M (400 x 400, 20 years) or XS (40 x 40, 4 years, to try the script).
 # Contenders alternate, so that a busy machine troubles all alike; medians and ratios go to results/DATE-SIZE.md with machine, JDK, commit and command.
-# Results are compared with the peer's before anything is timed. JAVA_OPTIONS is handed to java.
+# Results are compared with the peer's before anything is timed. JAVA_OPTIONS is handed to java; JOBS names some of: day block classic dem.
 set -euo pipefail
 [ $# -ge 3 ] || { sed -n 2,6p "$0" >&2; exit 2; }
 jar=$(realpath "$1") folder=$2 name=$3 repeats=${4:-5}
@@ -40,6 +40,7 @@ reading() { timed /usr/bin/python3 "$here/read_c_library.py" "$folder/$name-$([ 
 
 jobs=(day block classic)
 [ "$name" = M ] || jobs+=(dem)      # the peer holds every winter of the fine grid in memory
+[ -z "${JOBS:-}" ] || read -r -a jobs <<< "$JOBS"
 for job in "${jobs[@]}"; do
   # The first round warms the file cache and is not counted.
   program "$job" > /dev/null
@@ -54,7 +55,7 @@ for job in "${jobs[@]}"; do
 done
 
 day=$(date -u +%F)
-result=$here/results/$day-$name.md
+result=$here/results/$day-$name${JOBS:+-${JOBS// /-}}.md
 mkdir -p "$here/results"
 commit=$(git -C "$here" rev-parse --short HEAD 2> /dev/null || echo unknown)
 [ -z "$(git -C "$here" status --porcelain -- src/main pom.xml 2> /dev/null)" ] || commit="$commit with changes"
@@ -67,7 +68,7 @@ print("""# Whole runs, grid $name, $day
 - JDK: $(java -version 2>&1 | sed -n '2p' | tr -d '"'), Python $(/usr/bin/python3 -c 'import platform, numpy; print(platform.python_version() + ", numpy " + numpy.__version__)')
 - load before the last line was written: $(cut -d' ' -f1-3 /proc/loadavg)
 - commit: $commit
-- command: \`run_bench.sh JAR FOLDER $name $repeats\`, JAVA_OPTIONS "${JAVA_OPTIONS:-}"
+- command: \`run_bench.sh JAR FOLDER $name $repeats\`, JOBS "${JOBS:-all}", JAVA_OPTIONS "${JAVA_OPTIONS:-}"
 - grid: $rows x $rows cells, $years years, five cultivars; dem: ten times finer
 
 Median (least to greatest) wall seconds of $repeats alternating runs, file cache warm. The program writes all its default layers, the peer seven a cultivar; the last contender only

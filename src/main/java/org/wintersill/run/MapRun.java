@@ -54,12 +54,13 @@ public final class MapRun {
         Path target = plan.config().outputs().folder();
         try (OutputFolder folder = OutputFolder.open(target, overwrite);
                 Workers workers = new Workers(plan.foldPlan().threads(), cancelled);
+                InputDigests digests = new InputDigests(RunRecord.inputFiles(plan));
                 WinterStore store = new WinterStore(folder.unfinished("winters.tmp"),
                         WinterValues.planes(cultivars, plan.job().levels()), wantedPlanes(cultivars), plan.seasons().size(), plan.target().rows(),
                         plan.target().columns())) {
             new LocalEngine(plan.job(), plan.foldPlan()).run(store, workers, progress, notices);
             CountingWinters.require(plan, store);
-            Map<String, Object> record = RunRecord.begin(plan, workers);
+            Map<String, Object> record = RunRecord.begin(plan, digests.await());
             RasterFormat format = new CogFormat(crs -> {
                 GeoKeys keys = GeoKeys.of(crs);
                 return new GeoKeyTags(keys.directory(), keys.doubles(), keys.ascii());

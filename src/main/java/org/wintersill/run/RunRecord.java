@@ -19,14 +19,15 @@ final class RunRecord {
     }
 
     /** What is known before the outputs exist: program, configuration, inputs, winters, cultivars. */
-    static Map<String, Object> begin(RunPlan plan, Workers workers) {
+    static Map<String, Object> begin(RunPlan plan, Map<Path, String> digests) {
         Map<String, Object> record = new LinkedHashMap<>();
         record.put("version", 1);
         record.put("program", RunVersion.program());
+        record.put("java", System.getProperty("java.version"));
         record.put("title", plan.config().title());
         record.put("caution", Caution.SHORT);
         record.put("configuration", RecordedConfiguration.of(plan.config().effective()));
-        record.put("inputs", inputs(plan, workers));
+        record.put("inputs", inputs(plan, digests));
         record.put("grid", plan.target().describe());
         record.put("temperature-grid", plan.source().grid().describe());
         record.put("winter-window", plan.window().from() + " to " + plan.window().to() + ", complete part "
@@ -51,13 +52,11 @@ final class RunRecord {
         return entry;
     }
 
-    private static List<Map<String, Object>> inputs(RunPlan plan, Workers workers) {
+    private static List<Map<String, Object>> inputs(RunPlan plan, Map<Path, String> digests) {
         List<Map<String, Object>> inputs = new ArrayList<>();
         Path base = plan.config().baseFolder().toAbsolutePath().normalize();
-        List<Path> paths = new ArrayList<>();
         for (SourceFile file : plan.source().files()) {
-            paths.add(Path.of(file.path()));
-            Map<String, Object> entry = entry(base, Path.of(file.path()), "minimum temperature");
+            Map<String, Object> entry = entry(base, Path.of(file.path()), "minimum temperature", digests);
             entry.put("format", file.format());
             entry.put("variable", file.variable());
             entry.put("unit", file.unit());
@@ -68,31 +67,34 @@ final class RunRecord {
             inputs.add(entry);
         }
         plan.config().elevation().ifPresent(elevation -> {
-            add(inputs, paths, base, elevation.dem().file(), "terrain model");
-            elevation.sourceHeight().ifPresent(height -> add(inputs, paths, base, height.file(), "source heights"));
+            inputs.add(entry(base, elevation.dem().file(), "terrain model", digests));
+            elevation.sourceHeight().ifPresent(height -> inputs.add(entry(base, height.file(), "source heights", digests)));
         });
-        plan.config().cultivars().files().forEach(file -> add(inputs, paths, base, file, "cultivars"));
-        String[] digests = new String[paths.size()];
-        workers.forEach(paths.size(), (worker, task) -> digests[task] = Digests.ofFile(paths.get(task)));
-        for (int i = 0; i < digests.length; i++) {
-            inputs.get(i).put("bytes", paths.get(i).toFile().length());
-            inputs.get(i).put("sha256", digests[i]);
-        }
+        plan.config().cultivars().files().forEach(file -> inputs.add(entry(base, file, "cultivars", digests)));
         return inputs;
     }
 
-    private static void add(List<Map<String, Object>> inputs, List<Path> paths, Path base, Path file, String role) {
-        paths.add(file);
-        inputs.add(entry(base, file, role));
+    /** All input files of a run. */
+    static List<Path> inputFiles(RunPlan plan) {
+        List<Path> files = new ArrayList<>();
+        plan.source().files().forEach(file -> files.add(Path.of(file.path())));
+        plan.config().elevation().ifPresent(elevation -> {
+            files.add(elevation.dem().file());
+            elevation.sourceHeight().ifPresent(height -> files.add(height.file()));
+        });
+        files.addAll(plan.config().cultivars().files());
+        return files;
     }
 
-    private static Map<String, Object> entry(Path base, Path file, String role) {
+    private static Map<String, Object> entry(Path base, Path file, String role, Map<Path, String> digests) {
         Map<String, Object> entry = new LinkedHashMap<>();
         Path absolute = file.toAbsolutePath().normalize();
         boolean sameRoot = absolute.getRoot() != null && absolute.getRoot().equals(base.getRoot());
         String name = sameRoot && absolute.startsWith(base) ? base.relativize(absolute).toString() : absolute.getFileName().toString();
         entry.put("path", name.replace('\\', '/'));
         entry.put("role", role);
+        entry.put("bytes", file.toFile().length());
+        entry.put("sha256", digests.get(file));
         return entry;
     }
 

@@ -96,7 +96,7 @@ final class SummaryPass {
                 progress.advance((long) count * layers.size());
                 workers.checkCancelled();
             }
-            layers.forEach(layer -> layer.writer().ifPresent(RasterWriter::finish));
+            workers.forEach(layers.size(), (worker, layer) -> layers.get(layer).writer().ifPresent(RasterWriter::finish));
         } finally {
             layers.forEach(layer -> layer.writer().ifPresent(RasterWriter::close));
         }
@@ -235,14 +235,21 @@ final class SummaryPass {
         }
     }
 
-    /** Writes the layers with one band a winter. */
+    /** Writes the layers with one band a winter, several files at a time. */
     void winters() {
-        winterLayer(WinterLayers.MINIMUM, Optional.empty(), WinterValues.minimumPlane());
-        for (int c = 0; c < plan.cultivars().size(); c++) {
-            winterLayer(WinterLayers.MARGIN, Optional.of(c), WinterValues.marginPlane(c, 0, levels));
-            winterLayer(WinterLayers.DAMAGE, Optional.of(c), WinterValues.damagePlane(c, levels));
-            winterLayer(WinterLayers.WORST_NIGHT, Optional.of(c), WinterValues.worstNightPlane(c, levels));
-        }
+        int cultivars = plan.cultivars().size();
+        workers.forEach(1 + 3 * cultivars, (worker, task) -> {
+            if (task == 0) {
+                winterLayer(WinterLayers.MINIMUM, Optional.empty(), WinterValues.minimumPlane());
+                return;
+            }
+            int c = (task - 1) / 3;
+            switch ((task - 1) % 3) {
+                case 0 -> winterLayer(WinterLayers.MARGIN, Optional.of(c), WinterValues.marginPlane(c, 0, levels));
+                case 1 -> winterLayer(WinterLayers.DAMAGE, Optional.of(c), WinterValues.damagePlane(c, levels));
+                default -> winterLayer(WinterLayers.WORST_NIGHT, Optional.of(c), WinterValues.worstNightPlane(c, levels));
+            }
+        });
     }
 
     private void winterLayer(LayerDefinition layer, Optional<Integer> cultivar, int plane) {

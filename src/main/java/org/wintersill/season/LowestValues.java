@@ -45,23 +45,24 @@ final class LowestValues {
         }
     }
 
-    /** lowest = min(lowest, (t - reference[night]) * factor[night]): the standardised margin of one side of the curve. */
-    static void ofScaledDifference(float[][] nights, int count, float[] reference, float[] factor, int firstNight,
-                                   float[] lowest, int cells) {
-        int n = 0;
-        for (; n + 2 <= count; n += 2) {
+    /**
+     * warm = min(warm, (t - reference[night]) * warmFactor[night]), and cold likewise: the standardised margins of both sides of the
+     * curve in one go, so that temperature and difference are fetched once.
+     */
+    static void ofBothSides(float[][] nights, int count, float[] reference, float[] warmFactor, float[] coldFactor, int firstNight,
+                            float[] warm, float[] cold, int cells) {
+        for (int n = 0; n < count; n++) {
             int r = firstNight + n;
-            scaled2(nights[n], nights[n + 1], reference[r], reference[r + 1], factor[r], factor[r + 1], lowest, cells);
-        }
-        for (; n < count; n++) {
-            scaled1(nights[n], reference[firstNight + n], factor[firstNight + n], lowest, cells);
+            bothSides1(nights[n], reference[r], warmFactor[r], coldFactor[r], warm, cold, cells);
         }
     }
 
-    /** Two nights, not four: with four the body grows too large for the compiler to unroll, and stays scalar. */
-    private static void scaled2(float[] a, float[] b, float ra, float rb, float fa, float fb, float[] lowest, int cells) {
+    private static void bothSides1(float[] t, float reference, float warmFactor, float coldFactor, float[] warm, float[] cold,
+                                   int cells) {
         for (int i = 0; i < cells; i++) {
-            lowest[i] = Math.min(lowest[i], Math.min((a[i] - ra) * fa, (b[i] - rb) * fb));
+            float margin = t[i] - reference;
+            warm[i] = Math.min(warm[i], margin * warmFactor);
+            cold[i] = Math.min(cold[i], margin * coldFactor);
         }
     }
 
@@ -84,12 +85,6 @@ final class LowestValues {
     private static void first1(float[] reached, float[] a, float ra, float na, float[] first, int cells) {
         for (int i = 0; i < cells; i++) {
             first[i] = Math.min(first[i], (a[i] - ra - reached[i]) * FAR + na);
-        }
-    }
-
-    private static void scaled1(float[] a, float ra, float fa, float[] lowest, int cells) {
-        for (int i = 0; i < cells; i++) {
-            lowest[i] = Math.min(lowest[i], (a[i] - ra) * fa);
         }
     }
 }

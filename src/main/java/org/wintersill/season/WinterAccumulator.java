@@ -58,8 +58,8 @@ public final class WinterAccumulator {
         for (int level = 1; level < lowestMargin.length; level++) {
             LowestValues.ofDifference(nights, count, curve.lethal()[level], firstNight, lowestMargin[level], cells);
         }
-        LowestValues.ofScaledDifference(nights, count, curve.lethal()[0], curve.warmInverse(), firstNight, warm, cells);
-        LowestValues.ofScaledDifference(nights, count, curve.lethal()[0], curve.coldInverse(), firstNight, cold, cells);
+        LowestValues.ofBothSides(nights, count, curve.lethal()[0], curve.warmInverse(), curve.coldInverse(), firstNight, warm, cold,
+                cells);
     }
 
     /** Where the stretch lowered the margin, finds the first night that reaches it: the same subtraction gives the same float. */
