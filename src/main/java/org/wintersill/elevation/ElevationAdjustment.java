@@ -46,25 +46,24 @@ public final class ElevationAdjustment {
     }
 
     /** The target is another grid, and no heights are known: temperatures are interpolated. */
-    public static ElevationAdjustment interpolation(GridGeometry source, GridGeometry target, CoordinateOperation targetToSource) {
-        return new ElevationAdjustment(new SourcePositions(source, target, targetToSource), null, null, LapseRates.constant(0));
+    public static ElevationAdjustment interpolation(SourcePositions positions) {
+        return new ElevationAdjustment(positions, null, null, LapseRates.constant(0));
     }
 
     /**
      * The full adjustment.
      *
-     * @param source grid of the temperatures
+     * @param positions of the terrain model's cells in the temperatures' grid
      * @param sourceHeights {@code [source cell]}, metres, NaN for none
      * @param dem target grid with its heights
-     * @param demToSource coordinates of the target grid to those of the source grid
      * @param lapseRates K/km by month
      */
-    public static ElevationAdjustment toHeights(GridGeometry source, float[] sourceHeights, ElevationField dem,
-                                                CoordinateOperation demToSource, LapseRates lapseRates) {
-        if (sourceHeights.length != source.cells()) {
-            throw new IllegalArgumentException(sourceHeights.length + " heights for " + source.cells() + " source cells");
+    public static ElevationAdjustment toHeights(SourcePositions positions, float[] sourceHeights, ElevationField dem,
+                                                LapseRates lapseRates) {
+        if (sourceHeights.length != positions.source().cells()) {
+            throw new IllegalArgumentException(sourceHeights.length + " heights for " + positions.source().cells() + " source cells");
         }
-        return new ElevationAdjustment(new SourcePositions(source, dem.grid(), demToSource), sourceHeights, dem.metres(), lapseRates);
+        return new ElevationAdjustment(positions, sourceHeights, dem.metres(), lapseRates);
     }
 
     /**

@@ -1,6 +1,5 @@
 package org.wintersill.elevation;
 
-import org.wintersill.grid.CoordinateOperation;
 import org.wintersill.grid.GridGeometry;
 
 /** The ground heights that the source's temperatures stand for, where only the terrain model is known. */
@@ -13,31 +12,22 @@ public final class SourceHeights {
      * source cell's centre: that belongs to one point, not to the cell's mean temperature.
      *
      * @param dem heights of the target
-     * @param source grid of the temperatures
-     * @param demToSource coordinates of the terrain model to those of the source
+     * @param positions where the terrain model's cells lie in the source grid
      * @return {@code [source cell]}, metres; NaN where fewer than half of the terrain cells in it have a height, or none lies
      *         in it
      */
-    public static float[] blockMeans(ElevationField dem, GridGeometry source, CoordinateOperation demToSource) {
-        int cells = Math.toIntExact(source.cells());
+    public static float[] blockMeans(ElevationField dem, SourcePositions positions) {
+        int cells = Math.toIntExact(positions.source().cells());
         double[] sum = new double[cells];
         int[] valid = new int[cells];
         int[] inside = new int[cells];
         GridGeometry grid = dem.grid();
-        double[] xy = new double[2 * grid.columns()];
         for (int row = 0; row < grid.rows(); row++) {
             for (int column = 0; column < grid.columns(); column++) {
-                xy[2 * column] = grid.centreX(column);
-                xy[2 * column + 1] = grid.centreY(row);
-            }
-            demToSource.transform(xy, grid.columns());
-            for (int column = 0; column < grid.columns(); column++) {
-                int sourceColumn = source.columnAt(xy[2 * column]);
-                int sourceRow = source.rowAt(xy[2 * column + 1]);
-                if (sourceColumn < 0 || sourceRow < 0) {
+                int cell = positions.containing(row, column);
+                if (cell < 0) {
                     continue;
                 }
-                int cell = sourceRow * source.columns() + sourceColumn;
                 inside[cell]++;
                 float metres = dem.metres()[row * grid.columns() + column];
                 if (!Float.isNaN(metres)) {

@@ -1,6 +1,9 @@
 package org.wintersill.elevation;
 
 import java.util.Arrays;
+import java.util.Optional;
+import java.util.stream.IntStream;
+import org.wintersill.grid.Block;
 import org.wintersill.grid.CoordinateOperation;
 import org.wintersill.grid.GridGeometry;
 
@@ -28,11 +31,16 @@ public final class SourcePositions {
     private final int[] columnInside;
     private final int[] rowInside;
 
-    /** @param targetToSource coordinates of the target grid to those of the source grid */
+    /**
+     * Works the positions out; where the two systems differ the transformation is shared between threads, row by row.
+     *
+     * @param targetToSource coordinates of the target grid to those of the source grid; thread-safe
+     */
     public SourcePositions(GridGeometry source, GridGeometry target, CoordinateOperation targetToSource) {
         this.source = source;
         this.target = target;
-        separable = targetToSource.isIdentity();
+        separable = targetToSource.isIdentity() && IntStream.range(0, target.columns())
+                .allMatch(column -> turned(target.centreX(column)) == target.centreX(column));
         int columns = separable ? target.columns() : Math.toIntExact(target.cells());
         int rows = separable ? target.rows() : columns;
         west = new int[columns];
@@ -49,10 +57,67 @@ public final class SourcePositions {
                 setRow(row, target.centreY(row));
             }
         } else {
-            transformCells(targetToSource);
+            IntStream.range(0, target.rows()).parallel().forEach(row -> transformRow(row, targetToSource));
         }
-        westOrFirst = separable ? Arrays.stream(west).map(at -> Math.max(0, at)).toArray() : west;
+        westOrFirst = westOrFirst();
         firstColumn = separable ? firstColumns() : new int[0];
+    }
+
+    /** The same positions in a part of the source that holds all of them. */
+    private SourcePositions(SourcePositions whole, Block part) {
+        source = whole.source.crop(part);
+        target = whole.target;
+        separable = whole.separable;
+        west = moved(whole.west, part.column());
+        columnInside = moved(whole.columnInside, part.column());
+        north = moved(whole.north, part.row());
+        rowInside = moved(whole.rowInside, part.row());
+        eastWeight = whole.eastWeight;
+        southWeight = whole.southWeight;
+        westOrFirst = westOrFirst();
+        firstColumn = separable ? firstColumns() : new int[0];
+    }
+
+    private static int[] moved(int[] positions, int by) {
+        return by == 0 ? positions : Arrays.stream(positions).map(at -> at < 0 ? at : at - by).toArray();
+    }
+
+    private int[] westOrFirst() {
+        return separable ? Arrays.stream(west).map(at -> Math.max(0, at)).toArray() : west;
+    }
+
+    /** The part of the source that the positions need; empty where the target lies beyond the source. */
+    public Optional<Block> window() {
+        int[] columns = needed(west, source.columns());
+        int[] rows = needed(north, source.rows());
+        boolean meets = separable ? columns[1] > 0 && rows[1] > 0
+                : IntStream.range(0, west.length).anyMatch(cell -> west[cell] >= 0 && north[cell] >= 0);
+        return meets ? Optional.of(new Block(columns[0], rows[0], columns[1] - columns[0], rows[1] - rows[0])) : Optional.empty();
+    }
+
+    private static int[] needed(int[] positions, int count) {
+        int first = Integer.MAX_VALUE;
+        int end = 0;
+        for (int at : positions) {
+            if (at >= 0) {
+                first = Math.min(first, at);
+                end = Math.max(end, Math.min(count, at + 2));
+            }
+        }
+        return new int[] {first, end};
+    }
+
+    /** The positions in a part of the source, which must hold all of {@link #window}. */
+    public SourcePositions within(Block part) {
+        return new SourcePositions(this, part);
+    }
+
+    /** A longitude one turn further where only that lies in the source: 182 and -178 are the same place. */
+    private double turned(double x) {
+        if (!source.crs().angular() || source.columnAt(x) >= 0) {
+            return x;
+        }
+        return source.columnAt(x + 360) >= 0 ? x + 360 : source.columnAt(x - 360) >= 0 ? x - 360 : x;
     }
 
     /** First target column, by source column, whose centre is not west of all that the source column can reach. */
@@ -68,19 +133,17 @@ public final class SourcePositions {
         return first;
     }
 
-    private void transformCells(CoordinateOperation targetToSource) {
+    private void transformRow(int row, CoordinateOperation targetToSource) {
         double[] xy = new double[2 * target.columns()];
-        for (int row = 0; row < target.rows(); row++) {
-            for (int column = 0; column < target.columns(); column++) {
-                xy[2 * column] = target.centreX(column);
-                xy[2 * column + 1] = target.centreY(row);
-            }
-            targetToSource.transform(xy, target.columns());
-            for (int column = 0; column < target.columns(); column++) {
-                int cell = row * target.columns() + column;
-                setColumn(cell, xy[2 * column]);
-                setRow(cell, xy[2 * column + 1]);
-            }
+        for (int column = 0; column < target.columns(); column++) {
+            xy[2 * column] = target.centreX(column);
+            xy[2 * column + 1] = target.centreY(row);
+        }
+        targetToSource.transform(xy, target.columns());
+        for (int column = 0; column < target.columns(); column++) {
+            int cell = row * target.columns() + column;
+            setColumn(cell, turned(xy[2 * column]));
+            setRow(cell, xy[2 * column + 1]);
         }
     }
 

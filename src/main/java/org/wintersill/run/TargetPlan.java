@@ -43,19 +43,19 @@ record TargetPlan(Block window, ElevationAdjustment adjustment) {
             return withoutHeights(source, area, operations, notices);
         }
         ElevationConfig config = elevation.get();
-        ElevationField dem = cropped(formats.heights(config.dem(), notices), area);
-        CoordinateOperation toSource = operation(dem.grid(), source, operations);
-        Block window = window(source, dem.grid(), toSource);
-        if (window == null) {
-            throw Problem.input("the terrain model nowhere meets the temperature grid: it covers " + dem.grid().describe()
-                            + "; the temperatures cover " + source.describe(), config.dem().file().toString(),
-                    "Check both reference systems, and whether x and y are swapped").asException();
-        }
-        GridGeometry used = source.crop(window);
-        float[] heights = config.sourceHeight().isPresent()
-                ? sourceHeights(config, source, sourceName, window, formats, notices)
-                : SourceHeights.blockMeans(dem, used, toSource);
-        ElevationAdjustment adjustment = ElevationAdjustment.toHeights(used, heights, dem, toSource, new LapseRates(config.lapseRate()));
+        ElevationField whole = formats.heights(config.dem(), notices);
+        CoordinateOperation toSource = operation(whole.grid(), source, operations);
+        SourcePositions positions = new SourcePositions(source, whole.grid(), toSource);
+        // The area must not change a value inside it, so mean heights are taken before it is cut out.
+        float[] heights = config.sourceHeight().isPresent() ? sourceHeights(config, source, sourceName, formats, notices)
+                : SourceHeights.blockMeans(whole, positions);
+        ElevationField dem = cropped(whole, area);
+        SourcePositions used = dem == whole ? positions : new SourcePositions(source, dem.grid(), toSource);
+        Block window = used.window().orElseThrow(() -> Problem.input("the terrain model nowhere meets the temperature grid: it covers "
+                        + dem.grid().describe() + "; the temperatures cover " + source.describe(), config.dem().file().toString(),
+                "Check both reference systems, and whether x and y are swapped").asException());
+        ElevationAdjustment adjustment = ElevationAdjustment.toHeights(used.within(window), part(heights, source, window), dem,
+                new LapseRates(config.lapseRate()));
         warnOfEqualHeights(adjustment, notices);
         return new TargetPlan(window, adjustment);
     }
@@ -71,40 +71,16 @@ record TargetPlan(Block window, ElevationAdjustment adjustment) {
         notices.add("the temperature grid has a rotated pole, which GeoTIFF cannot hold: layers are written on "
                 + target.describe());
         CoordinateOperation toSource = operations.between(target.crs(), source.crs());
-        Block window = window(source, target, toSource);
-        return new TargetPlan(window == null ? source.whole() : window,
-                ElevationAdjustment.interpolation(window == null ? source : source.crop(window), target, toSource));
+        SourcePositions positions = new SourcePositions(source, target, toSource);
+        Block window = positions.window().orElse(source.whole());
+        return new TargetPlan(window, ElevationAdjustment.interpolation(positions.within(window)));
     }
 
     private static CoordinateOperation operation(GridGeometry target, GridGeometry source, CoordinateOperations operations) {
         return target.crs().sameAs(source.crs()) ? CoordinateOperation.identity() : operations.between(target.crs(), source.crs());
     }
 
-    /** The source rows and columns that interpolation to the target needs; null if the two do not meet. */
-    private static Block window(GridGeometry source, GridGeometry target, CoordinateOperation toSource) {
-        SourcePositions positions = new SourcePositions(source, target, toSource);
-        int west = Integer.MAX_VALUE;
-        int east = -1;
-        int north = Integer.MAX_VALUE;
-        int south = -1;
-        for (int row = 0; row < target.rows(); row++) {
-            for (int column = 0; column < target.columns(); column++) {
-                if (positions.containing(row, column) < 0) {
-                    continue;
-                }
-                west = Math.min(west, positions.west(row, column));
-                east = Math.max(east, positions.west(row, column));
-                north = Math.min(north, positions.north(row, column));
-                south = Math.max(south, positions.north(row, column));
-            }
-        }
-        if (east < 0) {
-            return null;
-        }
-        return new Block(west, north, Math.min(source.columns(), east + 2) - west, Math.min(source.rows(), south + 2) - north);
-    }
-
-    private static float[] sourceHeights(ElevationConfig config, GridGeometry source, String sourceName, Block window,
+    private static float[] sourceHeights(ElevationConfig config, GridGeometry source, String sourceName,
                                          InputFormats formats, Notices notices) {
         ElevationField field = formats.heights(config.sourceHeight().get(), notices);
         if (!field.grid().sameAs(source)) {
@@ -113,12 +89,16 @@ record TargetPlan(Block window, ElevationAdjustment adjustment) {
                     config.sourceHeight().get().file().toString(),
                     "Give the orography file that belongs to the temperatures, or set elevation.source-height: dem-mean").asException();
         }
-        float[] heights = new float[window.cells()];
-        for (int row = 0; row < window.rows(); row++) {
-            System.arraycopy(field.metres(), (window.row() + row) * source.columns() + window.column(), heights,
-                    row * window.columns(), window.columns());
+        return field.metres();
+    }
+
+    /** The values of a block of a grid. */
+    private static float[] part(float[] values, GridGeometry grid, Block block) {
+        float[] part = new float[block.cells()];
+        for (int row = 0; row < block.rows(); row++) {
+            System.arraycopy(values, (block.row() + row) * grid.columns() + block.column(), part, row * block.columns(), block.columns());
         }
-        return heights;
+        return part;
     }
 
     private static ElevationField cropped(ElevationField dem, Optional<AreaConfig> area) {
@@ -126,12 +106,7 @@ record TargetPlan(Block window, ElevationAdjustment adjustment) {
             return dem;
         }
         Block block = block(dem.grid(), area.get());
-        float[] metres = new float[block.cells()];
-        for (int row = 0; row < block.rows(); row++) {
-            System.arraycopy(dem.metres(), (block.row() + row) * dem.grid().columns() + block.column(), metres,
-                    row * block.columns(), block.columns());
-        }
-        return new ElevationField(dem.grid().crop(block), metres, dem.description());
+        return new ElevationField(dem.grid().crop(block), part(dem.metres(), dem.grid(), block), dem.description());
     }
 
     /** The cells whose centres lie in the area. */

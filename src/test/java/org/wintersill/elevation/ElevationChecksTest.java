@@ -41,8 +41,8 @@ class ElevationChecksTest {
         double y = 1.5 - example.get("fy").asDouble();
         GridGeometry target = new GridGeometry(1, 1, x - 0.05, y + 0.05, 0.1, 0.1, CRS);
         ElevationField dem = new ElevationField(target, new float[] {(float) example.get("z_dem").asDouble()}, "");
-        ElevationAdjustment adjustment = ElevationAdjustment.toHeights(source, heights, dem, CoordinateOperation.identity(),
-                LapseRates.constant(example.get("lapse").asDouble()));
+        ElevationAdjustment adjustment = ElevationAdjustment.toHeights(new SourcePositions(source, target, CoordinateOperation.identity()),
+                heights, dem, LapseRates.constant(example.get("lapse").asDouble()));
         float[] out = new float[1];
         new LaneAdjuster(adjustment).adjust(temperatures, 0, example.get("lapse").asDouble(), 0, 1, out);
         assertEquals(example.get("T_out").asDouble(), out[0], 1e-4);
@@ -67,7 +67,8 @@ class ElevationChecksTest {
         GridGeometry fine = new GridGeometry(4, 2, 0, 1, 0.5, 0.5, CRS);
         float nan = Float.NaN;
         float[] heights = {100, 200, nan, nan, 300, nan, nan, 50};
-        float[] means = SourceHeights.blockMeans(new ElevationField(fine, heights, ""), source, CoordinateOperation.identity());
+        float[] means = SourceHeights.blockMeans(new ElevationField(fine, heights, ""),
+                new SourcePositions(source, fine, CoordinateOperation.identity()));
         assertEquals(200, means[0], 1e-4);
         assertTrue(Float.isNaN(means[1]));
     }

@@ -45,8 +45,8 @@ public class LaneAdjusterBenchmark {
         for (int i = 0; i < heights.length; i++) {
             heights[i] = 500 * random.nextFloat();
         }
-        adjuster = new LaneAdjuster(ElevationAdjustment.toHeights(source, sourceHeights, new ElevationField(target, heights, ""),
-                CoordinateOperation.identity(), LapseRates.constant(4.5)));
+        adjuster = new LaneAdjuster(ElevationAdjustment.toHeights(new SourcePositions(source, target, CoordinateOperation.identity()),
+                sourceHeights, new ElevationField(target, heights, ""), LapseRates.constant(4.5)));
     }
 
     @Benchmark

@@ -14,6 +14,7 @@ import org.wintersill.damage.ToleranceCurve;
 import org.wintersill.elevation.ElevationAdjustment;
 import org.wintersill.elevation.ElevationField;
 import org.wintersill.elevation.LapseRates;
+import org.wintersill.elevation.SourcePositions;
 import org.wintersill.grid.CoordinateOperation;
 import org.wintersill.grid.Crs;
 import org.wintersill.grid.GridGeometry;
@@ -149,8 +150,8 @@ class FoldLaws {
         for (int m = 0; m < 12; m++) {
             months[m] = 3 + 0.3 * m;
         }
-        return ElevationAdjustment.toHeights(source, sourceHeights, new ElevationField(target, heights, "random"), operation,
-                new LapseRates(months));
+        return ElevationAdjustment.toHeights(new SourcePositions(source, target, operation), sourceHeights,
+                new ElevationField(target, heights, "random"), new LapseRates(months));
     }
 
     @Property(tries = 40)
