@@ -58,7 +58,7 @@ final class MapCommand implements Callable<Integer>, Manners.Kept {
             if (dryRun) {
                 return session.commands().plan(config, new PlanOptions(json), console);
             }
-            return session.commands().map(config, new MapOptions(overwrite, json, session.arguments()), console);
+            return session.commands().map(config, new MapOptions(overwrite, json), console);
         });
     }
 }

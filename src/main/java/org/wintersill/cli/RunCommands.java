@@ -5,6 +5,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import org.wintersill.config.RunConfig;
 import org.wintersill.engine.CancelledException;
 import org.wintersill.io.crs.GeoToolsCrs;
@@ -13,6 +14,7 @@ import org.wintersill.problem.Notices;
 import org.wintersill.problem.Problems;
 import org.wintersill.run.Caution;
 import org.wintersill.run.CellExplanation;
+import org.wintersill.run.ElevationInspection;
 import org.wintersill.run.ExplanationText;
 import org.wintersill.run.InputFormats;
 import org.wintersill.run.Inspection;
@@ -94,6 +96,12 @@ final class RunCommands implements Commands {
         for (Path file : options.entry().files()) {
             problems.attempt(() -> {
                 Notices notices = new Notices();
+                Optional<ElevationInspection> heights = ElevationInspection.of(formats(), file, options.entry().request(), notices);
+                if (heights.isPresent()) {
+                    documents.add(heights.get().document());
+                    text.append(heights.get().text()).append('\n');
+                    return;
+                }
                 Inspection inspection = Inspection.of(formats().open(file, options.entry().request(), notices), notices);
                 documents.add(inspection.document());
                 text.append(InspectionText.of(inspection)).append('\n');

@@ -18,6 +18,8 @@ import org.wintersill.time.Season;
  * time as fit, whole chunks of days always; bands of rows only where even one chunk's days of the whole grid are too much.
  */
 public final class FoldPlanner {
+    /** Item of the estimate that stays in memory until the last layer is written. */
+    public static final String TARGET = "heights and positions of the target";
     /** Cells that a lane aims at: its running values and one stretch of nights stay in the processor's second-level cache. */
     private static final int LANE_CELLS = 2048;
     private static final long FLOAT = 4;
@@ -87,7 +89,7 @@ public final class FoldPlanner {
         long kept = whole ? threads * laneCells : (long) bandRows * columns;
         long values = FLOAT * WinterValues.planes(job.cultivars(), job.levels());
         MemoryEstimate memory = new MemoryEstimate()
-                .add("heights and positions of the target", positionBytes())
+                .add(TARGET, positionBytes())
                 .add(SLAB, batchDays * sourceCells * FLOAT)
                 .add("missing days of source cells", 5 * sourceCells)
                 .add("running values of the winter", kept * WinterLane.bytesPerCell(job.cultivars(), job.levels()))

@@ -11,11 +11,6 @@ public record Envelope(double west, double south, double east, double north) imp
         }
     }
 
-    /** Whether the two rectangles share an area. */
-    public boolean intersects(Envelope other) {
-        return west < other.east && other.west < east && south < other.north && other.south < north;
-    }
-
     public boolean contains(double x, double y) {
         return x >= west && x <= east && y >= south && y <= north;
     }

@@ -1,6 +1,5 @@
 package org.wintersill.run;
 
-import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -18,24 +17,13 @@ import org.wintersill.problem.Problems;
 record CultivarSelection(CultivarConfig config) {
 
     List<Cultivar> read(Notices notices) {
-        Problems problems = new Problems();
-        Map<String, Cultivar> known = new TreeMap<>();
-        List<Cultivar> all = new ArrayList<>();
-        for (Path file : config.files()) {
-            problems.attempt(() -> {
-                for (Cultivar cultivar : CultivarFile.read(file, notices)) {
-                    if (known.putIfAbsent(cultivar.id().toLowerCase(Locale.ROOT), cultivar) != null) {
-                        problems.add(Problem.usage("the cultivar id " + cultivar.id() + " occurs more than once", file.toString(),
-                                "Give every cultivar an id of its own"));
-                    }
-                    all.add(cultivar);
-                }
-            });
-        }
-        problems.throwIfAny();
+        List<Cultivar> all = CultivarFile.readAll(config.files(), notices);
         if (config.use().isEmpty()) {
             return all;
         }
+        Map<String, Cultivar> known = new TreeMap<>();
+        all.forEach(cultivar -> known.put(cultivar.id(), cultivar));
+        Problems problems = new Problems();
         List<Cultivar> used = new ArrayList<>();
         for (String id : config.use()) {
             Cultivar cultivar = known.get(id.toLowerCase(Locale.ROOT));

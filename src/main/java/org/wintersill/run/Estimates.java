@@ -5,6 +5,7 @@ import org.wintersill.config.LimitConfig;
 import org.wintersill.config.OutputConfig;
 import org.wintersill.engine.FoldJob;
 import org.wintersill.engine.FoldPlan;
+import org.wintersill.engine.FoldPlanner;
 import org.wintersill.engine.WinterStore;
 import org.wintersill.grid.GridGeometry;
 import org.wintersill.season.WinterValues;
@@ -59,7 +60,8 @@ final class Estimates {
                 + nights * job.window().cells() * 4 * plan.bands().size() / READ_RATE / plan.threads()
                 + nights * cells * cultivars / FOLD_RATE / plan.threads()
                 + (summaries + winterLayers) / WRITE_RATE / plan.threads();
-        long memory = Math.max(plan.memory().total(), writerBytes) + residentBytes(job.adjustment().positions().target(), cultivars);
+        long kept = plan.memory().items().getOrDefault(FoldPlanner.TARGET, 0L);
+        long memory = Math.max(plan.memory().total(), kept + writerBytes) + residentBytes(job.adjustment().positions().target(), cultivars);
         return new RunPlan.Estimate(memory, working, summaries + winterLayers, seconds);
     }
 }

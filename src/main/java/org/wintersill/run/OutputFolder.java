@@ -45,7 +45,8 @@ public final class OutputFolder implements AutoCloseable {
         if (Files.exists(folder) && !Files.isDirectory(folder)) {
             throw Problem.output("the output folder is a file", folder.toString(), "Choose another name for outputs.folder").asException();
         }
-        if (overwrite || !Files.isDirectory(folder) || Files.isDirectory(folder.resolve(HIDDEN))) {
+        boolean interrupted = Files.isDirectory(folder.resolve(HIDDEN)) && !Files.exists(folder.resolve(RECORD));
+        if (overwrite || !Files.isDirectory(folder) || interrupted) {
             return;
         }
         try (Stream<Path> entries = Files.list(folder)) {

@@ -70,8 +70,8 @@ public final class PlanText {
             line(text, "cultivar", cultivar.id() + " (" + cultivar.name() + ", " + cultivar.species() + "; " + cultivar.model().id()
                     + ", " + cultivar.status().word() + ")");
         }
-        line(text, "work", plan.foldPlan().threads() + " threads, " + plan.foldPlan().bands().size() + " bands, "
-                + plan.foldPlan().batches().size() + " batches of at most " + plan.foldPlan().batchDays() + " days");
+        line(text, "work", count(plan.foldPlan().threads(), "thread") + ", " + count(plan.foldPlan().bands().size(), "band") + ", "
+                + count(plan.foldPlan().batches().size(), "batch") + " of at most " + count(plan.foldPlan().batchDays(), "day"));
         line(text, "memory", "about " + MemoryEstimate.text(plan.estimate().memoryBytes()));
         line(text, "disk", MemoryEstimate.text(plan.estimate().workingDiskBytes()) + " while it runs, outputs at most "
                 + MemoryEstimate.text(plan.estimate().outputDiskBytes()));
@@ -82,6 +82,10 @@ public final class PlanText {
 
     private static void line(StringBuilder text, String name, String value) {
         text.append(String.format(Locale.ROOT, "%-13s %s%n", name, value).replace(System.lineSeparator(), "\n"));
+    }
+
+    private static String count(int number, String thing) {
+        return number + " " + thing + (number == 1 ? "" : thing.endsWith("ch") ? "es" : "s");
     }
 
     private static String duration(double seconds) {

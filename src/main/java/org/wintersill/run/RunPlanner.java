@@ -1,5 +1,6 @@
 package org.wintersill.run;
 
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
@@ -112,7 +113,7 @@ public final class RunPlanner {
         for (Cultivar cultivar : cultivars) {
             cultivar.model().notCovering(window).ifPresent(reason -> problems.add(Problem.usage(
                     "the curve of cultivar " + cultivar.id() + " does not cover the winter " + window.from() + " to " + window.to()
-                            + ": " + reason, config.cultivars().files().get(0).toString(),
+                            + ": " + reason, String.join(", ", config.cultivars().files().stream().map(Path::toString).toList()),
                     "Add rows for the missing dates, shorten the winter, or say outside: hold in the cultivar")));
         }
         problems.throwIfAny();

@@ -1,5 +1,7 @@
 package org.wintersill.run;
 
+import java.math.BigDecimal;
+import java.math.RoundingMode;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -24,11 +26,16 @@ final class SummaryTables {
             for (LayerStyle.Entry entry : LayerStyles.suitability().entries()) {
                 int code = entry.code();
                 csv.row(cultivar.id(), cultivar.name(), cultivar.species(), cultivar.status().word(), entry.name(),
-                        area.cells()[code], area.areaKm2()[code], area.share(code), area.lowest()[code], area.mean()[code],
-                        area.highest()[code], plan.seasons().size(), Caution.SHORT);
+                        area.cells()[code], decimals(area.areaKm2()[code], 4), decimals(area.share(code), 6), decimals(area.lowest()[code], 1),
+                        decimals(area.mean()[code], 1), decimals(area.highest()[code], 1), plan.seasons().size(), Caution.SHORT);
             }
         }
         return csv.toString();
+    }
+
+    /** A number with so many decimals and no exponent; empty where there is none. */
+    private static String decimals(double value, int places) {
+        return Double.isFinite(value) ? BigDecimal.valueOf(value).setScale(places, RoundingMode.HALF_EVEN).toPlainString() : "";
     }
 
     static String json(RunPlan plan, List<ClassAreas> areas) {

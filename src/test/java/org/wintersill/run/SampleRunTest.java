@@ -205,8 +205,11 @@ class SampleRunTest {
                 shares += row.get("share").asDouble();
                 assertEquals(cells[code] == 0, row.get("elevation-mean").isNull());
                 String line = csv.get(4 * c + code);
-                assertTrue(line.startsWith(CULTIVARS.get(c) + ",") && line.contains("," + row.get("class").asText() + "," + cells[code]
-                        + "," + row.get("area-km2").asText()), line);
+                String[] columns = line.split(",");
+                assertEquals(List.of(CULTIVARS.get(c), row.get("class").asText(), Integer.toString(cells[code])),
+                        List.of(columns[0], columns[4], columns[5]), line);
+                assertEquals(row.get("area-km2").asDouble(), Double.parseDouble(columns[6]), 5.1e-5, line);
+                assertEquals(row.get("share").asDouble(), Double.parseDouble(columns[7]), 5.1e-7, line);
             }
             assertEquals(1, shares, 1e-12);
         }
