@@ -2,7 +2,6 @@ package org.wintersill.cli;
 
 import java.util.concurrent.Callable;
 import org.wintersill.config.RunConfig;
-import org.wintersill.problem.Problem;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Option;

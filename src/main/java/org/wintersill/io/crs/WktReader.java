@@ -5,7 +5,6 @@ import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
 import java.util.stream.Collectors;
-import org.wintersill.grid.Crs;
 
 /**
  * Reads WKT 1 (OGC 01-009 as GDAL, GeoTools and ESRI write it) and WKT 2 (OGC 18-010) into a definition. Of compound

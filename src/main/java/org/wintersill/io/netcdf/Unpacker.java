@@ -32,6 +32,8 @@ final class Unpacker {
     private final float[] table;
     /** Whether stored numbers are the values themselves, and every plausible one counts. */
     private final boolean plain;
+    /** Bits of the largest amount that is plausible on either side of zero; sizes of floats order like their bits. */
+    private final int ordinaryBits;
     /** Whether a plausible value can still be missing: then each one is looked at. */
     private final boolean wary;
 
@@ -60,6 +62,7 @@ final class Unpacker {
             careful |= converted >= this.lowest && converted <= this.highest;
         }
         this.wary = careful;
+        this.ordinaryBits = Float.floatToIntBits(Math.max(0, Math.min(-this.lowest, this.highest)));
         this.plain = !careful && packing.isIdentity() && factor == 1 && shift == 0;
     }
 
@@ -173,17 +176,14 @@ final class Unpacker {
         int second = from + plane;
         int third = second + plane;
         int fourth = third + plane;
-        boolean odd = false;
-        for (int i = 0; i < count; i++) {
-            float value = Float.intBitsToFloat(bytes[from + i] & 0xff | (bytes[second + i] & 0xff) << 8
-                    | (bytes[third + i] & 0xff) << 16 | bytes[fourth + i] << 24);
-            out[at + i] = value;
-            odd |= !(value >= lowest && value <= highest);
-        }
         boolean wild = false;
-        for (int i = at; odd && i < at + count; i++) {
-            if (!(out[i] >= lowest && out[i] <= highest)) {
-                wild |= single(out[i], out, i);
+        for (int i = 0; i < count; i++) {
+            int bits = bytes[from + i] & 0xff | (bytes[second + i] & 0xff) << 8 | (bytes[third + i] & 0xff) << 16
+                    | bytes[fourth + i] << 24;
+            if ((bits & Integer.MAX_VALUE) <= ordinaryBits) {
+                out[at + i] = Float.intBitsToFloat(bits);
+            } else {
+                wild |= single(Float.intBitsToFloat(bits), out, at + i);
             }
         }
         return wild;
