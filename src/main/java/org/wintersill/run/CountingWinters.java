@@ -29,9 +29,10 @@ final class CountingWinters {
         }
         boolean heights = plan.adjustment().hasHeights();
         String file = plan.source().files().isEmpty() ? "the record" : plan.source().files().get(0).path();
+        String terrain = plan.config().elevation().map(elevation -> ", " + elevation.dem().file()).orElse("");
         throw Problem.input("no cell has a winter that counts: from " + plan.seasons().get(0).label() + " to "
                         + plan.seasons().get(plan.seasons().size() - 1).label() + ", temperatures are missing on too many days "
-                        + (heights ? "wherever the terrain model has a height" : "in every cell"), file,
+                        + (heights ? "wherever the terrain model has a height" : "in every cell"), file + terrain,
                 "Look with inspect whether the file holds values, and whether its missing value is right"
                         + (heights ? "; check that the terrain model has heights where there are temperatures" : "")
                         + "; or take another rule for missing-days").asException();
