@@ -5,12 +5,12 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import org.wintersill.config.RunConfig;
 import org.wintersill.engine.CancelledException;
 import org.wintersill.io.crs.GeoToolsCrs;
 import org.wintersill.io.json.JsonText;
 import org.wintersill.problem.Notices;
+import org.wintersill.problem.ProblemException;
 import org.wintersill.problem.Problems;
 import org.wintersill.run.Caution;
 import org.wintersill.run.CellExplanation;
@@ -96,15 +96,16 @@ final class RunCommands implements Commands {
         for (Path file : options.entry().files()) {
             problems.attempt(() -> {
                 Notices notices = new Notices();
-                Optional<ElevationInspection> heights = ElevationInspection.of(formats(), file, options.entry().request(), notices);
-                if (heights.isPresent()) {
-                    documents.add(heights.get().document());
-                    text.append(heights.get().text()).append('\n');
-                    return;
+                try {
+                    Inspection inspection = Inspection.of(formats().open(file, options.entry().request(), notices), notices);
+                    documents.add(inspection.document());
+                    text.append(InspectionText.of(inspection)).append('\n');
+                } catch (ProblemException noTemperatures) {
+                    ElevationInspection heights = ElevationInspection.of(formats(), file, options.entry().request().crs())
+                            .orElseThrow(() -> noTemperatures);
+                    documents.add(heights.document());
+                    text.append(heights.text()).append('\n');
                 }
-                Inspection inspection = Inspection.of(formats().open(file, options.entry().request(), notices), notices);
-                documents.add(inspection.document());
-                text.append(InspectionText.of(inspection)).append('\n');
             });
         }
         if (options.json()) {

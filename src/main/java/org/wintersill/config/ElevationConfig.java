@@ -12,13 +12,6 @@ import java.util.Optional;
  * @param lapseRate K per km for each calendar month, {@code [0]} = January; positive where higher is colder
  */
 public record ElevationConfig(FileEntry dem, Optional<FileEntry> sourceHeight, double[] lapseRate) {
-    /** Default, K per km: project choice between night-time minima (about 3) and the free air (6.5), see science section 7.2. */
-    public static final double DEFAULT_LAPSE_RATE = 4.5;
-    /** K per km; a stronger inversion over a whole month is a mistake (assumed). */
-    public static final double LOWEST_LAPSE_RATE = -8;
-    /** K per km; the dry-adiabatic rate, g / c_p. */
-    public static final double HIGHEST_LAPSE_RATE = 9.8;
-
     public ElevationConfig {
         lapseRate = lapseRate.clone();
         if (lapseRate.length != 12) {

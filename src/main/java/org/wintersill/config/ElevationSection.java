@@ -5,6 +5,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import org.wintersill.elevation.LapseRates;
 import org.wintersill.io.yaml.YamlChecks;
 import org.wintersill.io.yaml.YamlSection;
 import org.wintersill.io.yaml.YamlValue;
@@ -31,7 +32,7 @@ final class ElevationSection {
         Optional<FileEntry> sourceHeight = section.value("source-height").flatMap(value -> sourceHeight(value, section, tree));
         tree.putIfAbsent("source-height", DEM_MEAN);
         Optional<double[]> rates = section.value("lapse-rate").map(value -> lapseRates(value, section.path("lapse-rate")))
-                .orElse(Optional.of(everyMonth(ElevationConfig.DEFAULT_LAPSE_RATE)));
+                .orElse(Optional.of(everyMonth(LapseRates.DEFAULT)));
         rates.ifPresent(values -> tree.put("lapse-rate", tree(values)));
         section.later("cold-pool", "water");
         section.finish();
@@ -49,8 +50,8 @@ final class ElevationSection {
     }
 
     private Optional<double[]> lapseRates(YamlValue value, String key) {
-        double lowest = ElevationConfig.LOWEST_LAPSE_RATE;
-        double highest = ElevationConfig.HIGHEST_LAPSE_RATE;
+        double lowest = LapseRates.LOWEST;
+        double highest = LapseRates.HIGHEST;
         if (value instanceof YamlValue.Mapping) {
             checks.problem(value, key, "a method of lapse rates is not known to this version", "Give one number or twelve, in "
                     + ACCEPTED);

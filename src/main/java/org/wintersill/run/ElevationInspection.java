@@ -11,7 +11,6 @@ import org.wintersill.config.FileEntry;
 import org.wintersill.elevation.ElevationField;
 import org.wintersill.problem.Notices;
 import org.wintersill.problem.ProblemException;
-import org.wintersill.temperature.TemperatureRequest;
 
 /**
  * How a file of ground heights is understood.
@@ -28,19 +27,17 @@ public record ElevationInspection(String path, String description, String grid, 
                                   List<String> notices) {
 
     /**
-     * Looks at a file that holds no temperatures; empty when it holds some, or no heights either, so that the refusal of the
-     * temperature reader is the one to show.
+     * Looks at a file in which no temperatures were found.
+     *
+     * @param crs reference system for a file that carries none
+     * @return empty when it holds no heights either, so that the refusal of the temperature reader is the one to show
      */
-    public static Optional<ElevationInspection> of(InputFormats formats, Path file, TemperatureRequest request, Notices notices) {
+    public static Optional<ElevationInspection> of(InputFormats formats, Path file, Optional<String> crs) {
+        Notices notices = new Notices();
         try {
-            formats.open(file, request, new Notices());
+            return Optional.of(of(file, formats.heights(new FileEntry(file, crs, Optional.empty()), notices), notices));
+        } catch (ProblemException noHeights) {
             return Optional.empty();
-        } catch (ProblemException noTemperatures) {
-            try {
-                return Optional.of(of(file, formats.heights(new FileEntry(file, request.crs(), Optional.empty()), notices), notices));
-            } catch (ProblemException noHeights) {
-                return Optional.empty();
-            }
         }
     }
 

@@ -42,7 +42,7 @@ class ArchitectureTest {
         MAY_USE.put("engine", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "season",
                 "climatology"));
         MAY_USE.put("io", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer"));
-        MAY_USE.put("config", Set.of("problem", "grid", "time", "temperature", "io"));
+        MAY_USE.put("config", Set.of("problem", "grid", "time", "temperature", "elevation", "io"));
         MAY_USE.put("run", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "season",
                 "climatology", "engine", "io", "config"));
         MAY_USE.put("cli", Set.of("config", "run", "engine", "problem", "io", "temperature", "time"));
