@@ -6,6 +6,7 @@ import org.wintersill.damage.ToleranceCurve;
 import org.wintersill.elevation.LaneAdjuster;
 import org.wintersill.grid.Block;
 import org.wintersill.grid.CoordinateOperations;
+import org.wintersill.hardiness.CalendarModel;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.hardiness.LethalTemperatures;
 import org.wintersill.problem.NearestName;
@@ -195,7 +196,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
     }
 
     private static List<Night> nights(Season season, RunPlan plan, Cultivar cultivar, NightCurve curve, Temperatures temperatures) {
-        LethalTemperatures course = cultivar.model().overSeason(season);
+        LethalTemperatures course = ((CalendarModel) cultivar.model()).overSeason(season);
         List<Night> nights = new ArrayList<>();
         for (int n = 0; n < season.days(); n++) {
             double lt10 = course.lt10()[n];

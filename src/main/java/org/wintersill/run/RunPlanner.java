@@ -17,6 +17,7 @@ import org.wintersill.engine.MemoryEstimate;
 import org.wintersill.grid.CoordinateOperations;
 import org.wintersill.grid.Crs;
 import org.wintersill.grid.GridGeometry;
+import org.wintersill.hardiness.CalendarModel;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.problem.Notices;
 import org.wintersill.problem.Problem;
@@ -123,7 +124,7 @@ public final class RunPlanner {
         double[] others = java.util.Arrays.stream(choices.levels()).skip(1).asDoubleStream().toArray();
         List<NightCurve[]> curves = new ArrayList<>();
         for (Season season : seasons) {
-            curves.add(cultivars.stream().map(cultivar -> NightCurve.of(cultivar.model().overSeason(season), others))
+            curves.add(cultivars.stream().map(cultivar -> NightCurve.of(((CalendarModel) cultivar.model()).overSeason(season), others))
                     .toArray(NightCurve[]::new));
         }
         return curves;

@@ -4,7 +4,7 @@ import java.io.Serializable;
 import java.util.List;
 import java.util.Optional;
 import java.util.TreeMap;
-import org.wintersill.hardiness.HardinessModel;
+import org.wintersill.hardiness.CalendarModel;
 import org.wintersill.hardiness.LethalTemperatures;
 import org.wintersill.time.CfCalendar;
 import org.wintersill.time.CfDate;
@@ -30,7 +30,7 @@ import org.wintersill.time.SeasonWindow;
  * @param rows at least two, ascending around the year, no two on one day
  * @param holdOutside whether the first and the last row are kept outside the dates of the curve
  */
-public record DatedHardinessCurve(List<Row> rows, boolean holdOutside) implements HardinessModel {
+public record DatedHardinessCurve(List<Row> rows, boolean holdOutside) implements CalendarModel {
 
     /** Longer than any month, so that month * this + day orders the days of a year. */
     private static final int MONTH_STRIDE = 31;
