@@ -13,9 +13,10 @@ import java.util.Objects;
  * @param source where the numbers come from
  * @param status how far they can be relied on
  * @param model the rule that gives the lethal temperatures
+ * @param variants variation within the cultivar, when it stands for a species or for several provenances
  */
 public record Cultivar(String id, String name, String species, String organ, String source, Status status,
-                       HardinessModel model) implements Serializable {
+                       HardinessModel model, Variants variants) implements Serializable {
 
     /** Longest id, in letters. */
     public static final int LONGEST_ID = 40;
@@ -30,6 +31,7 @@ public record Cultivar(String id, String name, String species, String organ, Str
         Objects.requireNonNull(source);
         Objects.requireNonNull(status);
         Objects.requireNonNull(model);
+        Objects.requireNonNull(variants);
     }
 
     /** Whether a text has the form of an id. */

@@ -11,6 +11,7 @@ import java.util.Set;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.hardiness.HardinessModel;
 import org.wintersill.hardiness.Status;
+import org.wintersill.hardiness.Variants;
 import org.wintersill.io.yaml.YamlChecks;
 import org.wintersill.io.yaml.YamlReader;
 import org.wintersill.io.yaml.YamlSection;
@@ -128,7 +129,7 @@ public final class CultivarFile {
         Optional<HardinessModel> model = entry.required("model", "Write model: dated")
                 .flatMap(value -> checks.word(value, "model", List.of("dated"), LATER_MODELS))
                 .flatMap(word -> new DatedCurveReader(entry, label, notices).read());
-        entry.later("variants");
+        Variants variants = new VariantsReader(entry).read();
         if (model.isPresent() || entry.value("model").isPresent() && isDated(entry)) {
             entry.finish();
         }
@@ -136,7 +137,7 @@ public final class CultivarFile {
             return Optional.empty();
         }
         return Optional.of(new Cultivar(id.orElseThrow(), name, species, organ, source.orElseThrow(), status.orElseThrow(),
-                model.orElseThrow()));
+                model.orElseThrow(), variants));
     }
 
     /** The keys of a model that this version does not have are no mistakes of their own. */

@@ -14,6 +14,8 @@ import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.hardiness.Status;
+import org.wintersill.hardiness.Variants;
+import org.wintersill.hardiness.Variants.Variant;
 import org.wintersill.hardiness.model.DatedHardinessCurve;
 import org.wintersill.problem.Notices;
 import org.wintersill.problem.ProblemException;
@@ -53,6 +55,17 @@ class CultivarFileTest {
     }
 
     @Test
+    void variantsAreASpreadOrAList() throws Exception {
+        String spread = GOOD.replace("organ: primary bud", "variants: {sd: 1.5}");
+        assertEquals(Variants.ofSd(1.5), CultivarFile.read(file("spread.yaml", spread), new Notices()).get(0).variants());
+        String list = GOOD.replace("organ: primary bud", "variants: [{id: north, offset: -2}, {id: south, offset: 1}]");
+        Variants variants = CultivarFile.read(file("list.yaml", list), new Notices()).get(0).variants();
+        assertEquals(List.of(new Variant("north", -2), new Variant("south", 1)), variants.members());
+        assertEquals(1.5, variants.sd(), 1e-12, "mean -0.5, both 1.5 away");
+        assertTrue(CultivarFile.read(file("none.yaml", GOOD), new Notices()).get(0).variants().isNone());
+    }
+
+    @Test
     void aBareListIsReadToo() throws Exception {
         String bare = GOOD.substring(GOOD.indexOf('\n') + 1);
         assertEquals(1, CultivarFile.read(file("bare.yaml", bare), new Notices()).size());
@@ -84,7 +97,13 @@ class CultivarFileTest {
         "spread: 1.2           | spread: 30.5             | 12 | 0.05 to 30",
         "outside: hold         | outside: helt            | 9  | Did you mean hold?",
         "organ: primary bud    | orgn: primary bud        | 5  | Did you mean organ?",
-        "organ: primary bud    | variants: {sd: 1}        | 5  | not known to this version"})
+        "organ: primary bud    | variants: {sd: -1}       | 5  | K from 0 to 30",
+        "organ: primary bud    | variants: {std: 1}       | 5  | Did you mean sd?",
+        "organ: primary bud    | variants: 1.5            | 5  | a spread or a list",
+        "organ: primary bud    | 'variants: [{id: a, offset: 1}]' | 5 | at least 2 variants",
+        "organ: primary bud    | 'variants: [{id: a, offset: 1}, {id: a, offset: 2}]' | 5 | already listed",
+        "organ: primary bud    | 'variants: [{id: A, offset: 1}, {id: b, offset: 31}]' | 5 | cannot be an id",
+        "organ: primary bud    | 'variants: [{id: A, offset: 1}, {id: b, offset: 31}]' | 5 | K from -30 to 30"})
     void everyDoubtIsRefusedWithItsLine(String from, String to, int line, String words) throws Exception {
         Path file = file("bad.yaml", GOOD.replace(from.trim(), to.trim()));
         ProblemException refused = assertThrows(ProblemException.class, () -> CultivarFile.read(file, new Notices()));
