@@ -28,6 +28,8 @@ final class BandFold implements AutoCloseable {
     private final WinterLane[] lanes;
     private final LaneAdjuster[] adjusters;
     private final float[][][] nights;
+    /** Of the nights of a stretch in the winter's window, {@code [worker][night]}. */
+    private final int[][] positions;
     private CompletenessTally tally;
     /** Position in the window of the last night that the tally has seen. */
     private int lastNight;
@@ -46,6 +48,7 @@ final class BandFold implements AutoCloseable {
         lanes = new WinterLane[wholeWinters ? workers.threads() : laneCount];
         adjusters = new LaneAdjuster[workers.threads()];
         nights = new float[workers.threads()][][];
+        positions = new int[workers.threads()][WinterLane.STRETCH];
     }
 
     void accept(Batch batch) {
@@ -113,11 +116,12 @@ final class BandFold implements AutoCloseable {
                 double lapse = job.adjustment().lapseRates().ofMonth(season.date(first + count).month());
                 // A source cell's number counts from the window's first row, the slab from the band's.
                 int offset = (position - batch.first()) * reader.dayCells() - band.sourceRow() * job.window().columns();
+                positions[worker][count] = first + count;
                 adjusters[worker].adjust(slab, offset, lapse, firstRow, rows, nights[worker][count]);
                 position++;
                 count++;
             }
-            lane.accept(curves, nights[worker], count, first);
+            lane.accept(curves, nights[worker], count, positions[worker]);
         }
         if (piece.closes()) {
             sink.accept(piece.season(), firstRow, lane.finish(cell -> counts(firstRow, cell)));

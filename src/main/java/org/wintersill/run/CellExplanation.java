@@ -183,7 +183,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
         for (int n = 0; n < season.days(); n++) {
             float tmin = temperatures.tmin()[n];
             night[0][0] = Float.isNaN(tmin) ? Float.POSITIVE_INFINITY : tmin;
-            lane.accept(curves, night, 1, n);
+            lane.accept(curves, night, 1, new int[] {n});
         }
         WinterValues values = lane.finish(cell -> temperatures.complete());
         for (int c = 0; c < curves.length; c++) {

@@ -6,6 +6,9 @@ package org.wintersill.season;
  * <p>Temperatures of a stretch of nights are {@code nights[n][i]}, {@code i} counting the cells of the lane; missing ones are
  * positive infinity. Running values begin at positive infinity. No NaN goes in.
  *
+ * <p>The nights of a stretch ascend but need not be neighbours: {@code positions[n]} is the position of night {@code n} in the
+ * winter's window, by which references are found.
+ *
  * <p>Four nights are taken at a time so that the running value is loaded and stored once for the four. Each night has an
  * array of its own that begins at the first cell of the lane: the compiler of JDK 17 makes vector code of such loops and of none
  * that add an offset to the index, which is ten times slower.
@@ -17,16 +20,15 @@ final class LowestValues {
     private LowestValues() {
     }
 
-    /** lowest = min(lowest, t - reference[firstNight + n]): the margin to a lethal temperature, K. */
-    static void ofDifference(float[][] nights, int count, float[] reference, int firstNight, float[] lowest, int cells) {
+    /** lowest = min(lowest, t - reference[positions[n]]): the margin to a lethal temperature, K. */
+    static void ofDifference(float[][] nights, int count, float[] reference, int[] positions, float[] lowest, int cells) {
         int n = 0;
         for (; n + 4 <= count; n += 4) {
-            int r = firstNight + n;
-            difference4(nights[n], nights[n + 1], nights[n + 2], nights[n + 3], reference[r], reference[r + 1],
-                    reference[r + 2], reference[r + 3], lowest, cells);
+            difference4(nights[n], nights[n + 1], nights[n + 2], nights[n + 3], reference[positions[n]],
+                    reference[positions[n + 1]], reference[positions[n + 2]], reference[positions[n + 3]], lowest, cells);
         }
         for (; n < count; n++) {
-            difference1(nights[n], reference[firstNight + n], lowest, cells);
+            difference1(nights[n], reference[positions[n]], lowest, cells);
         }
     }
 
@@ -49,10 +51,10 @@ final class LowestValues {
      * warm = min(warm, (t - reference[night]) * warmFactor[night]), and cold likewise: the standardised margins of both sides of the
      * curve in one go, so that temperature and difference are fetched once.
      */
-    static void ofBothSides(float[][] nights, int count, float[] reference, float[] warmFactor, float[] coldFactor, int firstNight,
+    static void ofBothSides(float[][] nights, int count, float[] reference, float[] warmFactor, float[] coldFactor, int[] positions,
                             float[] warm, float[] cold, int cells) {
         for (int n = 0; n < count; n++) {
-            int r = firstNight + n;
+            int r = positions[n];
             bothSides1(nights[n], reference[r], warmFactor[r], coldFactor[r], warm, cold, cells);
         }
     }
@@ -67,18 +69,18 @@ final class LowestValues {
     }
 
     /**
-     * Finds where in a stretch a value was reached: first[i] = the lowest n with nights[n][i] - reference[firstNight + n] equal to
+     * Finds where in a stretch a value was reached: first[i] = the lowest n with nights[n][i] - reference[positions[n]] equal to
      * reached[i], exactly; a huge number where there is none.
      *
      * <p>reached is never above any of the differences, so (difference - reached) is zero on such nights and positive on all
      * others, where multiplying by {@link #FAR} lifts it above every night's number: differences of temperatures are multiples of
      * a float's last digit and never so small that this fails. Written so, it is vector code; with a comparison it would not be.
      */
-    static void firstNightOf(float[] reached, float[][] nights, int count, float[] reference, int firstNight, float[] first,
+    static void firstNightOf(float[] reached, float[][] nights, int count, float[] reference, int[] positions, float[] first,
                              int cells) {
         java.util.Arrays.fill(first, 0, cells, Float.POSITIVE_INFINITY);
         for (int n = 0; n < count; n++) {
-            first1(reached, nights[n], reference[firstNight + n], n, first, cells);
+            first1(reached, nights[n], reference[positions[n]], n, first, cells);
         }
     }
 

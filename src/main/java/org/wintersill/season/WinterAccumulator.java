@@ -42,28 +42,28 @@ public final class WinterAccumulator {
     }
 
     /**
-     * Takes a stretch of consecutive nights.
+     * Takes a stretch of nights, in their order.
      *
      * @param nights {@code [night of the stretch][cell of the lane]}, degrees Celsius, positive infinity for missing
      * @param count number of nights
-     * @param firstNight position in the window of the first
+     * @param positions {@code [night of the stretch]}, position in the window, ascending
      * @param before room for one value a cell, overwritten
      * @param reached room for one value a cell, overwritten
      */
-    public void accept(NightCurve curve, float[][] nights, int count, int firstNight, float[] before, float[] reached) {
+    public void accept(NightCurve curve, float[][] nights, int count, int[] positions, float[] before, float[] reached) {
         float[] margin = lowestMargin[0];
         System.arraycopy(margin, 0, before, 0, cells);
-        LowestValues.ofDifference(nights, count, curve.lethal()[0], firstNight, margin, cells);
-        noteWorstNights(curve.lethal()[0], nights, count, firstNight, before, reached);
+        LowestValues.ofDifference(nights, count, curve.lethal()[0], positions, margin, cells);
+        noteWorstNights(curve.lethal()[0], nights, count, positions, before, reached);
         for (int level = 1; level < lowestMargin.length; level++) {
-            LowestValues.ofDifference(nights, count, curve.lethal()[level], firstNight, lowestMargin[level], cells);
+            LowestValues.ofDifference(nights, count, curve.lethal()[level], positions, lowestMargin[level], cells);
         }
-        LowestValues.ofBothSides(nights, count, curve.lethal()[0], curve.warmInverse(), curve.coldInverse(), firstNight, warm, cold,
+        LowestValues.ofBothSides(nights, count, curve.lethal()[0], curve.warmInverse(), curve.coldInverse(), positions, warm, cold,
                 cells);
     }
 
     /** Where the stretch lowered the margin, finds the first night that reaches it: the same subtraction gives the same float. */
-    private void noteWorstNights(float[] lt50, float[][] nights, int count, int firstNight, float[] before, float[] reached) {
+    private void noteWorstNights(float[] lt50, float[][] nights, int count, int[] positions, float[] before, float[] reached) {
         float[] margin = lowestMargin[0];
         int first = 0;
         while (first < cells && !(margin[first] < before[first])) {
@@ -72,10 +72,10 @@ public final class WinterAccumulator {
         if (first == cells) {
             return;
         }
-        LowestValues.firstNightOf(margin, nights, count, lt50, firstNight, reached, cells);
+        LowestValues.firstNightOf(margin, nights, count, lt50, positions, reached, cells);
         for (int i = first; i < cells; i++) {
             if (margin[i] < before[i]) {
-                worstNight[i] = (short) (firstNight + (int) reached[i]);
+                worstNight[i] = (short) positions[(int) reached[i]];
             }
         }
     }

@@ -12,6 +12,7 @@ public final class WinterLane {
     public static final int STRETCH = 16;
 
     private static final float[] NO_REFERENCE = new float[STRETCH];
+    private static final int[] ANY_POSITION = new int[STRETCH];
 
     private final int cells;
     private final int levels;
@@ -51,17 +52,17 @@ public final class WinterLane {
     }
 
     /**
-     * Takes consecutive nights.
+     * Takes nights in their order.
      *
      * @param curves one a cultivar
      * @param nights {@code [night of the stretch][cell]}, degrees Celsius, positive infinity for missing
      * @param count number of nights, at most {@link #STRETCH}
-     * @param firstNight position in the window of the first
+     * @param positions {@code [night of the stretch]}, position in the window, ascending
      */
-    public void accept(NightCurve[] curves, float[][] nights, int count, int firstNight) {
-        LowestValues.ofDifference(nights, count, NO_REFERENCE, 0, minimum, cells);
+    public void accept(NightCurve[] curves, float[][] nights, int count, int[] positions) {
+        LowestValues.ofDifference(nights, count, NO_REFERENCE, ANY_POSITION, minimum, cells);
         for (int c = 0; c < cultivars.length; c++) {
-            cultivars[c].accept(curves[c], nights, count, firstNight, before, reached);
+            cultivars[c].accept(curves[c], nights, count, positions, before, reached);
         }
     }
 

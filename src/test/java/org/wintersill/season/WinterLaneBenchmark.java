@@ -33,6 +33,7 @@ public class WinterLaneBenchmark {
     private final NightCurve[] curves = new NightCurve[CULTIVARS];
     private final WinterLane lane = new WinterLane(CULTIVARS, 3, CELLS);
     private final float[][] stretch = new float[WinterLane.STRETCH][];
+    private final int[] positions = new int[WinterLane.STRETCH];
 
     public WinterLaneBenchmark() {
         Random random = new Random(7);
@@ -60,7 +61,10 @@ public class WinterLaneBenchmark {
         for (int night = 0; night < NIGHTS; night += WinterLane.STRETCH) {
             int count = Math.min(WinterLane.STRETCH, NIGHTS - night);
             System.arraycopy(nights, night, stretch, 0, count);
-            lane.accept(curves, stretch, count, night);
+            for (int n = 0; n < count; n++) {
+                positions[n] = night + n;
+            }
+            lane.accept(curves, stretch, count, positions);
         }
         return lane;
     }
