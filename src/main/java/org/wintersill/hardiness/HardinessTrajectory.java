@@ -29,4 +29,11 @@ public interface HardinessTrajectory {
      * where the model knows no phases.
      */
     int phaseSwitch(int cell);
+
+    /**
+     * Position of the day of budbreak in a cell; {@code Integer.MAX_VALUE} while it has not come, or where the model knows none.
+     */
+    default int budbreak(int cell) {
+        return Integer.MAX_VALUE;
+    }
 }

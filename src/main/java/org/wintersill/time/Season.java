@@ -12,9 +12,10 @@ import java.io.Serializable;
  * @param days number of days of the window
  * @param completeFrom position in the window (0 = first day) where the part that must be complete begins
  * @param completeTo position in the window of the last day of that part
+ * @param hemisphere half of the globe that it is a winter of
  */
 public record Season(String label, int year, CfCalendar calendar, long firstDay, int days,
-                     int completeFrom, int completeTo) implements Serializable {
+                     int completeFrom, int completeTo, SeasonWindow.Hemisphere hemisphere) implements Serializable {
 
     /** The date of a position in the window; 0 is the first day. */
     public CfDate date(int position) {

@@ -15,7 +15,7 @@ import java.util.List;
  * @param to last day of the window
  * @param completeFrom first day of the part that must be complete (science: the default is 1 November)
  * @param completeTo last day of that part
- * @param hemisphere decides the label only
+ * @param hemisphere decides the label, and the start of models that begin by date
  */
 public record SeasonWindow(MonthDay from, MonthDay to, MonthDay completeFrom, MonthDay completeTo,
                            Hemisphere hemisphere) implements Serializable {
@@ -62,7 +62,8 @@ public record SeasonWindow(MonthDay from, MonthDay to, MonthDay completeFrom, Mo
         long last = calendar.dayNumber(to.in(endYear, calendar));
         String label = hemisphere == Hemisphere.NORTH ? northLabel(endYear) : Integer.toString(endYear);
         return new Season(label, endYear, calendar, first, (int) (last - first + 1),
-                (int) (dayInside(completeFrom, year, calendar) - first), (int) (dayInside(completeTo, year, calendar) - first));
+                (int) (dayInside(completeFrom, year, calendar) - first), (int) (dayInside(completeTo, year, calendar) - first),
+                hemisphere);
     }
 
     private long dayInside(MonthDay monthDay, int firstYear, CfCalendar calendar) {
