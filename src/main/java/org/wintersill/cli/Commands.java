@@ -1,6 +1,9 @@
 package org.wintersill.cli;
 
+import java.nio.file.Path;
+import java.util.List;
 import org.wintersill.config.RunConfig;
+import org.wintersill.config.Setting;
 
 /** The work behind the commands. Each returns an exit code and throws problems as they are. */
 public interface Commands {
@@ -10,6 +13,9 @@ public interface Commands {
 
     /** Everything that {@link #map} would check and decide; writes nothing. */
     int plan(RunConfig config, PlanOptions options, Console console);
+
+    /** The settings of a run on whatever a folder of inputs holds; each file is told of. */
+    List<Setting> settings(Path folder, Console console);
 
     /** How input files are understood. */
     int inspect(InspectOptions options, Console console);

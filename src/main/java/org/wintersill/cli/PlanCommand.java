@@ -11,11 +11,13 @@ import picocli.CommandLine.Option;
 /** {@code plan}: everything that map would check and decide. */
 @Command(name = "plan", header = "Check a run and show what it would do; write nothing.",
         description = {"Shows grids, winters found and dropped, missing days, and what the run will take in memory, disk and time. "
-                + "Ends as map would end if it refused the run."},
+                + "Ends as map would end if it refused the run.", "", "RUN.yaml may also be a folder: its files are opened, and what they are "
+                + "good for - daily minima, terrain model, source heights, cultivars - is told and planned with."},
         footerHeading = "%nExamples:%n",
         footer = {"  wintersill plan sample-grids/run.yaml",
             "  wintersill plan --minimum 'sample-grids/tmin-*.nc' --cultivars sample-grids/cultivars.yaml \\",
-            "      --write run.yaml"})
+            "      --write run.yaml",
+            "  wintersill plan sample-grids --write run.yaml"})
 final class PlanCommand implements Callable<Integer>, Manners.Kept {
     private final Session session;
 
@@ -44,7 +46,7 @@ final class PlanCommand implements Callable<Integer>, Manners.Kept {
     @Override
     public Integer call() {
         return session.call(manners, console -> {
-            RunConfig config = run.config();
+            RunConfig config = run.isFolder() ? run.config(session.commands().settings(run.folder(), console)) : run.config();
             Path target = write == null ? null : RunArguments.path(write);
             if (target != null) {
                 RunFileText.checkNew(target);

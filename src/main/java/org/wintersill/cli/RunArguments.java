@@ -1,5 +1,6 @@
 package org.wintersill.cli;
 
+import java.nio.file.Files;
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -51,8 +52,26 @@ final class RunArguments {
      * @throws ProblemException with all problems
      */
     RunConfig config() {
+        return config(List.of());
+    }
+
+    /** Whether a folder of inputs is named in place of a run file. */
+    boolean isFolder() {
+        return runFile != null && Files.isDirectory(path(runFile));
+    }
+
+    Path folder() {
+        return path(runFile);
+    }
+
+    /**
+     * The same over settings that stand in for a run file.
+     *
+     * @param found what a folder of inputs holds; empty where there is a run file or flags alone
+     */
+    RunConfig config(List<Setting> found) {
         Problems problems = new Problems();
-        List<Setting> settings = new ArrayList<>();
+        List<Setting> settings = new ArrayList<>(found);
         for (String assignment : set) {
             problems.attempt(() -> settings.add(Setting.assignment(assignment)));
         }
@@ -67,7 +86,7 @@ final class RunArguments {
             throw Problem.usage("there is neither a run file nor a flag that names the inputs", "",
                     "Name a run file, or give --minimum and --cultivars; --help shows examples").asException();
         }
-        problems.attempt(() -> config[0] = ConfigReader.read(Optional.ofNullable(runFile).map(RunArguments::path), settings));
+        problems.attempt(() -> config[0] = ConfigReader.read(Optional.ofNullable(found.isEmpty() ? runFile : null).map(RunArguments::path), settings));
         problems.throwIfAny();
         return config[0];
     }

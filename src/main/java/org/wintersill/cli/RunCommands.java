@@ -6,6 +6,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.wintersill.config.RunConfig;
+import org.wintersill.config.Setting;
 import org.wintersill.engine.CancelledException;
 import org.wintersill.io.crs.GeoToolsCrs;
 import org.wintersill.io.json.JsonText;
@@ -16,6 +17,7 @@ import org.wintersill.run.Caution;
 import org.wintersill.run.CellExplanation;
 import org.wintersill.run.ElevationInspection;
 import org.wintersill.run.ExplanationText;
+import org.wintersill.run.FolderContents;
 import org.wintersill.run.InputFormats;
 import org.wintersill.run.Inspection;
 import org.wintersill.run.InspectionText;
@@ -86,6 +88,11 @@ final class RunCommands implements Commands {
         RunPlan plan = plan(config, console);
         console.result(options.json() ? JsonText.of(PlanText.document(plan)) : PlanText.text(plan));
         return ExitCode.DONE;
+    }
+
+    @Override
+    public List<Setting> settings(Path folder, Console console) {
+        return FolderContents.settings(folder, formats(), console.notices());
     }
 
     @Override

@@ -52,7 +52,8 @@ final class Shell {
     private CommandLine commandLine() {
         CommandLine line = new CommandLine(new WintersillCommand());
         line.addSubcommand(new MapCommand(session)).addSubcommand(new PlanCommand(session))
-                .addSubcommand(new InspectCommand(session)).addSubcommand(new ExplainCommand(session));
+                .addSubcommand(new InspectCommand(session)).addSubcommand(new ExplainCommand(session))
+                .addSubcommand(new ManualCommand(session));
         line.setExpandAtFiles(false).setAbbreviatedOptionsAllowed(false).setAbbreviatedSubcommandsAllowed(false)
                 .setInterpolateVariables(false).setColorScheme(CommandLine.Help.defaultColorScheme(Ansi.OFF))
                 .setOut(new PrintWriter(session.out(), true, StandardCharsets.UTF_8))

@@ -12,6 +12,7 @@ import org.wintersill.config.TemperatureEntry;
 import org.wintersill.elevation.ElevationField;
 import org.wintersill.elevation.ElevationFormat;
 import org.wintersill.grid.CrsParser;
+import org.wintersill.grid.GridGeometry;
 import org.wintersill.io.geotiff.read.GeotiffElevationFormat;
 import org.wintersill.io.geotiff.read.GeotiffTemperatureFormat;
 import org.wintersill.io.netcdf.NetcdfElevationFormat;
@@ -71,6 +72,11 @@ public final class InputFormats {
     /** Reads ground heights. */
     public ElevationField heights(FileEntry entry, Notices notices) {
         return elevationFormat(entry.file()).read(entry.file(), entry.crs(), entry.unit(), notices);
+    }
+
+    /** The grid of ground heights, without reading them. */
+    GridGeometry heightGrid(FileEntry entry, Notices notices) {
+        return elevationFormat(entry.file()).grid(entry.file(), entry.crs(), notices);
     }
 
     private ElevationFormat elevationFormat(Path file) {

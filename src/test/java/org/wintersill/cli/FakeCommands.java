@@ -25,6 +25,11 @@ final class FakeCommands implements Commands {
     }
 
     @Override
+    public java.util.List<org.wintersill.config.Setting> settings(java.nio.file.Path folder, Console console) {
+        return java.util.List.of();
+    }
+
+    @Override
     public int inspect(InspectOptions options, Console console) {
         inspectOptions = options;
         return done("inspect", null, console);

@@ -35,6 +35,13 @@ final class RecordInTiff {
                 new GeoToolsCrs().wgs84()), "degC", dates, bands);
     }
 
+    /** A file of one day, without a date inside. */
+    static void oneDay(Path file, float degrees) {
+        float[] values = new float[6];
+        java.util.Arrays.fill(values, degrees);
+        write(file, new GridGeometry(3, 2, -37, 50, 0.5, 0.5, new GeoToolsCrs().wgs84()), "degC", List.of("minimum"), new float[][] {values});
+    }
+
     /** Heights in m. */
     static void heights(Path file, GridGeometry grid, float[] metres) {
         write(file, grid, "m", List.of("height"), new float[][] {metres});
