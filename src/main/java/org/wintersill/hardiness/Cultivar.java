@@ -2,6 +2,7 @@ package org.wintersill.hardiness;
 
 import java.io.Serializable;
 import java.util.Objects;
+import org.wintersill.damage.ToleranceCurve;
 
 /**
  * A cultivar (or provenance, or a species as a whole) and its hardiness.
@@ -13,10 +14,11 @@ import java.util.Objects;
  * @param source where the numbers come from
  * @param status how far they can be relied on
  * @param model the rule that gives the lethal temperatures
+ * @param tolerance form of the curve through LT10, LT50 and LT90 of a night
  * @param variants variation within the cultivar, when it stands for a species or for several provenances
  */
 public record Cultivar(String id, String name, String species, String organ, String source, Status status,
-                       HardinessModel model, Variants variants) implements Serializable {
+                       HardinessModel model, ToleranceCurve tolerance, Variants variants) implements Serializable {
 
     /** Longest id, in letters. */
     public static final int LONGEST_ID = 40;
@@ -31,6 +33,7 @@ public record Cultivar(String id, String name, String species, String organ, Str
         Objects.requireNonNull(source);
         Objects.requireNonNull(status);
         Objects.requireNonNull(model);
+        Objects.requireNonNull(tolerance);
         Objects.requireNonNull(variants);
     }
 

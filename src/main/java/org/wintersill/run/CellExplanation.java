@@ -2,7 +2,6 @@ package org.wintersill.run;
 
 import java.util.ArrayList;
 import java.util.List;
-import org.wintersill.damage.ToleranceCurve;
 import org.wintersill.elevation.LaneAdjuster;
 import org.wintersill.grid.Block;
 import org.wintersill.grid.CoordinateOperations;
@@ -205,7 +204,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             float tmin = temperatures.tmin()[n];
             nights.add(new Night(season.date(n).toString(), temperatures.source()[n], temperatures.interpolated()[n],
                     plan.adjustment().lapseRates().ofMonth(season.date(n).month()), tmin, lt10, lt50, lt90,
-                    tmin - curve.lethal()[0][n], ToleranceCurve.killedFraction(tmin, lt10, lt50, lt90)));
+                    tmin - curve.lethal()[0][n], cultivar.tolerance().killedFraction(tmin, lt10, lt50, lt90)));
         }
         return nights;
     }

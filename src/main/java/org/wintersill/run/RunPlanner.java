@@ -124,7 +124,8 @@ public final class RunPlanner {
         double[] others = java.util.Arrays.stream(choices.levels()).skip(1).asDoubleStream().toArray();
         List<NightCurve[]> curves = new ArrayList<>();
         for (Season season : seasons) {
-            curves.add(cultivars.stream().map(cultivar -> NightCurve.of(((CalendarModel) cultivar.model()).overSeason(season), others))
+            curves.add(cultivars.stream().map(cultivar -> NightCurve.of(((CalendarModel) cultivar.model()).overSeason(season),
+                            cultivar.tolerance(), others))
                     .toArray(NightCurve[]::new));
         }
         return curves;

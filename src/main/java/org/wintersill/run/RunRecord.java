@@ -49,6 +49,7 @@ final class RunRecord {
         entry.put("status", cultivar.status().word());
         entry.put("source", cultivar.source());
         entry.put("model", cultivar.model().id());
+        entry.put("tolerance", cultivar.tolerance().key());
         return entry;
     }
 

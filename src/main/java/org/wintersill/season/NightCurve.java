@@ -7,12 +7,13 @@ import org.wintersill.hardiness.LethalTemperatures;
  * The lethal temperatures of one cultivar for every night of one winter where they depend on the date alone, in the form
  * that the day loop needs: float values, and inverse spreads instead of spreads.
  *
+ * @param tolerance form of the curve through the lethal temperatures
  * @param levels percent of buds of each level; the first is 50
  * @param lethal {@code [level][night]}, degrees Celsius
- * @param warmInverse {@code [night]}, 1 / s_w, per K
- * @param coldInverse {@code [night]}, 1 / s_c, per K
+ * @param warmInverse {@code [night]}, 1 / spread of the warm side, per K
+ * @param coldInverse {@code [night]}, 1 / spread of the cold side, per K
  */
-public record NightCurve(double[] levels, float[][] lethal, float[] warmInverse, float[] coldInverse) {
+public record NightCurve(ToleranceCurve tolerance, double[] levels, float[][] lethal, float[] warmInverse, float[] coldInverse) {
 
     /**
      * Builds the curve.
@@ -20,7 +21,7 @@ public record NightCurve(double[] levels, float[][] lethal, float[] warmInverse,
      * @param course LT10, LT50 and LT90 by night
      * @param otherLevels levels besides 50, in the order of the output
      */
-    public static NightCurve of(LethalTemperatures course, double[] otherLevels) {
+    public static NightCurve of(LethalTemperatures course, ToleranceCurve tolerance, double[] otherLevels) {
         int nights = course.lt50().length;
         double[] levels = new double[otherLevels.length + 1];
         levels[0] = 50;
@@ -33,11 +34,11 @@ public record NightCurve(double[] levels, float[][] lethal, float[] warmInverse,
             double lt50 = course.lt50()[night];
             double lt90 = course.lt90()[night];
             for (int level = 0; level < levels.length; level++) {
-                lethal[level][night] = (float) ToleranceCurve.lethalTemperature(levels[level], lt10, lt50, lt90);
+                lethal[level][night] = (float) tolerance.lethalTemperature(levels[level], lt10, lt50, lt90);
             }
-            warm[night] = (float) (1 / ToleranceCurve.warmSpread(lt10, lt50));
-            cold[night] = (float) (1 / ToleranceCurve.coldSpread(lt50, lt90));
+            warm[night] = (float) (1 / tolerance.warmSpread(lt10, lt50));
+            cold[night] = (float) (1 / tolerance.coldSpread(lt50, lt90));
         }
-        return new NightCurve(levels, lethal, warm, cold);
+        return new NightCurve(tolerance, levels, lethal, warm, cold);
     }
 }

@@ -20,6 +20,7 @@ public final class WinterAccumulator {
     private final float[] warm;
     private final float[] cold;
     private final short[] worstNight;
+    private ToleranceCurve tolerance = ToleranceCurve.SPLIT_LOGISTIC;
 
     /** @param levels number of levels, LT50 being the first */
     public WinterAccumulator(int levels, int cells) {
@@ -51,6 +52,7 @@ public final class WinterAccumulator {
      * @param reached room for one value a cell, overwritten
      */
     public void accept(NightCurve curve, float[][] nights, int count, int[] positions, float[] before, float[] reached) {
+        tolerance = curve.tolerance();
         float[] margin = lowestMargin[0];
         System.arraycopy(margin, 0, before, 0, cells);
         LowestValues.ofDifference(nights, count, curve.lethal()[0], positions, margin, cells);
@@ -92,6 +94,6 @@ public final class WinterAccumulator {
 
     /** Fraction of buds killed by the worst night, 0..1; 0 where no night had a value. */
     public double damage(int cell) {
-        return ToleranceCurve.fractionOfDeficit(-(double) (cold[cell] < 0 ? cold[cell] : warm[cell]));
+        return tolerance.fractionOfDeficit(-(double) (cold[cell] < 0 ? cold[cell] : warm[cell]));
     }
 }

@@ -70,7 +70,8 @@ class FoldLaws {
             for (Season season : seasons) {
                 LethalTemperatures course = course(season.days());
                 courses.add(course);
-                curves.add(new NightCurve[] {NightCurve.of(course, OTHER_LEVELS), NightCurve.of(shifted(course, 4), OTHER_LEVELS)});
+                curves.add(new NightCurve[] {NightCurve.of(course, ToleranceCurve.SPLIT_LOGISTIC, OTHER_LEVELS),
+                    NightCurve.of(shifted(course, 4), ToleranceCurve.SPLIT_PROBIT, OTHER_LEVELS)});
             }
         }
 
@@ -214,7 +215,7 @@ class FoldLaws {
             lowest[0] = Math.min(lowest[0], t - lt.lt50()[night]);
             lowest[1] = Math.min(lowest[1], t - lt.lt10()[night]);
             lowest[2] = Math.min(lowest[2], t - lt.lt90()[night]);
-            damage = Math.max(damage, ToleranceCurve.killedFraction(t, lt.lt10()[night], lt.lt50()[night], lt.lt90()[night]));
+            damage = Math.max(damage, ToleranceCurve.SPLIT_LOGISTIC.killedFraction(t, lt.lt10()[night], lt.lt50()[night], lt.lt90()[night]));
         }
         if (!complete(sample, season, cell)) {
             assertTrue(Float.isNaN(planes[0][cell]) && Float.isNaN(planes[1][cell]), "an incomplete winter has no value");

@@ -12,6 +12,7 @@ import org.openjdk.jmh.annotations.OutputTimeUnit;
 import org.openjdk.jmh.annotations.Scope;
 import org.openjdk.jmh.annotations.State;
 import org.openjdk.jmh.annotations.Warmup;
+import org.wintersill.damage.ToleranceCurve;
 import org.wintersill.hardiness.LethalTemperatures;
 
 /**
@@ -50,7 +51,7 @@ public class WinterLaneBenchmark {
                 lt[0][night] = lt[1][night] + 2;
                 lt[2][night] = lt[1][night] - 2.5;
             }
-            curves[c] = NightCurve.of(new LethalTemperatures(lt[0], lt[1], lt[2]), new double[] {10, 90});
+            curves[c] = NightCurve.of(new LethalTemperatures(lt[0], lt[1], lt[2]), ToleranceCurve.SPLIT_LOGISTIC, new double[] {10, 90});
         }
     }
 

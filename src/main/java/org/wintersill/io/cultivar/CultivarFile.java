@@ -8,6 +8,7 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import org.wintersill.damage.ToleranceCurve;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.hardiness.HardinessModel;
 import org.wintersill.hardiness.Status;
@@ -23,8 +24,8 @@ import org.wintersill.problem.Problems;
 /**
  * Reads a cultivar file: a list of entries, bare or under the key {@code cultivars}.
  *
- * <p>An entry has {@code id}, {@code name}, {@code species}, {@code organ}, {@code model}, {@code source}, {@code status} and the
- * parameters of its model. Id, model, source and status must be there.
+ * <p>An entry has {@code id}, {@code name}, {@code species}, {@code organ}, {@code model}, {@code source}, {@code status}, {@code tolerance}
+ * (the form of the tolerance curve) and the parameters of its model. Id, model, source and status must be there.
  */
 public final class CultivarFile {
     private static final List<String> LATER_MODELS = List.of("response", "thermal-time", "relaxation", "stage");
@@ -126,9 +127,11 @@ public final class CultivarFile {
         Optional<Status> status = entry.required("status", "Say how far the numbers of " + label + " can be relied on: "
                 + String.join(", ", Status.words())).flatMap(value -> checks.word(value, "status", Status.words(), List.of()))
                 .flatMap(Status::named);
+        ToleranceCurve tolerance = entry.word("tolerance", ToleranceCurve.keys(), List.of()).flatMap(ToleranceCurve::named)
+                .orElse(ToleranceCurve.SPLIT_LOGISTIC);
         Optional<HardinessModel> model = entry.required("model", "Write model: dated")
                 .flatMap(value -> checks.word(value, "model", List.of("dated"), LATER_MODELS))
-                .flatMap(word -> new DatedCurveReader(entry, label, notices).read());
+                .flatMap(word -> new DatedCurveReader(entry, label, tolerance, notices).read());
         Variants variants = new VariantsReader(entry).read();
         if (model.isPresent() || entry.value("model").isPresent() && isDated(entry)) {
             entry.finish();
@@ -137,7 +140,7 @@ public final class CultivarFile {
             return Optional.empty();
         }
         return Optional.of(new Cultivar(id.orElseThrow(), name, species, organ, source.orElseThrow(), status.orElseThrow(),
-                model.orElseThrow(), variants));
+                model.orElseThrow(), tolerance, variants));
     }
 
     /** The keys of a model that this version does not have are no mistakes of their own. */

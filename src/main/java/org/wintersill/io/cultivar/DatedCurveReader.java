@@ -3,6 +3,7 @@ package org.wintersill.io.cultivar;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import org.wintersill.damage.ToleranceCurve;
 import org.wintersill.hardiness.HardinessModel;
 import org.wintersill.hardiness.model.DatedHardinessCurve;
 import org.wintersill.hardiness.model.DatedHardinessCurve.Row;
@@ -15,18 +16,19 @@ import org.wintersill.time.MonthDay;
 /**
  * Reads {@code curve} and {@code outside} of a dated cultivar.
  *
- * <p>A row has {@code date}, {@code lt50} and either {@code lt10} and {@code lt90} or {@code spread}, the scale s (K) of the
- * symmetric logistic: LT10 and LT90 = LT50 +- s ln 9. Refused are |LT| above 90, LTs out of order and s below 0.05 on either
+ * <p>A row has {@code date}, {@code lt50} and either {@code lt10} and {@code lt90} or {@code spread}, the scale (K) of the
+ * tolerance curve: LT10 and LT90 = LT50 +- s ln 9 for a logistic, +- 1.2815516 sigma for a probit. A symmetric curve takes LT50
+ * midway between LT10 and LT90. Refused are |LT| above 90, LTs out of order and s below 0.05 on either
  * side (science section 1.3).
  */
 final class DatedCurveReader {
-    private static final double LN_9 = Math.log(9);
     private static final double FARTHEST = 90;
     private static final String LT_ACCEPTED = "degC from -90 to 90";
-    private static final double LEAST_SPREAD = 0.05;
+    private static final double LEAST_SPREAD = ToleranceCurve.NARROWEST_SPREAD;
     private static final double LARGEST_SPREAD = 30;
     /** degC; no organ of a woody perennial in winter dies above it, so such values are probably Fahrenheit (assumed). */
     private static final double IMPLAUSIBLY_WARM = 4;
+    private static final double ROUND_OFF = 1e-9;
     private static final int MONTH_STRIDE = 31;
     private static final int YEAR_STRIDE = 12 * MONTH_STRIDE;
     private static final MonthDay NO_DAY = new MonthDay(2, 30);
@@ -34,13 +36,19 @@ final class DatedCurveReader {
     private final YamlSection entry;
     private final YamlChecks checks;
     private final String label;
+    private final ToleranceCurve tolerance;
     private final Notices notices;
+    private int moved;
 
-    /** @param label name of the cultivar in notices */
-    DatedCurveReader(YamlSection entry, String label, Notices notices) {
+    /**
+     * @param label name of the cultivar in notices
+     * @param tolerance form of the curve, for what a spread means and for LT50 of a symmetric one
+     */
+    DatedCurveReader(YamlSection entry, String label, ToleranceCurve tolerance, Notices notices) {
         this.entry = entry;
         this.checks = entry.checks();
         this.label = label;
+        this.tolerance = tolerance;
         this.notices = notices;
     }
 
@@ -67,6 +75,10 @@ final class DatedCurveReader {
             return Optional.empty();
         }
         tellIfFahrenheit(rows);
+        if (moved > 0) {
+            notices.add("the tolerance curve of cultivar " + label + " is symmetric (" + tolerance.key() + "): in " + moved + " of "
+                    + rows.size() + " rows lt50 is not midway between lt10 and lt90 and is put there");
+        }
         return Optional.of(new DatedHardinessCurve(rows, hold));
     }
 
@@ -92,7 +104,7 @@ final class DatedCurveReader {
                 return Optional.empty();
             }
             Optional<Double> spread = checks.number(spreadGiven.get(), section.path("spread"), LEAST_SPREAD, LARGEST_SPREAD,
-                    "K from 0.05 to 30, the scale s of the logistic curve");
+                    "K from 0.05 to 30, the scale of the tolerance curve");
             return date.flatMap(day -> lt50.flatMap(middle -> spread.flatMap(s -> ofSpread(section, day, middle, s))));
         }
         Optional<Double> lt10 = lt10Given.flatMap(value ->
@@ -102,7 +114,7 @@ final class DatedCurveReader {
         if (lt10Given.isEmpty() || lt90Given.isEmpty()) {
             String missing = lt10Given.isEmpty() ? lt90Given.isEmpty() ? "lt10 and lt90 are" : "lt10 is" : "lt90 is";
             checks.problem(section.place(), "curve", missing + " missing",
-                    "Give lt10 and lt90 in degC, or spread in K (the scale s of the logistic curve)");
+                    "Give lt10 and lt90 in degC, or spread in K (the scale of the tolerance curve)");
             return Optional.empty();
         }
         return date.flatMap(day -> lt10.flatMap(warm -> lt50.flatMap(middle -> lt90.flatMap(cold ->
@@ -120,7 +132,7 @@ final class DatedCurveReader {
     }
 
     private Optional<Row> ofSpread(YamlSection section, MonthDay day, double lt50, double spread) {
-        double half = spread * LN_9;
+        double half = spread * tolerance.spreadsToTenth();
         if (Math.abs(lt50) + half > FARTHEST) {
             section.problem("spread", "lt50 " + lt50 + " with spread " + spread + " puts lt10 or lt90 beyond 90 degC", "");
             return Optional.empty();
@@ -137,12 +149,20 @@ final class DatedCurveReader {
                             : "lt10 must be warmer than lt50, and lt50 warmer than lt90");
             return Optional.empty();
         }
-        if ((row.lt10() - row.lt50()) / LN_9 < LEAST_SPREAD || (row.lt50() - row.lt90()) / LN_9 < LEAST_SPREAD) {
+        if ((row.lt10() - row.lt50()) / ToleranceCurve.LN_9 < LEAST_SPREAD
+                || (row.lt50() - row.lt90()) / ToleranceCurve.LN_9 < LEAST_SPREAD) {
             checks.problem(section.place(), "curve", "the lethal temperatures of " + row.date() + " are too close together: " + found,
                     "They must be at least 0.11 K apart, a spread of 0.05 K");
             return Optional.empty();
         }
-        return Optional.of(row);
+        return Optional.of(tolerance.isSymmetric() ? symmetric(row) : row);
+    }
+
+    /** The row with LT50 midway between LT10 and LT90, which a symmetric curve is made from (science 1.3). */
+    private Row symmetric(Row row) {
+        double middle = (row.lt10() + row.lt90()) / 2;
+        moved += Math.abs(middle - row.lt50()) > ROUND_OFF ? 1 : 0;
+        return new Row(row.date(), row.lt10(), middle, row.lt90());
     }
 
     /** Dates ascend around the year: in the order of the list they pass the new year at most once and end before the first date. */

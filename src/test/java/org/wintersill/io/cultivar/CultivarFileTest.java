@@ -12,6 +12,7 @@ import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
+import org.wintersill.damage.ToleranceCurve;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.hardiness.Status;
 import org.wintersill.hardiness.Variants;
@@ -63,6 +64,28 @@ class CultivarFileTest {
         assertEquals(List.of(new Variant("north", -2), new Variant("south", 1)), variants.members());
         assertEquals(1.5, variants.sd(), 1e-12, "mean -0.5, both 1.5 away");
         assertTrue(CultivarFile.read(file("none.yaml", GOOD), new Notices()).get(0).variants().isNone());
+    }
+
+    @Test
+    void aSymmetricCurveHasLt50MidwayAndSaysSo() throws Exception {
+        Notices notices = new Notices();
+        String probit = GOOD.replace("    outside: hold", "    outside: hold\n    tolerance: probit");
+        Cultivar amber = CultivarFile.read(file("c.yaml", probit), notices).get(0);
+        assertEquals(ToleranceCurve.PROBIT, amber.tolerance());
+        DatedHardinessCurve curve = (DatedHardinessCurve) amber.model();
+        assertEquals(-9.25, curve.rows().get(0).lt50());
+        // science 1.3: LT10 = LT50 + 1.2815516 sigma
+        assertEquals(-24 + 1.2 * 1.2815515655446004, curve.rows().get(1).lt10(), 1e-12);
+        assertTrue(notices.counts().keySet().stream().anyMatch(note -> note.contains("symmetric (probit): in 1 of 2 rows")), notices.counts().toString());
+    }
+
+    @Test
+    void anUnknownToleranceCurveIsRefusedWithTheNearestName() throws Exception {
+        String wrong = GOOD.replace("    outside: hold", "    outside: hold\n    tolerance: split-probt");
+        Path path = file("c.yaml", wrong);
+        ProblemException refused = assertThrows(ProblemException.class, () -> CultivarFile.read(path, new Notices()));
+        assertTrue(refused.problems().get(0).toString().contains("split-probit"), refused.problems().toString());
+        assertTrue(refused.problems().get(0).where().contains(":10"), refused.problems().toString());
     }
 
     @Test
