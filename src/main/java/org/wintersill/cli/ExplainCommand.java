@@ -1,10 +1,12 @@
 package org.wintersill.cli;
 
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.Callable;
 import org.wintersill.config.RunConfig;
+import org.wintersill.io.chart.ChartFile;
 import org.wintersill.problem.Problem;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -16,7 +18,8 @@ import picocli.CommandLine.Option;
                 + "damage of every night, computed by the very code of map."},
         footerHeading = "%nExamples:%n",
         footer = {"  wintersill explain sample-grids/run.yaml --at-lonlat -37.2,50.1 --winter 2010-11",
-            "  wintersill explain sample-grids/run.yaml --at -37.2,50.1 --csv > cell.csv"})
+            "  wintersill explain sample-grids/run.yaml --at -37.2,50.1 --csv > cell.csv",
+            "  wintersill explain sample-grids/run.yaml --at -37.2,50.1 --winter 2009-10 --cultivar slate --chart slate.svg"})
 final class ExplainCommand implements Callable<Integer>, Manners.Kept {
     private final Session session;
 
@@ -40,6 +43,13 @@ final class ExplainCommand implements Callable<Integer>, Manners.Kept {
 
     @Option(names = "--csv", description = "Answer with a table of comma-separated values.")
     private boolean csv;
+
+    @Option(names = "--chart", paramLabel = "FILE", description = "Draw one winter of one cultivar into FILE.svg or FILE.png: the margin "
+            + "of each night, and the temperatures against the band from LT10 to LT90.")
+    private String chart;
+
+    @Option(names = "--overwrite", description = "Replace a chart of that name.")
+    private boolean overwrite;
 
     @Mixin
     private Manners manners;
@@ -70,11 +80,17 @@ final class ExplainCommand implements Callable<Integer>, Manners.Kept {
         if (json && csv) {
             throw Problem.usage("--json and --csv are both given", "", "Keep one of the two").asException();
         }
+        Optional<Path> picture = Optional.ofNullable(chart).map(RunArguments::path);
+        if (picture.isPresent() && winter == null) {
+            throw Problem.usage("a chart shows one winter, and --winter is not given", "--chart", "Add for example --winter 2009-10")
+                    .asException();
+        }
+        picture.ifPresent(file -> ChartFile.check(file, overwrite));
         Place place = at == null ? Place.lonLat(atLonLat) : Place.parse(at, "--at", "X,Y");
         ExplainOptions.Format format = json ? ExplainOptions.Format.JSON
                 : csv ? ExplainOptions.Format.CSV : ExplainOptions.Format.TEXT;
         return new ExplainOptions(place.x(), place.y(), at == null, Optional.ofNullable(winter).map(ExplainCommand::label),
-                cultivars, format);
+                cultivars, format, picture, overwrite);
     }
 
     /** A winter's label; {@code 2021-2022} and {@code 2021-23} are caught here, a winter that is not in the record later. */

@@ -1,5 +1,6 @@
 package org.wintersill.cli;
 
+import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
 
@@ -12,9 +13,11 @@ import java.util.Optional;
  * @param winter label of the only winter to tell of, such as {@code 2021-22}; empty for all
  * @param cultivars ids of the cultivars to tell of; empty for all of the run
  * @param format how
+ * @param chart where to draw the winter of the only cultivar; empty for nowhere
+ * @param overwrite whether a chart of that name may be replaced
  */
 public record ExplainOptions(double x, double y, boolean lonLat, Optional<String> winter, List<String> cultivars,
-                             Format format) {
+                             Format format, Optional<Path> chart, boolean overwrite) {
 
     /** Forms of the answer. */
     public enum Format { TEXT, JSON, CSV }

@@ -8,6 +8,7 @@ import java.util.Map;
 import org.wintersill.config.RunConfig;
 import org.wintersill.config.Setting;
 import org.wintersill.engine.CancelledException;
+import org.wintersill.io.chart.ChartFile;
 import org.wintersill.io.crs.GeoToolsCrs;
 import org.wintersill.io.json.JsonText;
 import org.wintersill.problem.Notices;
@@ -22,6 +23,7 @@ import org.wintersill.run.InputFormats;
 import org.wintersill.run.Inspection;
 import org.wintersill.run.InspectionText;
 import org.wintersill.run.MapRun;
+import org.wintersill.run.MarginChart;
 import org.wintersill.run.OutputFolder;
 import org.wintersill.run.PlanText;
 import org.wintersill.run.RunPlan;
@@ -135,6 +137,10 @@ final class RunCommands implements Commands {
                 : CellExplanation.of(plan, options.x(), options.y(), options.winter().orElse(null));
         if (!options.cultivars().isEmpty()) {
             wanted = wanted.ofCultivars(options.cultivars());
+        }
+        if (options.chart().isPresent()) {
+            ChartFile.write(MarginChart.of(plan, wanted), options.chart().get(), options.overwrite());
+            console.message("The chart is " + options.chart().get());
         }
         console.result(switch (options.format()) {
             case JSON -> ExplanationText.json(wanted);
