@@ -1,5 +1,7 @@
 package org.wintersill.elevation.terrain;
 
+import java.util.Arrays;
+import java.util.Random;
 import java.util.concurrent.TimeUnit;
 import java.util.stream.IntStream;
 import org.openjdk.jmh.annotations.Benchmark;
@@ -10,6 +12,7 @@ import org.openjdk.jmh.annotations.Mode;
 import org.openjdk.jmh.annotations.OutputTimeUnit;
 import org.openjdk.jmh.annotations.Param;
 import org.openjdk.jmh.annotations.Scope;
+import org.openjdk.jmh.annotations.Setup;
 import org.openjdk.jmh.annotations.State;
 import org.openjdk.jmh.annotations.Warmup;
 
@@ -31,16 +34,18 @@ public class TerrainBenchmark {
     private Relief relief;
     private final Window window = new Window(Window.Shape.DISC, 1000);
 
-    @org.openjdk.jmh.annotations.Setup
+    @Setup
     public void make() {
-        java.util.Random random = new java.util.Random(7);
+        Random random = new Random(7);
         float[] metres = new float[side * side];
         for (int i = 0; i < metres.length; i++) {
             double x = i % side;
             double y = i / side;
             metres[i] = (float) (900 + 400 * Math.sin(x / 90) * Math.cos(y / 120) + 80 * Math.sin(x / 17 + y / 23) + random.nextDouble());
         }
-        relief = TerrainChecksTest.flatEarth(side, side, metres, 30);
+        double[] sizes = new double[side];
+        Arrays.fill(sizes, 30);
+        relief = new Relief(side, side, metres, sizes, sizes);
     }
 
     @Benchmark
