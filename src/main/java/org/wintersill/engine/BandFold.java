@@ -1,5 +1,6 @@
 package org.wintersill.engine;
 
+import java.util.BitSet;
 import org.wintersill.elevation.LaneAdjuster;
 import org.wintersill.engine.FoldPlan.Band;
 import org.wintersill.engine.FoldPlan.Batch;
@@ -7,6 +8,7 @@ import org.wintersill.engine.FoldPlan.Piece;
 import org.wintersill.season.CompletenessTally;
 import org.wintersill.season.NightCurve;
 import org.wintersill.season.WinterLane;
+import org.wintersill.season.WinterValues;
 import org.wintersill.time.DayAxis;
 import org.wintersill.time.Season;
 
@@ -30,17 +32,20 @@ final class BandFold implements AutoCloseable {
     private final float[][][] nights;
     /** Of the nights of a stretch in the winter's window, {@code [worker][night]}. */
     private final int[][] positions;
+    /** Null where no cultivar has a state model. */
+    private final StateFold states;
     private CompletenessTally tally;
     /** Position in the window of the last night that the tally has seen. */
     private int lastNight;
 
-    BandFold(FoldJob job, FoldPlan plan, Band band, Workers workers, WinterSink sink, Progress progress) {
+    /** @param countedRows source rows that other bands have looked at */
+    BandFold(FoldJob job, FoldPlan plan, Band band, Workers workers, WinterSink sink, Progress progress, BitSet countedRows) {
         this.job = job;
         this.band = band;
         this.workers = workers;
         this.sink = sink;
         this.progress = progress;
-        reader = new SlabReader(job, band, workers);
+        reader = new SlabReader(job.source(), job.window(), band, workers);
         slab = new float[Math.multiplyExact(plan.batchDays(), reader.dayCells())];
         wholeWinters = plan.wholeWinters();
         laneRows = plan.laneRows();
@@ -49,10 +54,14 @@ final class BandFold implements AutoCloseable {
         adjusters = new LaneAdjuster[workers.threads()];
         nights = new float[workers.threads()][][];
         positions = new int[workers.threads()][WinterLane.STRETCH];
+        states = job.states().isNone() ? null : new StateFold(job, plan, band, workers, lanes.length, countedRows);
     }
 
     void accept(Batch batch) {
         reader.read(batch, slab);
+        if (states != null) {
+            states.read(batch, slab);
+        }
         for (Piece piece : batch.pieces()) {
             if (piece.opens()) {
                 tally = new CompletenessTally(job.seasons().get(piece.season()), job.policy(), Math.max(1, reader.dayCells()));
@@ -107,7 +116,8 @@ final class BandFold implements AutoCloseable {
         Season season = job.seasons().get(piece.season());
         NightCurve[] curves = job.curves().get(piece.season());
         DayAxis axis = job.source().days();
-        int position = piece.first();
+        // Days before the window are for state models only.
+        int position = Math.max(piece.first(), axis.firstIndexFrom(season.firstDay()));
         int end = piece.first() + piece.count();
         while (position < end) {
             int first = (int) (axis.day(position) - season.firstDay());
@@ -123,9 +133,20 @@ final class BandFold implements AutoCloseable {
             }
             lane.accept(curves, nights[worker], count, positions[worker]);
         }
-        if (piece.closes()) {
-            sink.accept(piece.season(), firstRow, lane.finish(cell -> counts(firstRow, cell)));
+        if (states != null) {
+            states.fold(batch, piece, worker, slot(worker, laneNumber), firstRow, rows, slab);
         }
+        if (piece.closes()) {
+            WinterValues values = lane.finish(cell -> counts(firstRow, cell));
+            if (states != null) {
+                states.finish(slot(worker, laneNumber), cell -> counts(firstRow, cell), values);
+            }
+            sink.accept(piece.season(), firstRow, values);
+        }
+    }
+
+    private int slot(int worker, int laneNumber) {
+        return wholeWinters ? worker : laneNumber;
     }
 
     private WinterLane lane(int worker, int laneNumber, int rows) {
@@ -134,7 +155,7 @@ final class BandFold implements AutoCloseable {
             adjusters[worker] = new LaneAdjuster(job.adjustment());
             nights[worker] = new float[WinterLane.STRETCH][laneRows * columns];
         }
-        int slot = wholeWinters ? worker : laneNumber;
+        int slot = slot(worker, laneNumber);
         int cells = rows * columns;
         if (lanes[slot] == null || lanes[slot].cells() != cells) {
             lanes[slot] = new WinterLane(job.cultivars(), job.levels(), cells);
@@ -150,11 +171,19 @@ final class BandFold implements AutoCloseable {
     }
 
     long valuesSetAside() {
-        return reader.valuesSetAside();
+        return reader.valuesSetAside() + (states == null ? 0 : states.valuesSetAside());
+    }
+
+    /** Values of source cells with a maximum below the minimum of its day. */
+    long swapped() {
+        return states == null ? 0 : states.swapped();
     }
 
     @Override
     public void close() {
         reader.close();
+        if (states != null) {
+            states.close();
+        }
     }
 }

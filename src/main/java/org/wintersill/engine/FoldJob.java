@@ -16,15 +16,22 @@ import org.wintersill.time.Season;
  * @param adjustment from the window to the target grid
  * @param seasons winters in order
  * @param policy when a winter counts
- * @param curves {@code [season][cultivar]}
+ * @param curves {@code [season][cultivar]}; null for a cultivar with a state model
  * @param levels number of levels of damage that margins are kept for; the first is LT50
+ * @param states cultivars with state models, and what they need beside the minima
  */
 public record FoldJob(DailyTemperatureSource source, Block window, ElevationAdjustment adjustment, List<Season> seasons,
-                      MissingDayPolicy policy, List<NightCurve[]> curves, int levels) {
+                      MissingDayPolicy policy, List<NightCurve[]> curves, int levels, StateForcing states) {
 
     public FoldJob {
         seasons = List.copyOf(seasons);
         curves = List.copyOf(curves);
+    }
+
+    /** A job whose curves all depend on the date alone. */
+    public FoldJob(DailyTemperatureSource source, Block window, ElevationAdjustment adjustment, List<Season> seasons,
+                   MissingDayPolicy policy, List<NightCurve[]> curves, int levels) {
+        this(source, window, adjustment, seasons, policy, curves, levels, StateForcing.none());
     }
 
     public int cultivars() {

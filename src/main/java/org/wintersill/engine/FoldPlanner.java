@@ -7,6 +7,7 @@ import org.wintersill.engine.FoldPlan.Band;
 import org.wintersill.engine.FoldPlan.Batch;
 import org.wintersill.engine.FoldPlan.Piece;
 import org.wintersill.problem.Problem;
+import org.wintersill.season.StateLane;
 import org.wintersill.season.WinterLane;
 import org.wintersill.season.WinterValues;
 import org.wintersill.temperature.StorageLayout;
@@ -94,6 +95,12 @@ public final class FoldPlanner {
                 .add("missing days of source cells", 5 * sourceCells)
                 .add("running values of the winter", kept * WinterLane.bytesPerCell(job.cultivars(), job.levels()))
                 .add("room of the workers", threads * laneCells * (WinterLane.STRETCH * FLOAT + 2 * values));
+        if (job.states().hasSecond()) {
+            memory.add("days of maxima or means in memory", batchDays * sourceCells * FLOAT);
+        }
+        if (!job.states().isNone()) {
+            memory.add("states of the cultivars", kept * StateLane.bytesPerCell(job.states().cultivars()));
+        }
         return new FoldPlan(bands, batches, laneRows, threads, whole, memory);
     }
 
@@ -123,7 +130,7 @@ public final class FoldPlanner {
     }
 
     private int longestSeason() {
-        return job.seasons().stream().mapToInt(Season::days).max().orElse(1);
+        return job.seasons().stream().mapToInt(season -> season.days() - job.states().firstDay(season)).max().orElse(1);
     }
 
     /**
@@ -182,13 +189,13 @@ public final class FoldPlanner {
         }
     }
 
-    /** Every winter as one piece, in the order of time. */
+    /** Every winter as one piece, in the order of time, with the days before its window that a state model asks for. */
     private List<Piece> wholePieces() {
         DayAxis axis = job.source().days();
         List<Piece> pieces = new ArrayList<>();
         for (int s = 0; s < job.seasons().size(); s++) {
             Season season = job.seasons().get(s);
-            int first = axis.firstIndexFrom(season.firstDay());
+            int first = axis.firstIndexFrom(season.firstDay() + job.states().firstDay(season));
             int end = axis.firstIndexFrom(season.firstDay() + season.days());
             pieces.add(new Piece(s, first, end - first, true, true));
         }

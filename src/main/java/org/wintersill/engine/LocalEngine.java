@@ -1,5 +1,6 @@
 package org.wintersill.engine;
 
+import java.util.BitSet;
 import org.wintersill.engine.FoldPlan.Band;
 import org.wintersill.engine.FoldPlan.Batch;
 import org.wintersill.problem.Notices;
@@ -30,14 +31,18 @@ public final class LocalEngine {
     public void run(WinterSink sink, Workers workers, Progress progress, Notices notices) {
         long nights = plan.batches().stream().mapToLong(Batch::count).sum();
         progress.begin("Winters", nights * job.targetRows());
+        BitSet countedRows = new BitSet();
         for (Band band : plan.bands()) {
-            try (BandFold fold = new BandFold(job, plan, band, workers, sink, progress)) {
+            try (BandFold fold = new BandFold(job, plan, band, workers, sink, progress, countedRows)) {
                 for (Batch batch : plan.batches()) {
                     fold.accept(batch);
                 }
                 long setAside = fold.valuesSetAside();
                 if (setAside > 0) {
                     notices.add("values that no air temperature has were set aside as missing", setAside);
+                }
+                if (fold.swapped() > 0) {
+                    notices.add("daily maxima lie below the minimum of their day; the mean is taken from them as they are", fold.swapped());
                 }
             }
         }

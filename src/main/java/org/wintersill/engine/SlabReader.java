@@ -6,6 +6,7 @@ import org.wintersill.engine.FoldPlan.Band;
 import org.wintersill.engine.FoldPlan.Batch;
 import org.wintersill.grid.Block;
 import org.wintersill.temperature.DailyTemperatureReader;
+import org.wintersill.temperature.DailyTemperatureSource;
 import org.wintersill.temperature.StorageLayout;
 
 /**
@@ -13,21 +14,27 @@ import org.wintersill.temperature.StorageLayout;
  * worker has a reader of its own, opened at its first task and closed with this object.
  */
 final class SlabReader implements AutoCloseable {
-    private final FoldJob job;
+    private final DailyTemperatureSource source;
+    private final Block window;
     private final Band band;
     private final Workers workers;
     private final DailyTemperatureReader[] readers;
     private final List<int[]> rowGroups = new ArrayList<>();
 
-    SlabReader(FoldJob job, Band band, Workers workers) {
-        this.job = job;
+    /**
+     * @param source record to decode
+     * @param window part of its grid that the target needs
+     */
+    SlabReader(DailyTemperatureSource source, Block window, Band band, Workers workers) {
+        this.source = source;
+        this.window = window;
         this.band = band;
         this.workers = workers;
         readers = new DailyTemperatureReader[workers.threads()];
-        StorageLayout layout = job.source().layout();
+        StorageLayout layout = source.layout();
         int row = band.sourceRow();
         while (row < band.sourceEnd()) {
-            int into = Math.floorMod(job.window().row() + row - layout.rowOffset(), layout.rows());
+            int into = Math.floorMod(window.row() + row - layout.rowOffset(), layout.rows());
             int end = Math.min(band.sourceEnd(), row + layout.rows() - into);
             rowGroups.add(new int[] {row, end});
             row = end;
@@ -36,7 +43,7 @@ final class SlabReader implements AutoCloseable {
 
     /** Cells of a day in the slab. */
     int dayCells() {
-        return (band.sourceEnd() - band.sourceRow()) * job.window().columns();
+        return (band.sourceEnd() - band.sourceRow()) * window.columns();
     }
 
     /** Fills {@code slab[day of the batch * dayCells + cell]}, degrees Celsius, NaN for missing. */
@@ -45,11 +52,11 @@ final class SlabReader implements AutoCloseable {
             return;
         }
         List<int[]> dayGroups = dayGroups(batch);
-        int columns = job.window().columns();
+        int columns = window.columns();
         workers.forEach(dayGroups.size() * rowGroups.size(), (worker, task) -> {
             int[] days = dayGroups.get(task / rowGroups.size());
             int[] rows = rowGroups.get(task % rowGroups.size());
-            Block block = new Block(job.window().column(), job.window().row() + rows[0], columns, rows[1] - rows[0]);
+            Block block = new Block(window.column(), window.row() + rows[0], columns, rows[1] - rows[0]);
             int offset = (days[0] - batch.first()) * dayCells() + (rows[0] - band.sourceRow()) * columns;
             reader(worker).read(days[0], days[1] - days[0], block, slab, offset, dayCells());
         });
@@ -61,9 +68,9 @@ final class SlabReader implements AutoCloseable {
         int position = batch.first();
         int stop = batch.first() + batch.count();
         while (position < stop) {
-            int start = job.source().chunkStart(position);
+            int start = source.chunkStart(position);
             int end = position + 1;
-            while (end < stop && job.source().chunkStart(end) == start) {
+            while (end < stop && source.chunkStart(end) == start) {
                 end++;
             }
             groups.add(new int[] {position, end});
@@ -74,7 +81,7 @@ final class SlabReader implements AutoCloseable {
 
     private DailyTemperatureReader reader(int worker) {
         if (readers[worker] == null) {
-            readers[worker] = job.source().open();
+            readers[worker] = source.open();
         }
         return readers[worker];
     }

@@ -20,4 +20,9 @@ public interface StateModel extends HardinessModel {
      * @param latitudes {@code [cell]}, degrees north; for models that ask for the length of the night
      */
     HardinessTrajectory begin(Season season, double[] latitudes);
+
+    /** Bytes that a state keeps for each cell, for the estimate of memory; at the most. */
+    default int bytesPerCell() {
+        return 128;
+    }
 }

@@ -54,7 +54,7 @@ public final class WinterLane {
     /**
      * Takes nights in their order.
      *
-     * @param curves one a cultivar
+     * @param curves one a cultivar; null for a cultivar with a state model, which {@link StateLane} follows
      * @param nights {@code [night of the stretch][cell]}, degrees Celsius, positive infinity for missing
      * @param count number of nights, at most {@link #STRETCH}
      * @param positions {@code [night of the stretch]}, position in the window, ascending
@@ -62,7 +62,9 @@ public final class WinterLane {
     public void accept(NightCurve[] curves, float[][] nights, int count, int[] positions) {
         LowestValues.ofDifference(nights, count, NO_REFERENCE, ANY_POSITION, minimum, cells);
         for (int c = 0; c < cultivars.length; c++) {
-            cultivars[c].accept(curves[c], nights, count, positions, before, reached);
+            if (curves[c] != null) {
+                cultivars[c].accept(curves[c], nights, count, positions, before, reached);
+            }
         }
     }
 

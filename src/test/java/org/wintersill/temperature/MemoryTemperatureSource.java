@@ -11,9 +11,16 @@ public final class MemoryTemperatureSource implements DailyTemperatureSource {
     private final DayAxis days;
     private final StorageLayout layout;
     private final float[][] values;
+    private final ForcingVariable variable;
 
     /** @param values {@code [day][cell]}, degrees Celsius, NaN for missing */
     public MemoryTemperatureSource(GridGeometry grid, DayAxis days, StorageLayout layout, float[][] values) {
+        this(grid, days, layout, values, ForcingVariable.MINIMUM);
+    }
+
+    /** The same for another daily quantity. */
+    public MemoryTemperatureSource(GridGeometry grid, DayAxis days, StorageLayout layout, float[][] values, ForcingVariable variable) {
+        this.variable = variable;
         this.grid = grid;
         this.days = days;
         this.layout = layout;
@@ -32,7 +39,7 @@ public final class MemoryTemperatureSource implements DailyTemperatureSource {
 
     @Override
     public ForcingVariable variable() {
-        return ForcingVariable.MINIMUM;
+        return variable;
     }
 
     @Override

@@ -119,4 +119,9 @@ public record ThermalTimeModel(MonthDay start, double initial, double tender, do
     public ThermalTimeTrajectory begin(Season season, double[] latitudes) {
         return new ThermalTimeTrajectory(this, latitudes.length);
     }
+
+    @Override
+    public int bytesPerCell() {
+        return ThermalTimeTrajectory.BYTES_PER_CELL;
+    }
 }

@@ -20,6 +20,9 @@ public final class ThermalTimeTrajectory implements HardinessTrajectory {
     /** Powers up to this one are multiplied out where they are multiples of a half; project choice. */
     private static final int LARGEST_PRODUCT = 32;
 
+    /** Twelve numbers in double precision. */
+    static final int BYTES_PER_CELL = 12 * Double.BYTES;
+
     private final ThermalTimeModel model;
     private final int cells;
     private final double[] hardiness;
