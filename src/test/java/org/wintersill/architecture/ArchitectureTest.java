@@ -37,20 +37,21 @@ class ArchitectureTest {
         MAY_USE.put("hardiness", Set.of("grid", "time", "temperature", "problem", "damage"));
         MAY_USE.put("damage", Set.of());
         MAY_USE.put("layer", Set.of("grid", "time", "problem"));
+        MAY_USE.put("parcel", Set.of("grid", "problem"));
         MAY_USE.put("season", Set.of("grid", "time", "hardiness", "damage", "layer", "problem"));
         MAY_USE.put("climatology", Set.of("grid", "time", "layer", "season", "damage", "problem"));
         MAY_USE.put("engine", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "season",
                 "climatology"));
-        MAY_USE.put("io", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer"));
-        MAY_USE.put("config", Set.of("problem", "grid", "time", "temperature", "elevation", "io"));
+        MAY_USE.put("io", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "parcel"));
+        MAY_USE.put("config", Set.of("problem", "grid", "time", "temperature", "elevation", "parcel", "io"));
         MAY_USE.put("run", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "season",
-                "climatology", "engine", "io", "config"));
+                "climatology", "engine", "parcel", "io", "config"));
         MAY_USE.put("cli", Set.of("config", "run", "engine", "problem", "io", "temperature", "time"));
     }
 
     private static final Set<String> THIRD_PARTY_ROOMS = Set.of("io", "config", "cli");
     private static final Set<String> SCIENCE = Set.of("grid", "time", "temperature", "elevation", "hardiness", "damage", "season",
-            "climatology");
+            "climatology", "parcel");
 
     private static String room(String packageName) {
         if (!packageName.startsWith(ROOT)) {

@@ -1,5 +1,6 @@
 package org.wintersill.io.crs;
 
+import java.util.function.DoubleUnaryOperator;
 import org.wintersill.grid.Crs;
 import org.wintersill.grid.GridGeometry;
 
@@ -37,8 +38,7 @@ public final class CellAreas {
             java.util.Arrays.fill(areas, grid.cellWidth() * unit * grid.cellHeight() * unit);
             return areas;
         }
-        Ellipsoid figure = grid.crs().kind() == Crs.Kind.ROTATED_POLE ? Ellipsoid.sphere(MEAN_RADIUS_KM * 1000)
-                : SystemDefinition.of(grid.crs()).base().ellipsoid();
+        Ellipsoid figure = figure(grid.crs());
         double width = Math.toRadians(grid.cellWidth());
         for (int row = 0; row < areas.length; row++) {
             double north = grid.north() - row * grid.cellHeight();
@@ -46,6 +46,24 @@ public final class CellAreas {
             areas[row] = width * (zone(figure, north) - zone(figure, south));
         }
         return areas;
+    }
+
+    /**
+     * Area between a fixed line and y, for one unit of x, km^2: the integral that {@link #rowAreasKm2} takes differences of. It grows
+     * with y.
+     */
+    public static DoubleUnaryOperator areaNorthward(Crs crs) {
+        if (crs.kind() == Crs.Kind.PROJECTED) {
+            double unit = crs.metresPerUnit() / 1000;
+            return y -> y * unit * unit;
+        }
+        Ellipsoid figure = figure(crs);
+        double degree = Math.toRadians(1);
+        return latitude -> degree * zone(figure, latitude);
+    }
+
+    private static Ellipsoid figure(Crs crs) {
+        return crs.kind() == Crs.Kind.ROTATED_POLE ? Ellipsoid.sphere(MEAN_RADIUS_KM * 1000) : SystemDefinition.of(crs).base().ellipsoid();
     }
 
     /** Area from the equator to a latitude in degrees for one radian of longitude, km^2; negative in the south. */
