@@ -10,12 +10,10 @@ import org.wintersill.io.yaml.YamlChecks;
 import org.wintersill.io.yaml.YamlSection;
 import org.wintersill.io.yaml.YamlValue;
 
-/** Reads {@code damage}, {@code statistics}, {@code classes}, {@code missing-days} and {@code area}. */
+/** Reads {@code damage}, {@code statistics}, {@code classes} and {@code missing-days}. */
 final class ChoiceSections {
     private static final List<String> MISSING_DAY_RULES = List.of("month-10-5", "month-5-3", "none");
     private static final List<Double> DEFAULT_CLASSES = List.of(0.05, 0.10, 0.20);
-    /** Beyond any coordinate in any unit of length. */
-    private static final double FARTHEST = 1e9;
 
     private ChoiceSections() {
     }
@@ -96,24 +94,6 @@ final class ChoiceSections {
         }
         tree.put("rule", rule);
         return rule;
-    }
-
-    /** The area, if its box is given and right. */
-    static Optional<AreaConfig> area(YamlSection section, Map<String, Object> tree) {
-        Optional<List<Double>> box = section.required("bbox", "Give west, south, east and north in the reference system of the "
-                + "target grid").flatMap(value -> section.checks().numbers(value, section.path("bbox"), 4, -FARTHEST, FARTHEST,
-                "coordinates in the reference system of the target grid"));
-        section.later("polygons");
-        section.finish();
-        box.ifPresent(list -> tree.put("bbox", list));
-        return box.filter(list -> {
-            boolean ordered = list.get(0) < list.get(2) && list.get(1) < list.get(3);
-            if (!ordered) {
-                section.problem("bbox", list + " is no box: west must be less than east and south less than north",
-                        "Give them in the order west, south, east, north");
-            }
-            return ordered;
-        }).map(list -> new AreaConfig(list.get(0), list.get(1), list.get(2), list.get(3)));
     }
 
     /** Texts of a list, each once. */

@@ -88,7 +88,7 @@ public final class ConfigReader {
         StatisticsConfig statistics = ChoiceSections.statistics(section(top, "statistics"), tree("statistics"));
         List<Double> classes = ChoiceSections.classes(top);
         effective.put("classes", classes);
-        Optional<AreaConfig> area = top.section("area").flatMap(section -> ChoiceSections.area(section, tree("area")));
+        Optional<AreaConfig> area = top.section("area").flatMap(section -> AreaSection.read(section, finder, tree("area")));
         OutputConfig outputs = OutputSections.outputs(section(top, "outputs"), base, tree("outputs"));
         LimitConfig limits = OutputSections.limits(section(top, "limits"), tree("limits"));
         top.later("scenario", "parcels");

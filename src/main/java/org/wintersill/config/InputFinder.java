@@ -10,6 +10,7 @@ import java.util.Set;
 import org.wintersill.io.yaml.YamlChecks;
 import org.wintersill.io.yaml.YamlSection;
 import org.wintersill.io.yaml.YamlValue;
+import org.wintersill.parcel.PolygonRequest;
 import org.wintersill.problem.Problem;
 
 /** Reads keys that name input files. What is not there is an input problem; everything else is a problem of the run file. */
@@ -82,6 +83,29 @@ final class InputFinder {
         crs.ifPresent(text -> tree.put("crs", text));
         unit.ifPresent(text -> tree.put("unit", text));
         return path.map(text -> new FileEntry(existing(file.get(), section.path("file"), text), crs, unit));
+    }
+
+    /** A file of polygons: a path, or a map of {@code file}, {@code layer} and {@code crs}. */
+    Optional<PolygonEntry> polygons(YamlValue value, String key, Map<String, Object> tree) {
+        YamlValue.Mapping mapping = value instanceof YamlValue.Mapping given ? given
+                : YamlValue.Mapping.empty(value.place()).with("file", value, value.place());
+        YamlSection section = new YamlSection(mapping, key, checks);
+        Optional<PolygonEntry> entry = polygons(section, value == mapping ? section.path("file") : key, tree);
+        section.finish();
+        return entry;
+    }
+
+    /** The keys of a file of polygons in a section that may have others too. */
+    Optional<PolygonEntry> polygons(YamlSection section, String fileKey, Map<String, Object> tree) {
+        Optional<YamlValue> file = section.required("file", "Name a GeoPackage, GeoJSON or Shapefile with polygons");
+        Optional<String> path = file.flatMap(given -> checks.text(given, fileKey));
+        Optional<String> layer = section.text("layer");
+        Optional<String> crs = crs(section);
+        path.ifPresent(text -> tree.put("file", text));
+        layer.ifPresent(text -> tree.put("layer", text));
+        crs.ifPresent(text -> tree.put("crs", text));
+        return path.map(text -> new PolygonEntry(existing(file.get(), fileKey, text),
+                new PolygonRequest(layer, Optional.empty(), Optional.empty(), crs)));
     }
 
     /** A reference system; whether it exists is asked when it is used. */

@@ -19,7 +19,7 @@ import org.wintersill.problem.Problem;
 /** Writes a configuration as a commented run file to start from. */
 public final class RunFileText {
     /** Keys whose texts are paths, in the tree of {@link RunConfig#effective()}. */
-    private static final Set<String> PATH_KEYS = Set.of("minimum", "maximum", "mean", "files", "file", "dem", "source-height", "folder");
+    private static final Set<String> PATH_KEYS = Set.of("minimum", "maximum", "mean", "files", "file", "dem", "source-height", "folder", "polygons", "parcels");
     private static final Map<String, String> COMMENTS = Map.ofEntries(
             Map.entry("title", "A few words that stand in every output."),
             Map.entry("temperature", "Daily minima in netCDF or GeoTIFF: a file, a list, a folder or a pattern."),
@@ -30,7 +30,7 @@ public final class RunFileText {
             Map.entry("damage", "Percents of organs killed, and the one that makes a killing winter."),
             Map.entry("statistics", "Interval of the bounds, and the frequency of killing winters that is still accepted."),
             Map.entry("classes", "Highest frequency of killing winters that is secure, workable, marginal."),
-            Map.entry("area", "West, south, east, north in the reference system of the target grid."),
+            Map.entry("area", "The part of the target grid to work on: bbox: [west, south, east, north] in its reference system, polygons: a file."),
             Map.entry("outputs", "What is written, and where."),
             Map.entry("limits", "How much of the machine is used; results do not depend on it."));
 

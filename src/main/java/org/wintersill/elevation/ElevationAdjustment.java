@@ -1,5 +1,6 @@
 package org.wintersill.elevation;
 
+import java.util.BitSet;
 import java.util.function.IntPredicate;
 import java.util.stream.IntStream;
 import org.wintersill.grid.CoordinateOperation;
@@ -64,6 +65,15 @@ public final class ElevationAdjustment {
             throw new IllegalArgumentException(sourceHeights.length + " heights for " + positions.source().cells() + " source cells");
         }
         return new ElevationAdjustment(positions, sourceHeights, dem.metres(), lapseRates);
+    }
+
+    /**
+     * The same adjustment with values in some target cells alone; the others are missing.
+     *
+     * @param cells {@code row * columns + column}; not copied, must not change afterwards
+     */
+    public ElevationAdjustment only(BitSet cells) {
+        return new ElevationAdjustment(positions.only(cells), sourceHeights, targetHeights, lapseRates);
     }
 
     /**

@@ -1,6 +1,7 @@
 package org.wintersill.elevation;
 
 import java.util.Arrays;
+import java.util.BitSet;
 import java.util.Optional;
 import java.util.stream.IntStream;
 import org.wintersill.grid.Block;
@@ -30,6 +31,8 @@ public final class SourcePositions {
     private final float[] southWeight;
     private final int[] columnInside;
     private final int[] rowInside;
+    /** Target cells that can have a value; null for all. */
+    private final BitSet only;
 
     /**
      * Works the positions out; where the two systems differ the transformation is shared between threads, row by row.
@@ -61,10 +64,12 @@ public final class SourcePositions {
         }
         westOrFirst = westOrFirst();
         firstColumn = separable ? firstColumns() : new int[0];
+        only = null;
     }
 
     /** The same positions in a part of the source that holds all of them. */
-    private SourcePositions(SourcePositions whole, Block part) {
+    private SourcePositions(SourcePositions whole, Block part, BitSet only) {
+        this.only = only;
         source = whole.source.crop(part);
         target = whole.target;
         separable = whole.separable;
@@ -109,7 +114,16 @@ public final class SourcePositions {
 
     /** The positions in a part of the source, which must hold all of {@link #window}. */
     public SourcePositions within(Block part) {
-        return new SourcePositions(this, part);
+        return new SourcePositions(this, part, only);
+    }
+
+    /**
+     * The same positions with values wanted in some target cells alone.
+     *
+     * @param cells {@code row * columns + column}; not copied, must not change afterwards
+     */
+    SourcePositions only(BitSet cells) {
+        return new SourcePositions(this, source.whole(), cells);
     }
 
     /** A longitude one turn further where only that lies in the source: 182 and -178 are the same place. */
@@ -226,11 +240,12 @@ public final class SourcePositions {
         return southWeight[rowKey(row, column)];
     }
 
-    /** Source cell that contains the target cell's centre; -1 beyond the source's cells. */
+    /** Source cell that contains the target cell's centre; -1 beyond the source's cells and where no value is wanted. */
     public int containing(int row, int column) {
         int sourceColumn = columnInside[columnKey(row, column)];
         int sourceRow = rowInside[rowKey(row, column)];
-        return sourceColumn < 0 || sourceRow < 0 ? -1 : sourceRow * source.columns() + sourceColumn;
+        boolean none = sourceColumn < 0 || sourceRow < 0 || only != null && !only.get(row * target.columns() + column);
+        return none ? -1 : sourceRow * source.columns() + sourceColumn;
     }
 
     /** First source row that the target rows from..to-1 need, and the row after the last; 0, 0 if they need none. */

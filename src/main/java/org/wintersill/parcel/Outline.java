@@ -21,6 +21,19 @@ public record Outline(List<double[]> rings) {
         return rings.isEmpty();
     }
 
+    /** The same outline with x and y in each other's place. */
+    public Outline swapped() {
+        return new Outline(rings.stream().map(ring -> {
+            double[] turned = new double[ring.length];
+            for (int i = 0; i < ring.length; i += 2) {
+                // Backwards, so that shells keep their sense of rotation.
+                turned[i] = ring[ring.length - 1 - i];
+                turned[i + 1] = ring[ring.length - 2 - i];
+            }
+            return turned;
+        }).toList());
+    }
+
     /** Number of points of all rings. */
     public int points() {
         return rings.stream().mapToInt(ring -> ring.length / 2).sum();

@@ -8,6 +8,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import org.wintersill.config.FileEntry;
+import org.wintersill.config.PolygonEntry;
 import org.wintersill.config.TemperatureEntry;
 import org.wintersill.elevation.ElevationField;
 import org.wintersill.elevation.ElevationFormat;
@@ -18,6 +19,8 @@ import org.wintersill.io.geotiff.read.GeotiffTemperatureFormat;
 import org.wintersill.io.netcdf.NetcdfElevationFormat;
 import org.wintersill.io.netcdf.NetcdfTemperatureFormat;
 import org.wintersill.io.netcdf.UnknownContent;
+import org.wintersill.io.vector.PolygonFiles;
+import org.wintersill.parcel.PolygonReader;
 import org.wintersill.problem.Notices;
 import org.wintersill.problem.Problem;
 import org.wintersill.problem.Problems;
@@ -34,10 +37,12 @@ public final class InputFormats {
 
     private final List<TemperatureFormat> temperatureFormats;
     private final List<ElevationFormat> elevationFormats;
+    private final PolygonFiles polygonFiles;
 
     public InputFormats(CrsParser crs) {
         temperatureFormats = List.of(new NetcdfTemperatureFormat(crs), new GeotiffTemperatureFormat(crs));
         elevationFormats = List.of(new GeotiffElevationFormat(crs), new NetcdfElevationFormat(crs));
+        polygonFiles = new PolygonFiles(crs);
     }
 
     /**
@@ -77,6 +82,11 @@ public final class InputFormats {
     /** The grid of ground heights, without reading them. */
     GridGeometry heightGrid(FileEntry entry, Notices notices) {
         return elevationFormat(entry.file()).grid(entry.file(), entry.crs(), notices);
+    }
+
+    /** Opens a file of polygons; the caller closes it. */
+    public PolygonReader polygons(PolygonEntry entry) {
+        return polygonFiles.open(entry.file(), entry.request());
     }
 
     private ElevationFormat elevationFormat(Path file) {

@@ -65,7 +65,8 @@ public final class RunPlanner {
             }
         }
         String sourceName = source.files().isEmpty() ? "the record" : source.files().get(0).path();
-        TargetPlan targetPlan = TargetPlan.of(source.grid(), sourceName, config.elevation(), config.area(), formats, operations, notices);
+        TargetPlan targetPlan = TargetPlan.of(source.grid(), sourceName, config.elevation(),
+                new AreaCut.Wanted(config.area(), formats, operations, notices), formats, operations, notices);
         GridGeometry target = targetPlan.target();
         SeasonWindow window = window(config.winter(), target, notices);
         MissingDayPolicy policy = MissingDayPolicy.named(config.missingDays()).orElseThrow();

@@ -5,7 +5,10 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import org.wintersill.engine.Workers;
+import org.wintersill.config.AreaConfig;
+import org.wintersill.config.PolygonEntry;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.problem.Notices;
 import org.wintersill.temperature.SourceFile;
@@ -72,6 +75,7 @@ final class RunRecord {
             elevation.sourceHeight().ifPresent(height -> inputs.add(entry(base, height.file(), "source heights", digests)));
         });
         plan.config().cultivars().files().forEach(file -> inputs.add(entry(base, file, "cultivars", digests)));
+        areaPolygons(plan).ifPresent(file -> inputs.add(entry(base, file, "area polygons", digests)));
         return inputs;
     }
 
@@ -84,7 +88,12 @@ final class RunRecord {
             elevation.sourceHeight().ifPresent(height -> files.add(height.file()));
         });
         files.addAll(plan.config().cultivars().files());
+        areaPolygons(plan).ifPresent(files::add);
         return files;
+    }
+
+    private static Optional<Path> areaPolygons(RunPlan plan) {
+        return plan.config().area().flatMap(AreaConfig::polygons).map(PolygonEntry::file);
     }
 
     private static Map<String, Object> entry(Path base, Path file, String role, Map<Path, String> digests) {

@@ -1,7 +1,6 @@
 package org.wintersill.run;
 
 import java.util.Optional;
-import org.wintersill.config.AreaConfig;
 import org.wintersill.config.ElevationConfig;
 import org.wintersill.elevation.ElevationAdjustment;
 import org.wintersill.elevation.ElevationField;
@@ -36,8 +35,9 @@ record TargetPlan(Block window, ElevationAdjustment adjustment) {
      *
      * @param source the temperatures' grid
      * @param sourceName file that carries it, for messages
+     * @param area the part of the target to work on
      */
-    static TargetPlan of(GridGeometry source, String sourceName, Optional<ElevationConfig> elevation, Optional<AreaConfig> area,
+    static TargetPlan of(GridGeometry source, String sourceName, Optional<ElevationConfig> elevation, AreaCut.Wanted area,
                          InputFormats formats, CoordinateOperations operations, Notices notices) {
         if (elevation.isEmpty()) {
             return withoutHeights(source, area, operations, notices);
@@ -49,7 +49,8 @@ record TargetPlan(Block window, ElevationAdjustment adjustment) {
         // The area must not change a value inside it, so mean heights are taken before it is cut out.
         float[] heights = config.sourceHeight().isPresent() ? sourceHeights(config, source, sourceName, formats, notices)
                 : SourceHeights.blockMeans(whole, positions);
-        ElevationField dem = cropped(whole, area);
+        Optional<AreaCut> cut = area.of(whole.grid());
+        ElevationField dem = cut.map(part -> cropped(whole, part.block())).orElse(whole);
         SourcePositions used = dem == whole ? positions : new SourcePositions(source, dem.grid(), toSource);
         Block window = used.window().orElseThrow(() -> Problem.input("the terrain model nowhere meets the temperature grid: it covers "
                         + dem.grid().describe() + "; the temperatures cover " + source.describe(), config.dem().file().toString(),
@@ -57,23 +58,25 @@ record TargetPlan(Block window, ElevationAdjustment adjustment) {
         ElevationAdjustment adjustment = ElevationAdjustment.toHeights(used.within(window), part(heights, source, window), dem,
                 new LapseRates(config.lapseRate()));
         warnOfEqualHeights(adjustment, notices);
-        return new TargetPlan(window, adjustment);
+        return new TargetPlan(window, AreaCut.masked(adjustment, cut));
     }
 
-    private static TargetPlan withoutHeights(GridGeometry source, Optional<AreaConfig> area, CoordinateOperations operations,
+    private static TargetPlan withoutHeights(GridGeometry source, AreaCut.Wanted area, CoordinateOperations operations,
                                              Notices notices) {
         if (source.crs().kind() != Crs.Kind.ROTATED_POLE) {
-            Block window = area.map(config -> block(source, config)).orElse(source.whole());
-            return new TargetPlan(window, ElevationAdjustment.none(source.crop(window)));
+            Optional<AreaCut> cut = area.of(source);
+            Block window = cut.map(AreaCut::block).orElse(source.whole());
+            return new TargetPlan(window, AreaCut.masked(ElevationAdjustment.none(source.crop(window)), cut));
         }
         GridGeometry regular = RotatedTarget.covering(source, operations);
-        GridGeometry target = area.map(config -> regular.crop(block(regular, config))).orElse(regular);
+        Optional<AreaCut> cut = area.of(regular);
+        GridGeometry target = cut.map(part -> regular.crop(part.block())).orElse(regular);
         notices.add("the temperature grid has a rotated pole, which GeoTIFF cannot hold: layers are written on "
                 + target.describe());
         CoordinateOperation toSource = operations.between(target.crs(), source.crs());
         SourcePositions positions = new SourcePositions(source, target, toSource);
         Block window = positions.window().orElse(source.whole());
-        return new TargetPlan(window, ElevationAdjustment.interpolation(positions.within(window)));
+        return new TargetPlan(window, AreaCut.masked(ElevationAdjustment.interpolation(positions.within(window)), cut));
     }
 
     private static CoordinateOperation operation(GridGeometry target, GridGeometry source, CoordinateOperations operations) {
@@ -101,25 +104,8 @@ record TargetPlan(Block window, ElevationAdjustment adjustment) {
         return part;
     }
 
-    private static ElevationField cropped(ElevationField dem, Optional<AreaConfig> area) {
-        if (area.isEmpty()) {
-            return dem;
-        }
-        Block block = block(dem.grid(), area.get());
+    private static ElevationField cropped(ElevationField dem, Block block) {
         return new ElevationField(dem.grid().crop(block), part(dem.metres(), dem.grid(), block), dem.description());
-    }
-
-    /** The cells whose centres lie in the area. */
-    private static Block block(GridGeometry grid, AreaConfig area) {
-        int west = Math.max(0, (int) Math.ceil(grid.columnPosition(area.west()) - 0.5));
-        int east = Math.min(grid.columns() - 1, (int) Math.floor(grid.columnPosition(area.east()) - 0.5));
-        int north = Math.max(0, (int) Math.ceil(grid.rowPosition(area.north()) - 0.5));
-        int south = Math.min(grid.rows() - 1, (int) Math.floor(grid.rowPosition(area.south()) - 0.5));
-        if (east < west || south < north) {
-            throw Problem.usage("no cell of the target grid has its centre in the area; the grid is " + grid.describe(), "area.bbox",
-                    "Give west, south, east, north in the coordinates of " + grid.crs().label()).asException();
-        }
-        return new Block(west, north, east - west + 1, south - north + 1);
     }
 
     private static void warnOfEqualHeights(ElevationAdjustment adjustment, Notices notices) {

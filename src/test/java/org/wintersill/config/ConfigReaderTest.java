@@ -18,6 +18,8 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.wintersill.grid.Envelope;
+import org.wintersill.parcel.PolygonRequest;
 import org.wintersill.problem.Problem;
 import org.wintersill.problem.ProblemException;
 import org.wintersill.temperature.ForcingVariable;
@@ -46,7 +48,7 @@ class ConfigReaderTest {
             damage: {nights: worst, levels: [90, 20, 50], killing: 20}
             statistics: {interval: 0.95, bounds: wilson, target: 0.2}
             classes: [0.1, 0.2, 0.3]
-            area: {bbox: [2600000, 1100000, 2700000, 1200000]}
+            area: {bbox: [2600000, 1100000, 2700000, 1200000], polygons: {file: zones.gpkg, layer: inner, crs: EPSG:2056}}
             outputs: {folder: my out, layers: [margin-mean, suitability], winters: false, netcdf: true, geopackage: false, parts: true,
               cells: true}
             limits: {threads: 2, memory: 1.5g}
@@ -56,7 +58,7 @@ class ConfigReaderTest {
 
     @BeforeEach
     void makeFiles() throws Exception {
-        for (String name : List.of("tmin-2001.nc", "tmin-2002.nc", "tmax.nc", "dem.tif", "orog.nc", "c.yaml")) {
+        for (String name : List.of("tmin-2001.nc", "tmin-2002.nc", "tmax.nc", "dem.tif", "orog.nc", "c.yaml", "zones.gpkg")) {
             Files.createFile(folder.resolve(name));
         }
     }
@@ -105,7 +107,8 @@ class ConfigReaderTest {
         assertEquals(new DamageConfig("worst", List.of(20, 50, 90), 20), config.damage());
         assertEquals(new StatisticsConfig(0.95, "wilson", 0.2), config.statistics());
         assertEquals(List.of(0.1, 0.2, 0.3), config.classes());
-        assertEquals(new AreaConfig(2600000, 1100000, 2700000, 1200000), config.area().orElseThrow());
+        assertEquals(new AreaConfig(Optional.of(new Envelope(2600000, 1100000, 2700000, 1200000)), Optional.of(new PolygonEntry(folder.resolve("zones.gpkg"),
+                new PolygonRequest(Optional.of("inner"), Optional.empty(), Optional.empty(), Optional.of("EPSG:2056"))))), config.area().orElseThrow());
         assertEquals(new OutputConfig(folder.resolve("my out"), List.of("margin-mean", "suitability"), false, true, false, true, true),
                 config.outputs());
         assertEquals(new LimitConfig(OptionalInt.of(2), OptionalLong.of(3L << 29)), config.limits());
@@ -147,7 +150,7 @@ class ConfigReaderTest {
         assertEquals(6.5, config.elevation().orElseThrow().lapseRate()[0]);
         assertEquals(2, config.temperature().minimum().files().size(), "the files stay when a unit is set beside them");
         assertEquals(Optional.of(TemperatureUnit.KELVIN), config.temperature().minimum().request().unit());
-        assertEquals(4, config.area().orElseThrow().north());
+        assertEquals(4, config.area().orElseThrow().box().orElseThrow().north());
         assertEquals("none", config.missingDays());
     }
 
@@ -217,7 +220,7 @@ class ConfigReaderTest {
         "classes: [0.2, 0.1, 0.3]                       | 3 | does not ascend",
         "classes: [0.1, 0.2]                            | 3 | a list of 3 numbers is needed, found a list of 2",
         "area: {bbox: [3, 2, 1, 4]}                     | 3 | west must be less than east",
-        "area: {}                                       | 3 | the key area.bbox is missing",
+        "area: {}                                       | 3 | an area needs a box or polygons",
         "outputs: {winters: yes}                        | 3 | Write true or false",
         "outputs: {layers: [../x]}                      | 3 | is not a layer id",
         "outputs: []                                    | 3 | a map of keys and values is needed, found a list",
