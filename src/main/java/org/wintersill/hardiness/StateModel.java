@@ -15,6 +15,14 @@ public interface StateModel extends HardinessModel {
     int firstDay(Season season);
 
     /**
+     * First day whose mean the model can use where the record has it, at most {@link #firstDay}: such as the days before the window that a
+     * trailing mean reaches back to. A record that begins in between is taken from its first day.
+     */
+    default int earliestDay(Season season) {
+        return firstDay(season);
+    }
+
+    /**
      * A fresh state for a run of cells in one winter; winters are independent.
      *
      * @param latitudes {@code [cell]}, degrees north; for models that ask for the length of the night

@@ -39,6 +39,11 @@ public record SeasonWindow(MonthDay from, MonthDay to, MonthDay completeFrom, Mo
         return hemisphere == Hemisphere.NORTH ? north() : south();
     }
 
+    /** Whether a day of the year lies in the window. */
+    public boolean contains(MonthDay day) {
+        return span(ordinal(from), ordinal(day)) <= span(ordinal(from), ordinal(to));
+    }
+
     /** Whether the window runs over the new year. */
     public boolean crossesNewYear() {
         return to.compareTo(from) < 0;

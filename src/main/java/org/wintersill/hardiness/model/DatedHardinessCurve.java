@@ -27,7 +27,7 @@ import org.wintersill.time.SeasonWindow;
  *
  * <p>Outside its rows the curve says nothing (NaN), unless it holds its first and last row.
  *
- * @param rows at least two, ascending around the year, no two on one day
+ * @param rows at least one, ascending around the year, no two on one day
  * @param holdOutside whether the first and the last row are kept outside the dates of the curve
  */
 public record DatedHardinessCurve(List<Row> rows, boolean holdOutside) implements CalendarModel {
@@ -48,8 +48,8 @@ public record DatedHardinessCurve(List<Row> rows, boolean holdOutside) implement
 
     public DatedHardinessCurve {
         rows = List.copyOf(rows);
-        if (rows.size() < 2) {
-            throw new IllegalArgumentException("a dated curve needs at least two rows");
+        if (rows.isEmpty()) {
+            throw new IllegalArgumentException("a dated curve needs a row");
         }
     }
 

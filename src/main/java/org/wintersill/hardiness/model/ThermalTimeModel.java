@@ -99,20 +99,9 @@ public record ThermalTimeModel(MonthDay start, double initial, double tender, do
         return Optional.empty();
     }
 
-    /** The start date that is nearest to the window's first day. */
     @Override
     public int firstDay(Season season) {
-        MonthDay day = start != null ? start
-                : season.hemisphere() == SeasonWindow.Hemisphere.NORTH ? NORTHERN_START : SOUTHERN_START;
-        int year = season.first().year();
-        int nearest = Integer.MAX_VALUE;
-        for (int candidate = year - 1; candidate <= year + 1; candidate++) {
-            int position = season.position(day.in(candidate, season.calendar()));
-            if (Math.abs(position) < Math.abs(nearest)) {
-                nearest = position;
-            }
-        }
-        return nearest;
+        return StartDay.position(season, start, NORTHERN_START, SOUTHERN_START);
     }
 
     @Override

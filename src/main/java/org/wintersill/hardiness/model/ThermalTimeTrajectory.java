@@ -15,8 +15,6 @@ import org.wintersill.hardiness.NightTolerance;
 public final class ThermalTimeTrajectory implements HardinessTrajectory {
     /** Lifts any difference of two states or sums above 1: none of them is nearer to zero than 1e-20. */
     private static final double FAR = 1e30;
-    /** Chilling is counted below this daily mean, degC (science 3.3). */
-    private static final double CHILLING_BASE = 10;
     /** Powers up to this one are multiplied out where they are multiples of a half; project choice. */
     private static final int LARGEST_PRODUCT = 32;
 
@@ -219,7 +217,7 @@ public final class ThermalTimeTrajectory implements HardinessTrajectory {
 
     private static void chillAndPhase(double[] mean, double[] chill, double[] phase, double threshold, int cells) {
         for (int i = 0; i < cells; i++) {
-            chill[i] += Math.min(0, mean[i] - CHILLING_BASE);
+            chill[i] += Chilling.degreeDays(mean[i]);
             phase[i] = Math.max(phase[i], 1 - Math.max(0, (chill[i] - threshold) * FAR));
         }
     }

@@ -13,6 +13,7 @@ import org.wintersill.hardiness.Cultivar;
 import org.wintersill.hardiness.HardinessModel;
 import org.wintersill.hardiness.Status;
 import org.wintersill.hardiness.Variants;
+import org.wintersill.hardiness.model.HardinessModels;
 import org.wintersill.io.yaml.YamlChecks;
 import org.wintersill.io.yaml.YamlReader;
 import org.wintersill.io.yaml.YamlSection;
@@ -28,7 +29,6 @@ import org.wintersill.problem.Problems;
  * (the form of the tolerance curve) and the parameters of its model. Id, model, source and status must be there.
  */
 public final class CultivarFile {
-    private static final List<String> LATER_MODELS = List.of("response", "thermal-time", "relaxation", "stage");
     /** Names that Windows keeps for devices. */
     private static final Set<String> DEVICE_NAMES = Set.of("con", "prn", "aux", "nul", "com1", "com2", "com3", "com4", "com5",
             "com6", "com7", "com8", "com9", "lpt1", "lpt2", "lpt3", "lpt4", "lpt5", "lpt6", "lpt7", "lpt8", "lpt9");
@@ -129,23 +129,19 @@ public final class CultivarFile {
                 .flatMap(Status::named);
         ToleranceCurve tolerance = entry.word("tolerance", ToleranceCurve.keys(), List.of()).flatMap(ToleranceCurve::named)
                 .orElse(ToleranceCurve.SPLIT_LOGISTIC);
-        Optional<HardinessModel> model = entry.required("model", "Write model: dated")
-                .flatMap(value -> checks.word(value, "model", List.of("dated"), LATER_MODELS))
-                .flatMap(word -> new DatedCurveReader(entry, label, tolerance, notices).read());
         Variants variants = new VariantsReader(entry).read();
-        if (model.isPresent() || entry.value("model").isPresent() && isDated(entry)) {
-            entry.finish();
+        YamlParameters parameters = new YamlParameters(entry, label, tolerance, notices);
+        Optional<String> word = entry.required("model", "Write one of model: " + String.join(", ", HardinessModels.words()))
+                .flatMap(value -> checks.word(value, "model", HardinessModels.words(), List.of()));
+        Optional<HardinessModel> model = word.flatMap(kind -> HardinessModels.read(kind, parameters));
+        if (word.isPresent()) {
+            parameters.finish();
         }
         if (problems.all().size() > before) {
             return Optional.empty();
         }
         return Optional.of(new Cultivar(id.orElseThrow(), name, species, organ, source.orElseThrow(), status.orElseThrow(),
                 model.orElseThrow(), tolerance, variants));
-    }
-
-    /** The keys of a model that this version does not have are no mistakes of their own. */
-    private static boolean isDated(YamlSection entry) {
-        return entry.value("model").filter(value -> value instanceof YamlValue.Text text && text.text().equals("dated")).isPresent();
     }
 
     private boolean usable(String id, YamlSection entry) {

@@ -101,9 +101,14 @@ public final class YamlSection {
         return value(key).map(value -> of(value, path(key), checks));
     }
 
-    /** Adds a problem at a key. */
+    /** Adds a problem at a key; at the section itself where the key is empty. */
     public void problem(String key, String what, String remedy) {
-        checks.problem(place(key), path(key), what, remedy);
+        checks.problem(place(key), key.isEmpty() ? path : path(key), what, remedy);
+    }
+
+    /** The keys that are given, in the order of the file. */
+    public List<String> keys() {
+        return List.copyOf(mapping.keyPlaces().keySet());
     }
 
     /** Keys that are kept for a later version: not known yet, but no slip of the finger either. */
@@ -113,6 +118,15 @@ public final class YamlSection {
 
     /** Reports the keys that nobody asked for. */
     public void finish() {
+        finish(Map.of());
+    }
+
+    /**
+     * Reports the keys that nobody asked for.
+     *
+     * @param otherNames names of keys elsewhere, and what they are called here
+     */
+    public void finish(Map<String, String> otherNames) {
         for (Map.Entry<String, String> key : mapping.keyPlaces().entrySet()) {
             String name = key.getKey();
             if (known.contains(name)) {
@@ -120,6 +134,10 @@ public final class YamlSection {
             }
             if (later.contains(name)) {
                 checks.problem(key.getValue(), "", "the key " + path(name) + " is not known to this version", "Remove it");
+                continue;
+            }
+            if (otherNames.containsKey(name)) {
+                checks.problem(key.getValue(), "", "the key " + path(name) + " is not known", "It is called " + otherNames.get(name) + " here");
                 continue;
             }
             String accepted = "Known here: " + String.join(", ", known);

@@ -106,8 +106,11 @@ class DatedHardinessCurveTest {
     }
 
     @Test
-    void oneRowIsNoCurve() {
-        assertThrows(IllegalArgumentException.class, () -> curve(false, WINTER[0]));
+    void oneRowHoldsAllWinterOrOnItsDay() {
+        assertThrows(IllegalArgumentException.class, () -> curve(true));
+        Season season = SeasonWindow.north().beginningIn(2019, CfCalendar.STANDARD);
+        assertTrue(Arrays.stream(curve(true, WINTER[2]).overSeason(season).lt50()).allMatch(lt50 -> lt50 == -24));
+        assertEquals(1, Arrays.stream(curve(false, WINTER[2]).overSeason(season).lt50()).filter(lt50 -> lt50 == -24).count());
     }
 
     private static DatedHardinessCurve curve(boolean hold, Row... rows) {

@@ -103,12 +103,15 @@ class CultivarFileTest {
         "id: amber             | id: abcdefghijabcdefghijabcdefghijabcdefghijx | 2 | 41 letters",
         "id: amber             | identity: amber          | 2  | key id is missing",
         "model: dated          | model: datd              | 6  | Did you mean dated?",
-        "model: dated          | model: thermal-time      | 6  | not known to this version",
+        "model: dated          | model: frost             | 6  | accepted: dated, response, thermal-time, relaxation, stage",
+        "model: dated          | model: thermal-time      | 2  | key hardy-limit is missing",
         "status: invented      | status: guess            | 8  | published, from memory, invented, own data",
         "source: invented for the demonstration | source: | 7  | key source has no value",
         "lt10: -7.5            | lt10: -19                | 11 | out of order",
         "lt10: -7.5            | lt10: -8.95              | 11 | too close together",
         "lt90: -11             | lt90: -91                | 11 | -90 to 90",
+        "lt10: -7.5            | lt10: 20                 | 11 | looks like Fahrenheit",
+        "lt10: -7.5            | lt10: 20                 | 11 | write -6.7",
         "lt90: -11             | lt90: -11, spread: 1     | 11 | both given",
         ", lt90: -11           | ''                       | 11 | lt90 is missing",
         "lt90: -11             | lt99: -11                | 11 | Did you mean lt90?",
@@ -161,11 +164,27 @@ class CultivarFileTest {
     }
 
     @Test
-    void temperaturesThatLookLikeFahrenheitAreNoted() throws Exception {
+    void whereOnlyLt50IsGivenTheDefaultSpreadServesAndIsTold() throws Exception {
         Notices notices = new Notices();
-        String fahrenheit = GOOD.replace("lt10: -7.5, lt50: -9, lt90: -11", "lt10: 20, lt50: 16, lt90: 12");
-        CultivarFile.read(file("f.yaml", fahrenheit), notices);
-        assertTrue(notices.counts().keySet().iterator().next().contains("look like Fahrenheit"));
+        String bare = GOOD.replace(", spread: 1.2", "");
+        DatedHardinessCurve curve = (DatedHardinessCurve) CultivarFile.read(file("bare.yaml", bare), notices).get(0).model();
+        // science 1.3: class default s = 1.2
+        assertEquals(-24 + 2.6366694928034633, curve.rows().get(1).lt10(), 1e-12);
+        assertTrue(notices.counts().keySet().iterator().next().contains("gives LT50 only"), notices.counts().toString());
+        Notices quiet = new Notices();
+        String entry = bare.replace("outside: hold", "spread: 2");
+        DatedHardinessCurve wide = (DatedHardinessCurve) CultivarFile.read(file("wide.yaml", entry), quiet).get(0).model();
+        assertEquals(-24 + 2 * 2.1972245773362196, wide.rows().get(1).lt10(), 1e-12);
+        assertTrue(quiet.counts().isEmpty(), quiet.counts().toString());
+    }
+
+    @Test
+    void oneDateNeedsToBeHeld() throws Exception {
+        String one = GOOD.replace("      - {date: 02-29, lt50: -24, spread: 1.2}\n", "");
+        assertEquals(1, ((DatedHardinessCurve) CultivarFile.read(file("one.yaml", one), new Notices()).get(0).model()).rows().size());
+        Path strict = file("strict.yaml", one.replace("outside: hold", "outside: refuse"));
+        ProblemException refused = assertThrows(ProblemException.class, () -> CultivarFile.read(strict, new Notices()));
+        assertTrue(refused.getMessage().contains("at least 2 rows"), refused.getMessage());
     }
 
     @ParameterizedTest
