@@ -11,6 +11,13 @@ public interface Commands {
     /** Grids in, layers out. */
     int map(RunConfig config, MapOptions options, Console console);
 
+    /**
+     * Refuses an output folder that {@link #map} would refuse.
+     *
+     * @param overwrite whether earlier outputs may be replaced
+     */
+    void check(RunConfig config, boolean overwrite);
+
     /** Everything that {@link #map} would check and decide; writes nothing. */
     int plan(RunConfig config, PlanOptions options, Console console);
 

@@ -1,7 +1,11 @@
 package org.wintersill.cli;
 
+import java.util.ArrayList;
+import java.util.List;
 import java.util.concurrent.Callable;
 import org.wintersill.config.RunConfig;
+import org.wintersill.config.ScenarioConfig;
+import org.wintersill.config.Setting;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Option;
@@ -50,6 +54,9 @@ final class MapCommand implements Callable<Integer>, Manners.Kept {
     public Integer call() {
         return session.call(manners, console -> {
             RunConfig config = run.config();
+            if (config.scenario().filter(ScenarioConfig::hasOpenMembers).isPresent() && !printConfig && !dryRun) {
+                return members(config, console);
+            }
             if (printConfig) {
                 console.result(config.toYaml());
                 return ExitCode.DONE;
@@ -59,5 +66,23 @@ final class MapCommand implements Callable<Integer>, Manners.Kept {
             }
             return session.commands().map(config, new MapOptions(overwrite, json), console);
         });
+    }
+
+    /** One run for each member of the scenario, each in a folder of its own within the output folder. */
+    private int members(RunConfig config, Console console) {
+        List<RunConfig> runs = new ArrayList<>();
+        for (String member : config.scenario().orElseThrow().members()) {
+            runs.add(run.config(List.of(), List.of(Setting.text("--set", "scenario.member", member),
+                    Setting.paths("--out", "outputs.folder", List.of(config.outputs().folder().resolve(member).toString())))));
+        }
+        runs.forEach(member -> session.commands().check(member, overwrite));
+        for (RunConfig member : runs) {
+            console.message("Member " + member.scenario().orElseThrow().member().orElseThrow());
+            int code = session.commands().map(member, new MapOptions(overwrite, json), console);
+            if (code != ExitCode.DONE) {
+                return code;
+            }
+        }
+        return ExitCode.DONE;
     }
 }

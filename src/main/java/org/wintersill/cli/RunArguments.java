@@ -70,6 +70,11 @@ final class RunArguments {
      * @param found what a folder of inputs holds; empty where there is a run file or flags alone
      */
     RunConfig config(List<Setting> found) {
+        return config(found, List.of());
+    }
+
+    /** The same with settings laid over everything else. */
+    RunConfig config(List<Setting> found, List<Setting> last) {
         Problems problems = new Problems();
         List<Setting> settings = new ArrayList<>(found);
         for (String assignment : set) {
@@ -81,6 +86,7 @@ final class RunArguments {
         paths("--out", "outputs.folder", out == null ? List.of() : List.of(out), settings);
         text("--threads", "limits.threads", threads, settings);
         text("--memory", "limits.memory", memory, settings);
+        settings.addAll(last);
         RunConfig[] config = new RunConfig[1];
         if (runFile == null && settings.isEmpty() && problems.isEmpty()) {
             throw Problem.usage("there is neither a run file nor a flag that names the inputs", "",

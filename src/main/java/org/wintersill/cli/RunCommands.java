@@ -85,6 +85,11 @@ final class RunCommands implements Commands {
     }
 
     @Override
+    public void check(RunConfig config, boolean overwrite) {
+        OutputFolder.check(config.outputs().folder(), overwrite);
+    }
+
+    @Override
     public int plan(RunConfig config, PlanOptions options, Console console) {
         OutputFolder.check(config.outputs().folder(), true);
         RunPlan plan = plan(config, console);

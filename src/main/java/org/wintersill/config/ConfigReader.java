@@ -91,11 +91,13 @@ public final class ConfigReader {
         Optional<AreaConfig> area = top.section("area").flatMap(section -> AreaSection.read(section, finder, tree("area")));
         OutputConfig outputs = OutputSections.outputs(section(top, "outputs"), base, tree("outputs"));
         LimitConfig limits = OutputSections.limits(section(top, "limits"), tree("limits"));
-        top.later("scenario", "parcels");
+        Optional<ScenarioConfig> scenario = top.section("scenario")
+                .flatMap(section -> new ScenarioSection(base, finder, checks).read(section, tree("scenario")));
+        top.later("parcels");
         top.finish();
         throwInOrder();
         return new RunConfig(runFile, base, title, temperature.orElseThrow(), elevation, winter, missingDays, cultivars, damage,
-                statistics, classes, area, outputs, limits, effective);
+                statistics, classes, area, scenario, outputs, limits, effective);
     }
 
     /** All problems, those of the run file by line. */

@@ -19,7 +19,8 @@ import org.wintersill.problem.Problem;
 /** Writes a configuration as a commented run file to start from. */
 public final class RunFileText {
     /** Keys whose texts are paths, in the tree of {@link RunConfig#effective()}. */
-    private static final Set<String> PATH_KEYS = Set.of("minimum", "maximum", "mean", "files", "file", "dem", "source-height", "folder", "polygons", "parcels");
+    private static final Set<String> PATH_KEYS = Set.of("minimum", "maximum", "mean", "files", "file", "dem", "source-height", "folder",
+            "polygons", "parcels", "historical", "future");
     private static final Map<String, String> COMMENTS = Map.ofEntries(
             Map.entry("title", "A few words that stand in every output."),
             Map.entry("temperature", "Daily minima in netCDF or GeoTIFF: a file, a list, a folder or a pattern."),
@@ -31,6 +32,7 @@ public final class RunFileText {
             Map.entry("statistics", "Interval of the bounds, and the frequency of killing winters that is still accepted."),
             Map.entry("classes", "Highest frequency of killing winters that is secure, workable, marginal."),
             Map.entry("area", "The part of the target grid to work on: bbox: [west, south, east, north] in its reference system, polygons: a file."),
+            Map.entry("scenario", "A climate model's future in place of the minima: method, pool and the model's files."),
             Map.entry("outputs", "What is written, and where."),
             Map.entry("limits", "How much of the machine is used; results do not depend on it."));
 

@@ -50,21 +50,27 @@ final class TemperatureSection {
         if (maximum.isPresent() && mean.isPresent()) {
             section.problem("mean", "maximum and mean are both given", "Keep one of the two; the mean is used as it is");
         }
-        Optional<TemperatureEntry> minima = minimum.flatMap(value -> entry(value, section, ForcingVariable.MINIMUM, forAll, tree));
-        Optional<TemperatureEntry> maxima = maximum.flatMap(value -> entry(value, section, ForcingVariable.MAXIMUM, forAll, tree));
-        Optional<TemperatureEntry> means = mean.flatMap(value -> entry(value, section, ForcingVariable.MEAN, forAll, tree));
+        Optional<TemperatureEntry> minima = minimum.flatMap(value -> entry(value, section, ForcingVariable.MINIMUM.word(), ForcingVariable.MINIMUM, forAll, tree));
+        Optional<TemperatureEntry> maxima = maximum.flatMap(value -> entry(value, section, ForcingVariable.MAXIMUM.word(), ForcingVariable.MAXIMUM, forAll, tree));
+        Optional<TemperatureEntry> means = mean.flatMap(value -> entry(value, section, ForcingVariable.MEAN.word(), ForcingVariable.MEAN, forAll, tree));
         return minima.map(entry -> new TemperatureConfig(entry, maxima, means));
     }
 
     /** One entry by itself. */
     Optional<TemperatureEntry> entry(YamlValue.Mapping value, ForcingVariable forcing) {
         Words nothing = new Words(Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty());
-        return entry(value, new YamlSection(value, "", checks), forcing, nothing, new LinkedHashMap<>());
+        return entry(value, new YamlSection(value, "", checks), forcing.word(), forcing, nothing, new LinkedHashMap<>());
     }
 
-    private Optional<TemperatureEntry> entry(YamlValue value, YamlSection parent, ForcingVariable forcing, Words forAll,
+    /** The entry of a key of another section. */
+    Optional<TemperatureEntry> entry(YamlValue value, YamlSection parent, String key, ForcingVariable forcing, Map<String, Object> tree) {
+        Words nothing = new Words(Optional.empty(), Optional.empty(), Optional.empty(), Optional.empty());
+        return entry(value, parent, key, forcing, nothing, tree);
+    }
+
+    private Optional<TemperatureEntry> entry(YamlValue value, YamlSection parent, String name, ForcingVariable forcing, Words forAll,
                                              Map<String, Object> parentTree) {
-        String key = parent.path(forcing.word());
+        String key = parent.path(name);
         YamlValue.Mapping mapping = value instanceof YamlValue.Mapping given ? given
                 : YamlValue.Mapping.empty(value.place()).with("files", value, value.place());
         YamlSection section = new YamlSection(mapping, key, checks);
@@ -85,7 +91,7 @@ final class TemperatureSection {
             section.problem("first-day", "dates and first-day are both given",
                     "Keep dates where the date is in the file name, first-day where one file holds many days");
         }
-        parentTree.put(forcing.word(), tree(files, words, scale, offset, firstDay, crs));
+        parentTree.put(name, tree(files, words, scale, offset, firstDay, crs));
         if (files.files().isEmpty()) {
             return Optional.empty();
         }

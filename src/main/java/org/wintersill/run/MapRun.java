@@ -21,6 +21,7 @@ import org.wintersill.io.geotiff.write.GeoKeyTags;
 import org.wintersill.io.json.JsonText;
 import org.wintersill.layer.RasterFormat;
 import org.wintersill.problem.Notices;
+import org.wintersill.scenario.ScenarioSource;
 import org.wintersill.season.WinterValues;
 
 /** The main job: from a plan to a finished output folder. */
@@ -58,7 +59,7 @@ public final class MapRun {
                 WinterStore store = new WinterStore(folder.unfinished("winters.tmp"),
                         WinterValues.planes(cultivars, plan.job().levels()), wantedPlanes(cultivars), plan.seasons().size(), plan.target().rows(),
                         plan.target().columns())) {
-            new LocalEngine(plan.job(), plan.foldPlan()).run(store, workers, progress, notices);
+            fold(folder, store, workers);
             CountingWinters.require(plan, store);
             Map<String, Object> record = RunRecord.begin(plan, digests.await());
             RasterFormat format = new CogFormat(crs -> {
@@ -81,6 +82,20 @@ public final class MapRun {
             int files = folder.names().size() + 1;
             folder.publish();
             return new RunReport(target, files, areas);
+        }
+    }
+
+    private void fold(OutputFolder folder, WinterStore store, Workers workers) {
+        if (!(plan.source() instanceof ScenarioSource scenario)) {
+            new LocalEngine(plan.job(), plan.foldPlan()).run(store, workers, progress, notices);
+            return;
+        }
+        try {
+            scenario.prepare(folder.unfinished("scenario.tmp"), plan.job().window(), Estimates.budget(plan.config().limits()), workers,
+                    progress);
+            new LocalEngine(plan.job(), plan.foldPlan()).run(store, workers, progress, notices);
+        } finally {
+            scenario.release();
         }
     }
 

@@ -54,7 +54,8 @@ public final class RunPlanner {
         problems.attempt(() -> opened.add(formats.open(config.temperature().minimum(), notices)));
         problems.attempt(() -> LayerSelection.check(config.outputs().layers(), choices(config, new int[] {0})));
         problems.throwIfAny();
-        DailyTemperatureSource source = opened.get(0);
+        DailyTemperatureSource source = config.scenario().isPresent()
+                ? ScenarioPlan.of(config.scenario().get(), opened.get(0), formats, operations, notices) : opened.get(0);
         if (config.temperature().maximum().isPresent() || config.temperature().mean().isPresent()) {
             notices.add("no model of this run needs the daily mean: maximum and mean temperatures are not read");
         }

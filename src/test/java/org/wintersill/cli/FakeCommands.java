@@ -20,6 +20,11 @@ final class FakeCommands implements Commands {
     }
 
     @Override
+    public void check(RunConfig given, boolean overwrite) {
+        config = given;
+    }
+
+    @Override
     public int plan(RunConfig given, PlanOptions options, Console console) {
         return done("plan", given, console);
     }

@@ -188,7 +188,7 @@ class ConfigReaderTest {
     @CsvSource(delimiter = '|', value = {
         "titel: x                                       | 3 | the key titel is not known. Did you mean title?",
         "outputs: {folders: x}                          | 3 | Did you mean folder?",
-        "scenario: {}                                   | 3 | not known to this version",
+        "scenario: {historical: tmin-1.nc}              | 3 | the key scenario.future is missing",
         "damage: {uncertainty: {model: 1}}              | 3 | the key damage.uncertainty is not known to this version",
         "damage: {nights: independent}                  | 3 | 'independent' is not known to this version",
         "damage: {nights: wurst}                        | 3 | Did you mean worst?",
