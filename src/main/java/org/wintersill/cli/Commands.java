@@ -29,4 +29,7 @@ public interface Commands {
 
     /** One cell, night by night. */
     int explain(RunConfig config, ExplainOptions options, Console console);
+
+    /** Cultivar files by themselves. */
+    int curves(CurvesOptions options, Console console);
 }

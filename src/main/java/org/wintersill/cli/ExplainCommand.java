@@ -77,9 +77,7 @@ final class ExplainCommand implements Callable<Integer>, Manners.Kept {
             throw Problem.usage(at == null ? "no place is given" : "--at and --at-lonlat are both given", "",
                     "Give either --at X,Y in the reference system of the outputs or --at-lonlat LON,LAT").asException();
         }
-        if (json && csv) {
-            throw Problem.usage("--json and --csv are both given", "", "Keep one of the two").asException();
-        }
+        ExplainOptions.Format format = ExplainOptions.Format.of(json, csv);
         Optional<Path> picture = Optional.ofNullable(chart).map(RunArguments::path);
         if (picture.isPresent() && winter == null) {
             throw Problem.usage("a chart shows one winter, and --winter is not given", "--chart", "Add for example --winter 2009-10")
@@ -87,8 +85,6 @@ final class ExplainCommand implements Callable<Integer>, Manners.Kept {
         }
         picture.ifPresent(file -> ChartFile.check(file, overwrite));
         Place place = at == null ? Place.lonLat(atLonLat) : Place.parse(at, "--at", "X,Y");
-        ExplainOptions.Format format = json ? ExplainOptions.Format.JSON
-                : csv ? ExplainOptions.Format.CSV : ExplainOptions.Format.TEXT;
         return new ExplainOptions(place.x(), place.y(), at == null, Optional.ofNullable(winter).map(ExplainCommand::label),
                 cultivars, format, picture, overwrite);
     }

@@ -3,6 +3,7 @@ package org.wintersill.cli;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
+import org.wintersill.problem.Problem;
 
 /**
  * What {@code explain} is asked beyond the configuration.
@@ -20,7 +21,17 @@ public record ExplainOptions(double x, double y, boolean lonLat, Optional<String
                              Format format, Optional<Path> chart, boolean overwrite) {
 
     /** Forms of the answer. */
-    public enum Format { TEXT, JSON, CSV }
+    public enum Format {
+        TEXT, JSON, CSV;
+
+        /** The form that two flags ask for; a problem where both are given. */
+        static Format of(boolean json, boolean csv) {
+            if (json && csv) {
+                throw Problem.usage("--json and --csv are both given", "", "Keep one of the two").asException();
+            }
+            return json ? JSON : csv ? CSV : TEXT;
+        }
+    }
 
     public ExplainOptions {
         cultivars = List.copyOf(cultivars);

@@ -29,6 +29,7 @@ import org.wintersill.run.PlanText;
 import org.wintersill.run.RunPlan;
 import org.wintersill.run.RunPlanner;
 import org.wintersill.run.RunReport;
+import org.wintersill.run.curve.CurveSet;
 
 /** The commands on the rooms behind them. */
 final class RunCommands implements Commands {
@@ -151,6 +152,21 @@ final class RunCommands implements Commands {
             case JSON -> ExplanationText.json(wanted);
             case CSV -> ExplanationText.csv(wanted);
             case TEXT -> ExplanationText.table(wanted, NIGHTS_SHOWN);
+        });
+        return ExitCode.DONE;
+    }
+
+    @Override
+    public int curves(CurvesOptions options, Console console) {
+        CurveSet curves = CurveSet.read(options.files(), options.cultivars(), options.window(), console.notices());
+        options.chart().ifPresent(file -> {
+            ChartFile.write(curves.chart(), file, options.overwrite());
+            console.message("The chart is " + file);
+        });
+        console.result(switch (options.format()) {
+            case JSON -> curves.json();
+            case CSV -> curves.csv();
+            case TEXT -> Console.clean(curves.table());
         });
         return ExitCode.DONE;
     }

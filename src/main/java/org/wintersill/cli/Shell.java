@@ -53,6 +53,7 @@ final class Shell {
         CommandLine line = new CommandLine(new WintersillCommand());
         line.addSubcommand(new MapCommand(session)).addSubcommand(new PlanCommand(session))
                 .addSubcommand(new InspectCommand(session)).addSubcommand(new ExplainCommand(session))
+                .addSubcommand(new CurvesCommand(session))
                 .addSubcommand(new ManualCommand(session));
         line.setExpandAtFiles(false).setAbbreviatedOptionsAllowed(false).setAbbreviatedSubcommandsAllowed(false)
                 .setInterpolateVariables(false).setColorScheme(CommandLine.Help.defaultColorScheme(Ansi.OFF))

@@ -9,6 +9,7 @@ final class FakeCommands implements Commands {
     RunConfig config;
     MapOptions mapOptions;
     ExplainOptions explainOptions;
+    CurvesOptions curvesOptions;
     InspectOptions inspectOptions;
     int answer;
     Consumer<Console> work = console -> { };
@@ -44,6 +45,12 @@ final class FakeCommands implements Commands {
     public int explain(RunConfig given, ExplainOptions options, Console console) {
         explainOptions = options;
         return done("explain", given, console);
+    }
+
+    @Override
+    public int curves(CurvesOptions options, Console console) {
+        curvesOptions = options;
+        return done("curves", null, console);
     }
 
     private int done(String name, RunConfig given, Console console) {

@@ -1,0 +1,95 @@
+package org.wintersill.cli;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.concurrent.Callable;
+import org.wintersill.io.chart.ChartFile;
+import org.wintersill.problem.Problem;
+import org.wintersill.time.MonthDay;
+import org.wintersill.time.SeasonWindow;
+import org.wintersill.time.SeasonWindow.Hemisphere;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
+
+/** {@code curves}: cultivar files by themselves. */
+@Command(name = "curves", header = "Check cultivar files, and show their curves as table or chart.",
+        description = {"Tells all problems of the files at once. Of what is sound it shows LT10, LT50 and LT90 by date, on the first and "
+                + "the fifteenth of each month; --csv and --json give every day."},
+        footerHeading = "%nExamples:%n",
+        footer = {"  wintersill curves sample-grids/cultivars.yaml",
+            "  wintersill curves sample-grids/cultivars.yaml --cultivar slate --csv > slate.csv",
+            "  wintersill curves sample-grids/cultivars.yaml --chart curves.svg"})
+final class CurvesCommand implements Callable<Integer>, Manners.Kept {
+    private final Session session;
+
+    @Parameters(arity = "0..*", paramLabel = "FILE", description = "Cultivar files.")
+    private List<String> files = new ArrayList<>();
+
+    @Option(names = "--cultivar", paramLabel = "ID", description = "One cultivar only. May be given several times.")
+    private List<String> cultivars = new ArrayList<>();
+
+    @Option(names = "--window", paramLabel = "FROM..TO", description = "First and last day of the winter, such as 09-01..05-31, which is "
+            + "the default; 03-01..11-30 with --south.")
+    private String window;
+
+    @Option(names = "--south", description = "The winter of the southern hemisphere.")
+    private boolean south;
+
+    @Option(names = "--csv", description = "Answer with a table of comma-separated values, a row a day.")
+    private boolean csv;
+
+    @Option(names = "--json", description = "Answer with one JSON document.")
+    private boolean json;
+
+    @Option(names = "--chart", paramLabel = "FILE", description = "Draw the curves into FILE.svg or FILE.png.")
+    private String chart;
+
+    @Option(names = "--overwrite", description = "Replace files of the same names.")
+    private boolean overwrite;
+
+    @Mixin
+    private Manners manners;
+
+    CurvesCommand(Session session) {
+        this.session = session;
+    }
+
+    @Override
+    public Manners manners() {
+        return manners;
+    }
+
+    @Override
+    public Integer call() {
+        return session.call(manners, console -> session.commands().curves(options(), console));
+    }
+
+    private CurvesOptions options() {
+        if (files.isEmpty()) {
+            throw Problem.usage("no cultivar file is given", "", "Name at least one, such as sample-grids/cultivars.yaml").asException();
+        }
+        Optional<java.nio.file.Path> picture = Optional.ofNullable(chart).map(RunArguments::path);
+        picture.ifPresent(file -> ChartFile.check(file, overwrite));
+        return new CurvesOptions(files.stream().map(RunArguments::path).toList(), cultivars, window(),
+                ExplainOptions.Format.of(json, csv), picture, overwrite);
+    }
+
+    private SeasonWindow window() {
+        SeasonWindow standard = SeasonWindow.of(south ? Hemisphere.SOUTH : Hemisphere.NORTH);
+        if (window == null) {
+            return standard;
+        }
+        String[] ends = window.split("\\.\\.", -1);
+        try {
+            MonthDay from = MonthDay.parse(ends[0]);
+            MonthDay to = MonthDay.parse(ends.length == 2 ? ends[1] : "");
+            return new SeasonWindow(from, to, from, to, standard.hemisphere());
+        } catch (IllegalArgumentException e) {
+            throw Problem.usage("'" + window + "' is no winter", "--window", "Write two days of the year, such as 09-01..05-31")
+                    .asException(e);
+        }
+    }
+}
