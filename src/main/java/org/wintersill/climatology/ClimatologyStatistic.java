@@ -8,6 +8,11 @@ public interface ClimatologyStatistic {
     /** What the number is and how it looks. */
     LayerDefinition layer();
 
+    /** Whether it belongs to the default layers, and the word that asks for it and its like. */
+    default LayerGroup group() {
+        return LayerGroup.DEFAULT;
+    }
+
     /**
      * Fills a run of cells.
      *

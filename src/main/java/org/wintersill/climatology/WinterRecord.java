@@ -1,5 +1,11 @@
 package org.wintersill.climatology;
 
+import java.util.HashMap;
+import java.util.Map;
+import java.util.Optional;
+import java.util.function.Supplier;
+import org.wintersill.damage.ToleranceCurve;
+
 /**
  * The values of all winters in some cells, for one cultivar. Arrays are {@code [winter][cell]}, NaN where a winter does not
  * count; winters in the order of time. Used by one thread.
@@ -10,6 +16,9 @@ public final class WinterRecord {
     private final float[][][] margins;
     private final float[][] damage;
     private final int cells;
+    private final long firstCell;
+    private final Optional<ToleranceCurve> tolerance;
+    private final Map<Object, Object> derived = new HashMap<>();
     private int[] counts;
     private final int[][] events;
 
@@ -19,19 +28,54 @@ public final class WinterRecord {
      * @param margins {@code [level][winter][cell]}, K; level 0 is LT50. Empty where only {@code minimum} is asked for
      * @param damage fraction of buds killed; empty where only {@code minimum} is asked for
      * @param cells number of cells
+     * @param firstCell number of the first cell in the grid, row-major
+     * @param tolerance form of the cultivar's tolerance curve; empty where only {@code minimum} is asked for
      */
-    public WinterRecord(int[] years, float[][] minimum, float[][][] margins, float[][] damage, int cells) {
+    public WinterRecord(int[] years, float[][] minimum, float[][][] margins, float[][] damage, int cells, long firstCell,
+                        Optional<ToleranceCurve> tolerance) {
         this.years = years;
         this.minimum = minimum;
         this.margins = margins;
         this.damage = damage;
         this.cells = cells;
+        this.firstCell = firstCell;
+        this.tolerance = tolerance;
         events = new int[margins.length][];
     }
 
     /** Number of winters of the run, whether they count at a cell or not. */
     public int winters() {
         return years.length;
+    }
+
+    /** Number of cells. */
+    public int cells() {
+        return cells;
+    }
+
+    /** Form of the tolerance curve; only where margins are. */
+    public ToleranceCurve tolerance() {
+        return tolerance.orElseThrow();
+    }
+
+    /** Number of the first cell in the grid, row-major: what random streams begin with. */
+    public long firstCell() {
+        return firstCell;
+    }
+
+    /**
+     * Something that several statistics need and that takes long, such as fits: made when first asked for, then kept.
+     *
+     * @param key what it is, with everything that it depends on
+     */
+    @SuppressWarnings("unchecked")
+    public <T> T derived(Object key, Supplier<T> maker) {
+        Object known = derived.get(key);
+        if (known == null) {
+            known = maker.get();
+            derived.put(key, known);
+        }
+        return (T) known;
     }
 
     /** Year in which each winter ends. */

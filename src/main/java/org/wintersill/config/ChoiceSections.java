@@ -10,7 +10,7 @@ import org.wintersill.io.yaml.YamlChecks;
 import org.wintersill.io.yaml.YamlSection;
 import org.wintersill.io.yaml.YamlValue;
 
-/** Reads {@code damage}, {@code statistics}, {@code classes} and {@code missing-days}. */
+/** Reads {@code damage}, {@code classes} and {@code missing-days}. */
 final class ChoiceSections {
     private static final List<String> MISSING_DAY_RULES = List.of("month-10-5", "month-5-3", "none");
     private static final List<Double> DEFAULT_CLASSES = List.of(0.05, 0.10, 0.20);
@@ -53,18 +53,6 @@ final class ChoiceSections {
             section.problem("levels", "the list is empty", "Give percents of organs killed, such as [10, 50, 90]");
         }
         return levels.stream().sorted().toList();
-    }
-
-    static StatisticsConfig statistics(YamlSection section, Map<String, Object> tree) {
-        double interval = section.number("interval", 0.5, 0.999, "from 0.5 to 0.999, such as 0.90").orElse(0.90);
-        String bounds = section.word("bounds", List.of("jeffreys", "wilson"), List.of()).orElse("jeffreys");
-        double target = section.number("target", 0, 0.999, "a frequency from 0 to below 1, such as 0.10").orElse(0.10);
-        section.later("extremes", "rule");
-        section.finish();
-        tree.put("interval", interval);
-        tree.put("bounds", bounds);
-        tree.put("target", target);
-        return new StatisticsConfig(interval, bounds, target);
     }
 
     static List<Double> classes(YamlSection top) {

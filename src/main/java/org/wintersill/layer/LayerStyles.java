@@ -113,6 +113,46 @@ public final class LayerStyles {
                 new double[] {-600, -300, -100, 0, 100, 300, 600}, LOWER_TO_HIGHER, v -> signed(v) + " m");
     }
 
+    /** Change of a temperature or margin over ten years: colder is warm, as danger is everywhere. */
+    public static LayerStyle.Ramp trend() {
+        return ramp("trend", "Trend (K in ten years)", new double[] {-3, -2, -1, -0.5, 0, 0.5, 1, 2, 3}, DANGER_TO_SAFETY,
+                v -> (v > 0 ? "+" : "") + (v == Math.rint(v) ? whole(v) : Double.toString(v)) + " K");
+    }
+
+    /** Shape of an extreme value distribution: negative is bounded, positive has a heavy tail. */
+    public static LayerStyle.Ramp shape() {
+        return ramp("shape", "Shape of the extremes", new double[] {-0.5, -0.3, -0.15, 0, 0.15, 0.3, 0.5}, LOWER_TO_HIGHER,
+                Double::toString);
+    }
+
+    /** Scale of a distribution in K. */
+    public static LayerStyle.Ramp spread() {
+        return ramp("spread", "Scale (K)", new double[] {0, 1, 2, 3, 4, 6, 8}, FEW_TO_MANY, v -> whole(v) + " K");
+    }
+
+    /** Correlation of a probability plot, with narrow steps where decisions are made. */
+    public static LayerStyle.Ramp fitCorrelation() {
+        return ramp("fit-correlation", "Correlation of the probability plot", new double[] {0.9, 0.93, 0.95, 0.965, 0.98, 0.99, 1}, SHARE,
+                Double::toString);
+    }
+
+    /** Where a fit should not be trusted, from 1 {@code sound} to 4 {@code poor}. */
+    public static LayerStyle.Classes fitFlag() {
+        return new LayerStyle.Classes("fit-flag", "Trust in the fit", List.of(
+                new LayerStyle.Entry(1, "sound", "no objection", Colour.hex("#1d4e89")),
+                new LayerStyle.Entry(2, "gumbel", "shape not believed, Gumbel instead", Colour.hex("#7fb6d6")),
+                new LayerStyle.Entry(3, "beyond-end", "beyond the lowest possible value", Colour.hex("#f0a94a")),
+                new LayerStyle.Entry(4, "poor", "poor fit", Colour.hex("#7a2018"))));
+    }
+
+    /** Trends beyond chance: 1 {@code colder}, 2 {@code unclear}, 3 {@code milder}. */
+    public static LayerStyle.Classes trendSignificance() {
+        return new LayerStyle.Classes("trend-significance", "Trend beyond chance", List.of(
+                new LayerStyle.Entry(1, "colder", "colder", Colour.hex("#7a2018")),
+                new LayerStyle.Entry(2, "unclear", "no clear trend", Colour.hex("#e6dfc8")),
+                new LayerStyle.Entry(3, "milder", "milder", Colour.hex("#1d4e89"))));
+    }
+
     /** Suitability from 1 {@code secure} to 4 {@code unfit}. */
     public static LayerStyle.Classes suitability() {
         return new LayerStyle.Classes("suitability", "Suitability", List.of(
@@ -145,7 +185,8 @@ public final class LayerStyles {
     /** One style of each kind, in a fixed order; styles made to measure stand here in their usual size. */
     public static List<LayerStyle> all() {
         return List.of(margin(), requiredHardiness(), probability(), damage(), share(), temperature(), night(), year(),
-                count(), returnPeriod(), heightChange(), suitability(), choice(6));
+                count(), returnPeriod(), heightChange(), trend(), shape(), spread(), fitCorrelation(), fitFlag(), trendSignificance(),
+                suitability(), choice(6));
     }
 
     private static LayerStyle.Ramp ramp(String id, String title, double[] values, String[] colours,

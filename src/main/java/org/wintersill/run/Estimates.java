@@ -43,8 +43,10 @@ final class Estimates {
     }
 
     /** Strips of tile rows of all layers of one cultivar. */
-    static long writerBytes(GridGeometry target, ClimatologyStatistics.Choices choices) {
-        int layers = ClimatologyStatistics.ofCultivar(choices).size();
+    static long writerBytes(GridGeometry target, ClimatologyStatistics.Choices choices, OutputConfig outputs) {
+        LayerSelection selection = new LayerSelection(outputs.layers());
+        int layers = Math.max(selection.made(ClimatologyStatistics.ofCultivar(choices)).size(),
+                selection.made(ClimatologyStatistics.shared(choices)).size());
         return (long) ((double) target.columns() * TILE_ROWS * 4 * layers * PYRAMID);
     }
 

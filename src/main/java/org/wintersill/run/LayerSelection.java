@@ -6,22 +6,43 @@ import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
 import org.wintersill.climatology.ClimatologyStatistic;
+import org.wintersill.climatology.LayerGroup;
 import org.wintersill.climatology.statistic.ClimatologyStatistics;
 import org.wintersill.problem.NearestName;
 import org.wintersill.problem.Problem;
 import org.wintersill.problem.Problems;
 
-/** Which layers a run writes: all, or those named under {@code outputs.layers}. */
+/** Which layers a run writes: the default ones, or those named under {@code outputs.layers}, by id or by the word of a group. */
 final class LayerSelection {
+    private static final String ALL = "all";
+
     private final Optional<Set<String>> wanted;
 
-    /** @param wanted layer ids; empty for all */
+    /** @param wanted layer ids and words of groups; empty for the default layers */
     LayerSelection(List<String> wanted) {
         this.wanted = wanted.isEmpty() ? Optional.empty() : Optional.of(Set.copyOf(wanted));
     }
 
+    /** Whether a layer is written that is one of the default layers. */
     boolean contains(String id) {
-        return wanted.isEmpty() || wanted.get().contains(id);
+        return wanted.isEmpty() || wanted.get().contains(id) || wanted.get().contains(ALL)
+                || wanted.get().contains(LayerGroup.DEFAULT.word());
+    }
+
+    boolean contains(ClimatologyStatistic statistic) {
+        return wanted.map(words -> words.contains(statistic.layer().id()) || words.contains(ALL)
+                || words.contains(statistic.group().word())).orElse(statistic.group() == LayerGroup.DEFAULT);
+    }
+
+    /** Those statistics that are written, and the default ones, which later steps rely on. */
+    List<ClimatologyStatistic> made(List<ClimatologyStatistic> statistics) {
+        return statistics.stream().filter(statistic -> statistic.group() == LayerGroup.DEFAULT || contains(statistic)).toList();
+    }
+
+    /** Whether layers are named that need a fitted distribution. */
+    static boolean asksForFits(List<String> wanted) {
+        return wanted.stream().anyMatch(word -> word.equals(ALL) || word.equals(LayerGroup.EXTREMES.word())
+                || word.matches("(return-level|lowest-possible|extreme|fit)-.*|return-period-killing.*|damage-mean-fitted"));
     }
 
     /**
@@ -47,6 +68,10 @@ final class LayerSelection {
         statistics.addAll(ClimatologyStatistics.shared(choices));
         Set<String> ids = new TreeSet<>();
         statistics.forEach(statistic -> ids.add(statistic.layer().id()));
+        for (LayerGroup group : LayerGroup.values()) {
+            ids.add(group.word());
+        }
+        ids.add(ALL);
         ids.addAll(WinterLayers.ids());
         ids.addAll(List.of(SharedLayers.CHOICE, SharedLayers.HEIGHT_CHANGE));
         return ids;

@@ -4,11 +4,16 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
 import org.wintersill.climatology.FrequencyInterval;
+import org.wintersill.climatology.extreme.ExtremeFit;
 import org.wintersill.climatology.statistic.ClimatologyStatistics;
+import org.wintersill.climatology.statistic.ExtremeChoices;
+import org.wintersill.climatology.statistic.HardinessRule;
 import org.wintersill.climatology.statistic.Suitability;
 import org.wintersill.config.RunConfig;
+import org.wintersill.config.StatisticsConfig;
 import org.wintersill.config.WinterConfig;
 import org.wintersill.engine.FoldJob;
 import org.wintersill.engine.FoldPlan;
@@ -52,7 +57,7 @@ public final class RunPlanner {
         List<DailyTemperatureSource> opened = new ArrayList<>();
         problems.attempt(() -> cultivars.addAll(new CultivarSelection(config.cultivars()).read(notices)));
         problems.attempt(() -> opened.add(formats.open(config.temperature().minimum(), notices)));
-        problems.attempt(() -> LayerSelection.check(config.outputs().layers(), choices(config, new int[] {0})));
+        problems.attempt(() -> LayerSelection.check(config.outputs().layers(), choices(config, new int[ExtremeFit.FEWEST_WINTERS])));
         problems.throwIfAny();
         DailyTemperatureSource source = config.scenario().isPresent()
                 ? ScenarioPlan.of(config.scenario().get(), opened.get(0), formats, operations, notices) : opened.get(0);
@@ -74,13 +79,13 @@ public final class RunPlanner {
         WinterSelection winters = WinterSelection.of(source.days(), window, policy);
         checkWinters(winters, source, sourceName);
         checkCoverage(cultivars, window, config);
-        tellOfWinters(winters, notices);
+        tellOfWinters(winters, config, notices);
         ClimatologyStatistics.Choices choices = choices(config, winters.used().stream().mapToInt(Season::year).toArray());
         FoldJob job = new FoldJob(source, targetPlan.window(), targetPlan.adjustment(), winters.used(), policy,
                 curves(cultivars, winters.used(), choices), choices.levels().length);
         int threads = config.limits().threads().orElse(Runtime.getRuntime().availableProcessors());
         long budget = Estimates.budget(config.limits());
-        long writers = Estimates.writerBytes(target, choices);
+        long writers = Estimates.writerBytes(target, choices, config.outputs());
         FoldPlan foldPlan = new FoldPlanner(job, threads, budget - Estimates.residentBytes(target, cultivars.size())).plan();
         if (writers > budget) {
             throw Problem.limit("writing the layers takes " + MemoryEstimate.text(writers)
@@ -101,13 +106,18 @@ public final class RunPlanner {
         }
     }
 
-    private static void tellOfWinters(WinterSelection winters, Notices notices) {
+    private static void tellOfWinters(WinterSelection winters, RunConfig config, Notices notices) {
         for (RunPlan.DroppedWinter dropped : winters.dropped()) {
             notices.add("winter " + dropped.label() + " is not used: " + dropped.reason());
         }
         int n = winters.used().size();
         if (n < Suitability.FEWEST_WINTERS) {
             notices.add("only " + n + " complete winters: too few for suitability classes");
+        }
+        boolean named = !List.of("auto", "none").contains(config.statistics().extremes());
+        if (n < ExtremeFit.FEWEST_WINTERS && (named || LayerSelection.asksForFits(config.outputs().layers()))) {
+            notices.add("only " + n + " complete winters: no extreme value distribution is fitted to fewer than "
+                    + ExtremeFit.FEWEST_WINTERS + ", so the layers of fits are left out");
         }
     }
 
@@ -145,7 +155,15 @@ public final class RunPlanner {
         }
         return new ClimatologyStatistics.Choices(levels.stream().mapToInt(Integer::intValue).toArray(), config.damage().killing(),
                 FrequencyInterval.named(config.statistics().bounds()).orElseThrow(), config.statistics().interval(),
-                config.statistics().target(), config.classes().stream().mapToDouble(Double::doubleValue).toArray(), years);
+                config.statistics().targets().stream().mapToDouble(Double::doubleValue).toArray(),
+                HardinessRule.named(config.statistics().rule()).orElseThrow(), extremes(config.statistics()), config.classes().stream().mapToDouble(Double::doubleValue).toArray(), years);
+    }
+
+    private static ExtremeChoices extremes(StatisticsConfig statistics) {
+        Optional<ExtremeFit.Method> method = ExtremeFit.Method.named(statistics.extremes());
+        return new ExtremeChoices(method, method.isPresent() && !statistics.extremes().equals("auto"),
+                statistics.returnPeriods().stream().mapToInt(Integer::intValue).toArray(), statistics.replicates(), statistics.seed(),
+                statistics.falseDiscovery());
     }
 
     private SeasonWindow window(WinterConfig config, GridGeometry target, Notices notices) {

@@ -6,10 +6,12 @@ import java.util.List;
 import java.util.Optional;
 import org.wintersill.climatology.ClimatologyStatistic;
 import org.wintersill.climatology.WinterRecord;
+import org.wintersill.climatology.extreme.FalseDiscovery;
 import org.wintersill.climatology.statistic.ClimatologyStatistics;
 import org.wintersill.climatology.statistic.DamageProbability;
 import org.wintersill.climatology.statistic.MarginLow;
 import org.wintersill.climatology.statistic.Suitability;
+import org.wintersill.climatology.statistic.TrendSignificance;
 import org.wintersill.engine.Progress;
 import org.wintersill.engine.WinterStore;
 import org.wintersill.engine.Workers;
@@ -35,6 +37,8 @@ final class SummaryPass {
     private final int rows;
     private final int columns;
     private final int levels;
+    private final List<ClimatologyStatistic> ofCultivar;
+    private final List<ClimatologyStatistic> ofAll;
     /** {@code [cultivar][cell]}: 1 to 4, 0 for missing. */
     private final byte[][] classes;
 
@@ -48,6 +52,8 @@ final class SummaryPass {
         rows = plan.target().rows();
         columns = plan.target().columns();
         levels = plan.job().levels();
+        ofCultivar = selection.made(ClimatologyStatistics.ofCultivar(plan.choices()));
+        ofAll = selection.made(ClimatologyStatistics.shared(plan.choices()));
         classes = new byte[plan.cultivars().size()][rows * columns];
     }
 
@@ -66,13 +72,12 @@ final class SummaryPass {
 
     /** Writes the summary layers of a cultivar. */
     void cultivar(int cultivar) {
-        List<ClimatologyStatistic> statistics = ClimatologyStatistics.ofCultivar(plan.choices());
-        write(statistics, Optional.of(cultivar));
+        write(ofCultivar, Optional.of(cultivar));
     }
 
     /** Writes the summary layers that belong to no cultivar. */
     void shared() {
-        write(ClimatologyStatistics.shared(plan.choices()), Optional.empty());
+        write(ofAll, Optional.empty());
     }
 
     private void write(List<ClimatologyStatistic> statistics, Optional<Integer> cultivar) {
@@ -81,7 +86,7 @@ final class SummaryPass {
             int stripRows = Math.min(rows, output.rowsAtOnce());
             for (ClimatologyStatistic statistic : statistics) {
                 LayerDefinition layer = statistic.layer();
-                Optional<RasterWriter> writer = selection.contains(layer.id())
+                Optional<RasterWriter> writer = selection.contains(statistic) && !(statistic instanceof TrendSignificance)
                         ? Optional.of(output.summary(layer, cultivar.map(plan.cultivars()::get))) : Optional.empty();
                 layers.add(new OpenLayer(statistic, writer, new float[stripRows * columns]));
             }
@@ -100,6 +105,42 @@ final class SummaryPass {
         } finally {
             layers.forEach(layer -> layer.writer().ifPresent(RasterWriter::close));
         }
+        statistics.stream().filter(selection::contains).filter(TrendSignificance.class::isInstance)
+                .forEach(statistic -> significance((TrendSignificance) statistic, cultivar));
+    }
+
+    private int trendPlane(Optional<Integer> cultivar) {
+        return extraPlanes(plan.cultivars().size()) + cultivar.orElse(plan.cultivars().size());
+    }
+
+    /** Writes where trends are significant, now that the p-values of the whole map are known. */
+    private void significance(TrendSignificance statistic, Optional<Integer> cultivar) {
+        int plane = trendPlane(cultivar);
+        double threshold = FalseDiscovery.threshold(bound -> count(plane, bound), count(plane, 1), statistic.falseDiscovery());
+        try (RasterWriter writer = output.summary(statistic.layer(), cultivar.map(plan.cultivars()::get))) {
+            int stripRows = Math.min(rows, output.rowsAtOnce());
+            for (int row = 0; row < rows; row += stripRows) {
+                int count = Math.min(stripRows, rows - row);
+                float[] values = store.readExtra(plane, row, count);
+                for (int i = 0; i < values.length; i++) {
+                    values[i] = TrendSignificance.classOf(values[i], threshold);
+                }
+                writer.write(0, row, count, values);
+                workers.checkCancelled();
+            }
+            writer.finish();
+        }
+    }
+
+    /** Number of cells whose value is not beyond a bound on either side of zero. */
+    private long count(int plane, double bound) {
+        long count = 0;
+        for (int row = 0; row < rows; row += TASK_ROWS) {
+            for (float value : store.readExtra(plane, row, Math.min(TASK_ROWS, rows - row))) {
+                count += Math.abs(value) <= bound ? 1 : 0;
+            }
+        }
+        return count;
     }
 
     private void fill(List<OpenLayer> layers, Optional<Integer> cultivar, int firstRow, int count) {
@@ -112,6 +153,9 @@ final class SummaryPass {
                 layer.statistic().summarise(record, out, 0, out.length);
                 System.arraycopy(out, 0, layer.strip(), (row - firstRow) * columns, out.length);
                 cultivar.ifPresent(number -> keep(number, layer.statistic(), row, out));
+                if (layer.statistic() instanceof TrendSignificance) {
+                    store.writeExtra(trendPlane(cultivar), row, out);
+                }
             }
         });
     }
@@ -145,7 +189,8 @@ final class SummaryPass {
             }
             damage[winter] = store.read(WinterValues.damagePlane(cultivar.get(), levels), winter, row, count);
         }
-        return new WinterRecord(plan.choices().years(), cultivar.isPresent() ? new float[0][] : minimum, margins, damage, count * columns);
+        return new WinterRecord(plan.choices().years(), cultivar.isPresent() ? new float[0][] : minimum, margins, damage, count * columns,
+                (long) row * columns, cultivar.map(number -> plan.cultivars().get(number).tolerance()));
     }
 
     /** Takes full-width rows of all summary layers of a cultivar. */
@@ -156,12 +201,12 @@ final class SummaryPass {
 
     /** The summary layers of a cultivar, in the order of {@link #eachRow}. */
     List<LayerDefinition> cultivarLayers() {
-        return ClimatologyStatistics.ofCultivar(plan.choices()).stream().map(ClimatologyStatistic::layer).toList();
+        return ofCultivar.stream().map(ClimatologyStatistic::layer).toList();
     }
 
     /** Gives the summaries of a cultivar once more, from the north, a few rows at a time. */
     void eachRow(int cultivar, RowTaker taker) {
-        List<ClimatologyStatistic> statistics = ClimatologyStatistics.ofCultivar(plan.choices());
+        List<ClimatologyStatistic> statistics = ofCultivar;
         for (int row = 0; row < rows; row += TASK_ROWS) {
             int count = Math.min(TASK_ROWS, rows - row);
             WinterRecord record = record(Optional.of(cultivar), row, count);
@@ -272,8 +317,7 @@ final class SummaryPass {
 
     /** Size of the whole pass in the unit of its progress. */
     long size(boolean winterLayers) {
-        long layers = (long) ClimatologyStatistics.ofCultivar(plan.choices()).size() * plan.cultivars().size()
-                + ClimatologyStatistics.shared(plan.choices()).size() + 3;
+        long layers = (long) ofCultivar.size() * plan.cultivars().size() + ofAll.size() + 3;
         long winters = winterLayers ? plan.seasons().size() * (1L + 3L * plan.cultivars().size()) : 0;
         return rows * (layers + winters);
     }

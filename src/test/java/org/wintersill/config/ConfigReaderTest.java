@@ -46,7 +46,8 @@ class ConfigReaderTest {
             missing-days: month-5-3
             cultivars: {files: [c.yaml], use: [slate, amber]}
             damage: {nights: worst, levels: [90, 20, 50], killing: 20}
-            statistics: {interval: 0.95, bounds: wilson, target: 0.2}
+            statistics: {interval: 0.95, bounds: wilson, target: [0.2, 0.05], rule: quantile, extremes: l-moments,
+              return-periods: [30, 20], bootstrap: {replicates: 99, seed: 7}, trend: {false-discovery: 0.05}}
             classes: [0.1, 0.2, 0.3]
             area: {bbox: [2600000, 1100000, 2700000, 1200000], polygons: {file: zones.gpkg, layer: inner, crs: EPSG:2056}}
             outputs: {folder: my out, layers: [margin-mean, suitability], winters: false, netcdf: true, geopackage: false, parts: true,
@@ -75,7 +76,7 @@ class ConfigReaderTest {
         assertEquals("month-10-5", config.missingDays());
         assertEquals(new CultivarConfig(List.of(folder.resolve("c.yaml")), List.of()), config.cultivars());
         assertEquals(new DamageConfig("worst", List.of(10, 50, 90), 50), config.damage());
-        assertEquals(new StatisticsConfig(0.90, "jeffreys", 0.10), config.statistics());
+        assertEquals(new StatisticsConfig(0.90, "jeffreys", List.of(0.10), "frequency", "auto", List.of(10, 50, 100), 200, 1, 0.10), config.statistics());
         assertEquals(List.of(0.05, 0.10, 0.20), config.classes());
         assertEquals(Optional.empty(), config.area());
         assertEquals(new OutputConfig(folder.resolve("out"), List.of(), true, false, true, false, false), config.outputs());
@@ -105,7 +106,7 @@ class ConfigReaderTest {
         assertEquals("month-5-3", config.missingDays());
         assertEquals(List.of("slate", "amber"), config.cultivars().use());
         assertEquals(new DamageConfig("worst", List.of(20, 50, 90), 20), config.damage());
-        assertEquals(new StatisticsConfig(0.95, "wilson", 0.2), config.statistics());
+        assertEquals(new StatisticsConfig(0.95, "wilson", List.of(0.2, 0.05), "quantile", "l-moments", List.of(20, 30), 99, 7, 0.05), config.statistics());
         assertEquals(List.of(0.1, 0.2, 0.3), config.classes());
         assertEquals(new AreaConfig(Optional.of(new Envelope(2600000, 1100000, 2700000, 1200000)), Optional.of(new PolygonEntry(folder.resolve("zones.gpkg"),
                 new PolygonRequest(Optional.of("inner"), Optional.empty(), Optional.empty(), Optional.of("EPSG:2056"))))), config.area().orElseThrow());
@@ -217,6 +218,13 @@ class ConfigReaderTest {
         "missing-days: {rul: none}                      | 3 | Did you mean rule?",
         "statistics: {interval: 90}                     | 3 | from 0.5 to 0.999",
         "statistics: {bounds: wald}                     | 3 | jeffreys, wilson",
+        "statistics: {extremes: gev}                    | 3 | auto, none, l-moments, maximum-likelihood",
+        "statistics: {rule: damage}                     | 3 | frequency, quantile, expected-damage",
+        "statistics: {target: [0.1, 0.1]}               | 3 | 0.1 is given twice",
+        "statistics: {target: [0, 0.1], rule: expected-damage} | 3 | above 0",
+        "statistics: {return-periods: [1, 10]}          | 3 | whole numbers from 2 to 1000",
+        "statistics: {bootstrap: {replicates: 5}}       | 3 | whole numbers from 20 to 10000",
+        "statistics: {trend: {false-discovery: 0}}      | 3 | from 0.001 to 0.5",
         "classes: [0.2, 0.1, 0.3]                       | 3 | does not ascend",
         "classes: [0.1, 0.2]                            | 3 | a list of 3 numbers is needed, found a list of 2",
         "area: {bbox: [3, 2, 1, 4]}                     | 3 | west must be less than east",

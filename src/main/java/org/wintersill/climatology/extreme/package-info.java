@@ -3,8 +3,8 @@
  * fits, intervals, tests of fit, trends (science section 6.2 and 10). Start with {@link org.wintersill.climatology.extreme.Gev}
  * and {@link org.wintersill.climatology.extreme.ExtremeFit}.
  *
- * <p><b>May depend on.</b> Commons Math for distributions, special functions and optimisers; nothing else of the program but its
- * own room.
+ * <p><b>May depend on.</b> Commons Math for distributions, special functions and optimisers; nothing else of the program but {@code damage} and
+ * its own room.
  *
  * <p><b>Conventions.</b> Distributions are those of <em>maxima</em>: lowest minima and margins come in negated, and what comes out
  * is negated back by {@link org.wintersill.climatology.extreme.LowExtreme}. Shape xi is positive for a heavy tail and negative for

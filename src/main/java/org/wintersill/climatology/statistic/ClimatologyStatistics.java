@@ -15,12 +15,20 @@ public final class ClimatologyStatistics {
      * @param killing percent that makes a killing winter, one of the levels
      * @param interval kind of bounds
      * @param confidence level of the bounds, 0..1
-     * @param target share of killing winters that is accepted
+     * @param targets shares of killing winters, or expected damages, that are accepted; the first decides
+     * @param rule how required hardiness is found
+     * @param extremes fits, replicates and trends
      * @param classes three limits of the frequency of killing winters, ascending
      * @param years year in which each winter of the run ends, ascending; never empty
      */
-    public record Choices(int[] levels, int killing, FrequencyInterval interval, double confidence, double target,
-                          double[] classes, int[] years) {
+    public record Choices(int[] levels, int killing, FrequencyInterval interval, double confidence, double[] targets,
+                          HardinessRule rule, ExtremeChoices extremes, double[] classes, int[] years) {
+
+        /** The share that decides. */
+        public double target() {
+            return targets[0];
+        }
+
 
         /** Position of the killing level. */
         public int killingLevel() {
@@ -36,7 +44,7 @@ public final class ClimatologyStatistics {
     private ClimatologyStatistics() {
     }
 
-    /** Layers of one cultivar. */
+    /** Layers of one cultivar, those that must be asked for included. */
     public static List<ClimatologyStatistic> ofCultivar(Choices choices) {
         double[][][] bounds = choices.interval().table(choices.years().length, choices.confidence());
         String words = (choices.interval() == FrequencyInterval.JEFFREYS ? "Jeffreys" : "Wilson") + ", "
@@ -55,13 +63,20 @@ public final class ClimatologyStatistics {
         }
         list.add(new KillingWinterReturn(choices.killing(), killing, false, bounds, words));
         list.add(new KillingWinterReturn(choices.killing(), killing, true, bounds, words));
-        list.add(new RequiredHardiness(killing, choices.target()));
+        for (int i = 0; i < choices.targets().length; i++) {
+            double target = choices.targets()[i];
+            list.add(new RequiredHardiness(i == 0 ? "required-hardiness" : RequiredHardiness.idAt(target), choices.rule(), killing,
+                    choices.levels(), target));
+        }
         list.add(new Suitability(killing, choices.classes()));
+        list.addAll(new RequestedStatistics(choices).ofCultivar());
         return list;
     }
 
-    /** Layers that belong to no cultivar. */
+    /** Layers that belong to no cultivar; likewise. */
     public static List<ClimatologyStatistic> shared(Choices choices) {
-        return List.of(new ValidWinters(choices.years().length), new MeanMinimum());
+        List<ClimatologyStatistic> list = new ArrayList<>(List.of(new ValidWinters(choices.years().length), new MeanMinimum()));
+        list.addAll(new RequestedStatistics(choices).shared());
+        return list;
     }
 }

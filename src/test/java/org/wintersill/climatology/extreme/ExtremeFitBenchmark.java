@@ -81,6 +81,6 @@ public class ExtremeFitBenchmark {
 
     @Benchmark
     public double expectedDamage() {
-        return FittedDamage.expected(fit(next()).gev(), 1.2, 1.5);
+        return FittedDamage.expected(fit(next()).gev(), org.wintersill.damage.ToleranceCurve.SPLIT_LOGISTIC, 1.2, 1.5);
     }
 }

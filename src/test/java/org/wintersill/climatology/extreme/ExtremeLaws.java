@@ -15,6 +15,7 @@ import net.jqwik.api.constraints.Size;
 import org.apache.commons.math3.analysis.integration.SimpsonIntegrator;
 import org.apache.commons.math3.distribution.ExponentialDistribution;
 import org.apache.commons.math3.stat.inference.KolmogorovSmirnovTest;
+import org.wintersill.damage.ToleranceCurve;
 
 class ExtremeLaws {
 
@@ -205,11 +206,12 @@ class ExtremeLaws {
             @ForAll @DoubleRange(min = 0.3, max = 8) double scale, @ForAll @DoubleRange(min = -15, max = 10) double location,
             @ForAll @DoubleRange(min = 0.2, max = 4) double warm, @ForAll @DoubleRange(min = 0.2, max = 4) double cold) {
         Gev gev = new Gev(location, scale, shape);
-        double expected = new SimpsonIntegrator(1e-9, 1e-9, 6, 24).integrate(20_000_000, w -> {
-            double margin = -(gev.shape() == 0 ? location + scale * w : location + scale * Math.expm1(gev.shape() * w) / gev.shape());
-            double killed = 1 / (1 + Math.exp(margin / (margin > 0 ? warm : cold)));
-            return killed * Math.exp(-w - Math.exp(-w));
-        }, -4, 30);
-        assertEquals(expected, FittedDamage.expected(gev, warm, cold), 2e-7);
+        for (ToleranceCurve curve : new ToleranceCurve[] {ToleranceCurve.SPLIT_LOGISTIC, ToleranceCurve.SPLIT_PROBIT}) {
+            double expected = new SimpsonIntegrator(1e-9, 1e-9, 6, 24).integrate(20_000_000, w -> {
+                double margin = -(gev.shape() == 0 ? location + scale * w : location + scale * Math.expm1(gev.shape() * w) / gev.shape());
+                return curve.fractionOfDeficit(-margin / (margin > 0 ? warm : cold)) * Math.exp(-w - Math.exp(-w));
+            }, -4, 30);
+            assertEquals(expected, FittedDamage.expected(gev, curve, warm, cold), 3e-7);
+        }
     }
 }

@@ -10,6 +10,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.wintersill.checks.CheckTables;
+import org.wintersill.damage.ToleranceCurve;
 
 /** Values: checks/gev.json, computed with R evd and scipy on published data, with the values of Coles 2001 beside them. */
 class GevCheckTest {
@@ -131,7 +132,7 @@ class GevCheckTest {
         example.get("T_year_low").fields().forEachRemaining(level -> assertEquals(level.getValue().asDouble(),
                 LowExtreme.returnLevel(gev, Double.parseDouble(level.getKey())), 1e-8));
         Gev margins = new Gev(18 - 23, 4, -0.15);
-        assertEquals(example.get("expected_damage").asDouble(), FittedDamage.expected(margins, 1.2, 1.2), 1e-8);
+        assertEquals(example.get("expected_damage").asDouble(), FittedDamage.expected(margins, ToleranceCurve.LOGISTIC, 1.2, 1.2), 1e-8);
     }
 
     @Test

@@ -10,6 +10,8 @@ import net.jqwik.api.constraints.DoubleRange;
 import net.jqwik.api.constraints.Size;
 import org.junit.jupiter.api.Test;
 import org.wintersill.checks.CheckTables;
+import org.wintersill.climatology.FrequencyInterval;
+import org.wintersill.damage.ToleranceCurve;
 
 /** Values: checks/required_hardiness.json, margins invented, shifts computed; the table clips at 0, the layer is signed. */
 class RequiredHardinessTest {
@@ -31,6 +33,54 @@ class RequiredHardinessTest {
             double target = value.get("k").asDouble() / n;
             assertEquals(value.get("d").asDouble(), Math.max(0, RequiredHardiness.of(margins(), n, target)), 1e-12);
         }
+    }
+
+    @Test
+    void shiftsOfTheQuantileRuleAreAsTabled() {
+        for (JsonNode value : CheckTables.json("required_hardiness.json").get("quantile_rule_type7")) {
+            assertEquals(value.get("d").asDouble(), RequiredHardiness.ofQuantile(margins(), 20, value.get("target").asDouble()), 1e-9);
+        }
+    }
+
+    @Test
+    void shiftsOfTheExpectedDamageRuleAreAsTabled() {
+        for (JsonNode value : CheckTables.json("required_hardiness.json").get("expected_damage_rule")) {
+            double[] spread = new double[20];
+            java.util.Arrays.fill(spread, value.get("s").asDouble());
+            assertEquals(value.get("d").asDouble(), RequiredHardiness.ofDamage(ToleranceCurve.LOGISTIC, margins(), spread, spread, 20,
+                    value.get("target").asDouble()), 1e-7);
+        }
+        assertEquals(0, RequiredHardiness.ofDamage(ToleranceCurve.LOGISTIC, margins(), filled(1.2), filled(1.2), 20,
+                CheckTables.json("required_hardiness.json").get("mean_damage_now").asDouble()), 1e-7);
+    }
+
+    private static double[] filled(double value) {
+        double[] values = new double[20];
+        java.util.Arrays.fill(values, value);
+        return values;
+    }
+
+    @Test
+    void boundsAreTheShiftsThatTheBoundsOfTheFrequencyAllow() {
+        double[] margins = margins();
+        int n = margins.length;
+        double[] bounds = new RequiredHardinessBound(0, 0.10, FrequencyInterval.JEFFREYS, 0.90, false).of(margins.clone(), n);
+        for (int step = -400; step <= 400; step++) {
+            double shift = step * 0.025 + 0.0031;
+            int killing = (int) java.util.Arrays.stream(margins).filter(m -> m + shift <= 0).count();
+            double[] frequency = FrequencyInterval.JEFFREYS.bounds(killing, n, 0.90);
+            boolean compatible = frequency[0] <= 0.10 && 0.10 <= frequency[1];
+            assertEquals(compatible, shift > bounds[0] && shift <= bounds[1], "shift " + shift + " of " + java.util.Arrays.toString(bounds));
+        }
+        double[] few = new RequiredHardinessBound(0, 0.10, FrequencyInterval.JEFFREYS, 0.90, false).of(margins.clone(), 12);
+        assertTrue(Double.isNaN(few[1]), "twelve winters do not bound the hardiness for one killing winter in ten");
+    }
+
+    @Test
+    void furtherTargetsAreNamedInPercent() {
+        assertEquals("required-hardiness-at-5", RequiredHardiness.idAt(0.05));
+        assertEquals("required-hardiness-at-2-5", RequiredHardiness.idAt(0.025));
+        assertEquals("required-hardiness-at-20", RequiredHardiness.idAt(0.2));
     }
 
     @Test

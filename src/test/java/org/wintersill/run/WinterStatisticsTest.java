@@ -1,0 +1,156 @@
+package org.wintersill.run;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Map;
+import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.wintersill.climatology.extreme.ExtremeFit;
+import org.wintersill.climatology.extreme.FitQuality;
+import org.wintersill.climatology.extreme.LowExtreme;
+import org.wintersill.climatology.extreme.ParametricBootstrap;
+import org.wintersill.climatology.extreme.RankTrend;
+import org.wintersill.time.CfCalendar;
+import org.wintersill.time.CfDate;
+
+/** Layers of fits, bounds and trends over 30 invented winters, against the estimators on the winters that the same run wrote. */
+class WinterStatisticsTest {
+    private static final String RUN = "temperature: {minimum: daily}\ncultivars: {files: cultivars.yaml, use: [oat]}\n"
+            + "statistics: {target: [0.1, 0.05], bootstrap: {replicates: 40, seed: 9}, return-periods: [20]}\n"
+            + "outputs: {layers: [%s], geopackage: false}\n";
+    @TempDir
+    static Path shared;
+    private static RunFolder run;
+
+    @BeforeAll
+    static void mapOnce() {
+        ColdRecord record = ColdRecord.made(3, 5, CfCalendar.STANDARD, new CfDate(1970, 8, 20), new CfDate(2000, 6, 10), false, 3)
+                .changed((day, cell, tenths) -> cell == 7 && day < 400 ? ColdRecord.MISSING : tenths + (cell % 5 == 0 ? day / 150 : 0));
+        run = RunFolder.of(shared, new RecordFile(record)).text("run.yaml", RUN.formatted("all")).map();
+    }
+
+    /** Values of a cell over the winters that count. */
+    private static double[] lows(String layer, int cell) {
+        RasterFile file = run.raster(layer);
+        return Arrays.stream(file.bands()).mapToDouble(band -> band[cell]).filter(v -> !Double.isNaN(v)).toArray();
+    }
+
+    private static float value(String layer, int cell) {
+        return run.raster(layer).band()[cell];
+    }
+
+    @Test
+    void fitsAreThoseOfTheWintersWritten() {
+        ParametricBootstrap bootstrap = new ParametricBootstrap(40, 9, 30);
+        for (int cell = 0; cell < 15; cell++) {
+            for (String field : new String[] {"minimum", "margin"}) {
+                String place = field.equals("minimum") ? "shared/" : "oat/";
+                double[] values = lows(place + "winters/" + field, cell);
+                int n = values.length;
+                assertEquals(cell == 7 ? 29 : 30, n);
+                LowExtreme.toSortedMaxima(values, n);
+                ExtremeFit fit = ExtremeFit.of(values, n, ExtremeFit.Method.L_MOMENTS);
+                String level = place + "return-level-" + field + "-20";
+                assertEquals(LowExtreme.returnLevel(fit.gev(), 20), value(level, cell), 1e-4);
+                double[] bounds = bootstrap.of(fit, n, cell, false).bounds(gev -> LowExtreme.returnLevel(gev, 20), 0.9);
+                assertEquals(bounds[0], value(level + "-lower", cell), 1e-4);
+                assertEquals(bounds[1], value(level + "-upper", cell), 1e-4);
+                assertTrue(bounds[0] < value(level, cell) && value(level, cell) < bounds[1]);
+                assertEquals(fit.gev().shape(), value(place + "extreme-shape-" + field, cell), 1e-6);
+                assertEquals(-fit.gev().location(), value(place + "extreme-location-" + field, cell), 1e-4);
+                assertEquals(FitQuality.plotCorrelation(values, n, fit.gev()), value(place + "fit-correlation-" + field, cell), 1e-6);
+                float lowest = value(place + "lowest-possible-" + field, cell);
+                assertEquals(fit.gev().shape() >= 0, Float.isNaN(lowest));
+                float flag = value(place + "fit-flag-" + field, cell);
+                assertTrue(flag >= 1 && flag <= 4);
+                assertTrue(flag == 3 || flag == 4 || !(lowest > -values[n - 1]));
+                assertTrue(value(place + "fit-test-" + field, cell) > 0.02);
+            }
+        }
+    }
+
+    @Test
+    void theFittedReturnPeriodLiesInItsBoundsAndNearTheCounts() {
+        int near = 0;
+        for (int cell = 0; cell < 15; cell++) {
+            float period = value("oat/return-period-killing", cell);
+            assertTrue(value("oat/return-period-killing-lower", cell) <= period);
+            float upper = value("oat/return-period-killing-upper", cell);
+            assertTrue(Float.isNaN(upper) || period <= upper);
+            float counted = value("oat/damage-probability-50", cell);
+            near += Math.abs(1 / period - counted) < 0.12 ? 1 : 0;
+            float fitted = value("oat/damage-mean-fitted", cell);
+            assertEquals(value("oat/damage-mean", cell), fitted, 0.05);
+            assertTrue(value("oat/damage-mean-lower", cell) < value("oat/damage-mean", cell));
+            assertTrue(value("oat/damage-mean", cell) < value("oat/damage-mean-upper", cell));
+            assertTrue(value("oat/required-hardiness-lower", cell) <= value("oat/required-hardiness", cell));
+            assertTrue(value("oat/required-hardiness", cell) <= value("oat/required-hardiness-upper", cell));
+            assertTrue(value("oat/required-hardiness", cell) <= value("oat/required-hardiness-at-5", cell));
+        }
+        assertTrue(near >= 13, near + " of 15 cells agree");
+    }
+
+    @Test
+    void trendsAreFoundWhereTheyWereMade() {
+        for (int cell = 0; cell < 15; cell++) {
+            double[] values = lows("shared/winters/minimum", cell);
+            int first = 30 - values.length;
+            double[] years = new double[values.length];
+            for (int i = 0; i < years.length; i++) {
+                years[i] = 1971 + first + i;
+            }
+            RankTrend trend = RankTrend.of(years, values, values.length);
+            assertEquals(10 * trend.slope(), value("shared/trend-minimum", cell), 1e-4);
+            assertEquals(trend.pValue(), value("shared/trend-minimum-test", cell), 1e-6);
+            boolean made = cell % 5 == 0;
+            assertEquals(made ? 3 : 2, value("shared/trend-minimum-significant", cell), "cell " + cell);
+            assertTrue(value("shared/trend-minimum-location", cell) > 0 || !made);
+            assertTrue(value("shared/trend-minimum-location-test", cell) < 0.01 || !made);
+        }
+    }
+
+    @Test
+    void threadsAndMemoryDoNotShow() {
+        run.map("--threads", "1", "--out", run.path("one").toString());
+        run.map("--threads", "3", "--memory", "64m", "--out", run.path("three").toString());
+        Map<String, byte[]> expected = RunFolder.files(run.path("out"));
+        assertEquals(List.of(), RunFolder.differing(expected, RunFolder.files(run.path("one"))));
+        assertEquals(List.of(), RunFolder.differing(expected, RunFolder.files(run.path("three"))));
+    }
+
+    @Test
+    void groupsAndTheDefaultLayersAreAskedForByWord() {
+        run.text("words.yaml", RUN.formatted("default, trends, return-level-minimum-20"));
+        Program.run("map", run.path("words.yaml").toString(), "--out", run.path("words").toString()).expect(0);
+        assertTrue(Files.exists(run.path("words/oat/damage-mean.tif")));
+        assertTrue(Files.exists(run.path("words/oat/trend-margin.tif")));
+        assertTrue(Files.exists(run.path("words/shared/return-level-minimum-20.tif")));
+        assertFalse(Files.exists(run.path("words/shared/return-level-minimum-20-lower.tif")));
+        Program.run("map", run.path("words.yaml").toString(), "--out", run.path("likely").toString(), "--set", "outputs.layers=default",
+                "--set", "statistics.extremes=maximum-likelihood").expect(0);
+        assertTrue(Files.exists(run.path("likely/oat/return-level-margin-20.tif")), "an estimator that is named makes its layers default ones");
+        Program.Ended none = Program.run("map", run.path("words.yaml").toString(), "--out", run.path("none").toString(), "--set",
+                "statistics.extremes=none").expect(2);
+        assertTrue(none.err().contains("return-level-minimum-20"), none.err());
+    }
+
+    @Test
+    void fewerThanTwentyWintersAreFittedToNothingAndTheRunSaysSo(@TempDir Path folder) {
+        RunFolder few = RunFolder.of(folder, new RecordFile(ColdRecord.threeWinters(2, 2)))
+                .text("run.yaml", RUN.formatted("default, extremes"));
+        Program.Ended ended = few.end();
+        ended.expect(0);
+        assertTrue(ended.err().contains("only 3 complete winters: no extreme value distribution"), ended.err());
+        List<String> fits = new ArrayList<>(RunFolder.files(folder.resolve("out")).keySet());
+        fits.removeIf(name -> !name.matches(".*(return-level|fit-).*"));
+        assertEquals(List.of(), fits);
+    }
+}
