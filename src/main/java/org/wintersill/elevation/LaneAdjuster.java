@@ -46,11 +46,62 @@ public final class LaneAdjuster {
                 interpolateRow(night, offset, (float) lapse, r, out, start);
                 mendRow(night, offset, lapse, r, out, start);
             } else {
-                interpolateCells(night, offset, (float) lapse, r, out, start);
+                interpolateCells(night, offset, (float) lapse, r, 0, row.length, out, start);
                 for (int column = 0; column < row.length; column++) {
                     mend(night, offset, lapse, r, column, out, start + column);
                 }
             }
+        }
+    }
+
+    /**
+     * Fills one tile; cell by cell the same arithmetic as {@link #adjust}, and the same values.
+     *
+     * @param out {@code [row of the tile * columns of the tile + column]}, degrees Celsius; positive infinity where there is no value
+     */
+    public void adjustTile(float[] night, int offset, double lapse, TargetTile tile, float[] out) {
+        int columns = tile.columns();
+        for (int r = 0; r < tile.rows(); r++) {
+            int targetRow = tile.firstRow() + r;
+            int start = r * columns;
+            if (positions.isSeparable()) {
+                interpolateTileRow(night, offset, (float) lapse, tile, targetRow, out, start);
+            } else {
+                interpolateCells(night, offset, (float) lapse, targetRow, tile.firstColumn(), columns, out, start);
+            }
+            for (int i = start; i < start + columns; i++) {
+                int column = tile.firstColumn() + i - start;
+                if (!tile.covered() && adjustment.containing(targetRow, column) < 0) {
+                    out[i] = Float.POSITIVE_INFINITY;
+                } else if (out[i] != out[i]) {
+                    mend(night, offset, lapse, targetRow, column, out, i);
+                }
+            }
+        }
+    }
+
+    private void interpolateTileRow(float[] night, int offset, float lapse, TargetTile tile, int targetRow, float[] out, int start) {
+        int north = positions.north(targetRow, 0);
+        if (north < 0) {
+            Arrays.fill(out, start, start + tile.columns(), Float.POSITIVE_INFINITY);
+            return;
+        }
+        int columns = positions.source().columns();
+        int upper = offset + north * columns;
+        int lower = positions.source().rows() > 1 ? upper + columns : upper;
+        float south = positions.southWeight(targetRow, 0);
+        for (int k = tile.sourceColumn(); k < tile.sourceColumn() + tile.sourceColumns(); k++) {
+            blended[k] = night[upper + k] + south * (night[lower + k] - night[upper + k]);
+        }
+        int[] west = positions.westByColumn();
+        float[] weight = positions.eastWeightByColumn();
+        float[] gain = adjustment.heightGain(targetRow);
+        int east = columns > 1 ? 1 : 0;
+        for (int i = 0; i < tile.columns(); i++) {
+            int column = tile.firstColumn() + i;
+            float near = blended[west[column]];
+            float value = near + weight[column] * (blended[west[column] + east] - near);
+            out[start + i] = gain == null ? value : value + lapse * gain[column];
         }
     }
 
@@ -111,17 +162,18 @@ public final class LaneAdjuster {
         }
     }
 
-    private void interpolateCells(float[] night, int offset, float lapse, int targetRow, float[] out, int start) {
+    private void interpolateCells(float[] night, int offset, float lapse, int targetRow, int firstColumn, int count, float[] out,
+                                  int start) {
         int columns = positions.source().columns();
         int east = columns > 1 ? 1 : 0;
         int below = positions.source().rows() > 1 ? columns : 0;
-        int targetColumns = positions.target().columns();
         float[] gain = adjustment.heightGain(targetRow);
-        for (int column = 0; column < targetColumns; column++) {
+        for (int i = 0; i < count; i++) {
+            int column = firstColumn + i;
             int west = positions.west(targetRow, column);
             int north = positions.north(targetRow, column);
             if (west < 0 || north < 0) {
-                out[start + column] = Float.NaN;
+                out[start + i] = Float.NaN;
                 continue;
             }
             int corner = offset + north * columns + west;
@@ -129,7 +181,7 @@ public final class LaneAdjuster {
             float upper = night[corner] + wx * (night[corner + east] - night[corner]);
             float lower = night[corner + below] + wx * (night[corner + below + east] - night[corner + below]);
             float value = upper + positions.southWeight(targetRow, column) * (lower - upper);
-            out[start + column] = gain == null ? value : value + lapse * gain[column];
+            out[start + i] = gain == null ? value : value + lapse * gain[column];
         }
     }
 

@@ -2,6 +2,7 @@ package org.wintersill.engine;
 
 import java.util.BitSet;
 import org.wintersill.elevation.LaneAdjuster;
+import org.wintersill.elevation.TargetTiles;
 import org.wintersill.engine.FoldPlan.Band;
 import org.wintersill.engine.FoldPlan.Batch;
 import org.wintersill.engine.FoldPlan.Piece;
@@ -27,6 +28,8 @@ final class BandFold implements AutoCloseable {
     private final boolean wholeWinters;
     private final int laneRows;
     private final int laneCount;
+    /** Null where the plain loop does the work. */
+    private final TiledFold tiled;
     private final WinterLane[] lanes;
     private final LaneAdjuster[] adjusters;
     private final float[][][] nights;
@@ -50,6 +53,8 @@ final class BandFold implements AutoCloseable {
         wholeWinters = plan.wholeWinters();
         laneRows = plan.laneRows();
         laneCount = (band.rowEnd() - band.row() + laneRows - 1) / laneRows;
+        tiled = plan.tiled() ? TargetTiles.of(job.adjustment(), band.row(), band.rowEnd())
+                .map(tiles -> new TiledFold(job, tiles, workers.threads(), wholeWinters)).orElse(null) : null;
         lanes = new WinterLane[wholeWinters ? workers.threads() : laneCount];
         adjusters = new LaneAdjuster[workers.threads()];
         nights = new float[workers.threads()][][];
@@ -68,10 +73,14 @@ final class BandFold implements AutoCloseable {
                 lastNight = -1;
             }
             count(batch, piece);
-            workers.forEach(laneCount, (worker, lane) -> {
-                fold(batch, piece, worker, lane);
-                progress.advance((long) piece.count() * rows(lane));
-            });
+            if (tiled != null) {
+                foldTiles(batch, piece);
+            } else {
+                workers.forEach(laneCount, (worker, lane) -> {
+                    fold(batch, piece, worker, lane);
+                    progress.advance((long) piece.count() * rows(lane));
+                });
+            }
         }
         long summer = batch.count() - batch.pieces().stream().mapToLong(Piece::count).sum();
         progress.advance(summer * (band.rowEnd() - band.row()));
@@ -102,6 +111,30 @@ final class BandFold implements AutoCloseable {
         lastNight = (int) (axis.day(piece.first() + piece.count() - 1) - season.firstDay());
     }
 
+    private void foldTiles(Batch batch, Piece piece) {
+        Season season = job.seasons().get(piece.season());
+        int[] nights = new int[piece.count()];
+        int[] offsets = new int[piece.count()];
+        for (int n = 0; n < nights.length; n++) {
+            nights[n] = (int) (job.source().days().day(piece.first() + n) - season.firstDay());
+            offsets[n] = offset(batch, piece.first() + n);
+        }
+        TiledFold.Nights days = new TiledFold.Nights(piece.season(), nights, slab, offsets, piece.opens(), piece.closes());
+        workers.forEach(tiled.rows(), (worker, row) -> {
+            int firstRow = tiled.firstRow(row);
+            WinterValues values = tiled.accept(worker, row, days, cell -> counts(firstRow, cell));
+            if (values != null) {
+                sink.accept(piece.season(), firstRow, values);
+            }
+            progress.advance((long) piece.count() * tiled.targetRows(row));
+        });
+    }
+
+    /** Where the window's source cell 0 would lie in the slab: a source cell's number counts from the window's first row, the slab from the band's. */
+    private int offset(Batch batch, int position) {
+        return (position - batch.first()) * reader.dayCells() - band.sourceRow() * job.window().columns();
+    }
+
     private int rows(int lane) {
         return Math.min(laneRows, band.rowEnd() - band.row() - lane * laneRows);
     }
@@ -124,10 +157,8 @@ final class BandFold implements AutoCloseable {
             int count = 0;
             while (position < end && count < WinterLane.STRETCH && axis.day(position) - season.firstDay() == first + count) {
                 double lapse = job.adjustment().lapseRates().ofMonth(season.date(first + count).month());
-                // A source cell's number counts from the window's first row, the slab from the band's.
-                int offset = (position - batch.first()) * reader.dayCells() - band.sourceRow() * job.window().columns();
                 positions[worker][count] = first + count;
-                adjusters[worker].adjust(slab, offset, lapse, firstRow, rows, nights[worker][count]);
+                adjusters[worker].adjust(slab, offset(batch, position), lapse, firstRow, rows, nights[worker][count]);
                 position++;
                 count++;
             }

@@ -10,10 +10,17 @@ import java.util.List;
  * @param laneRows target rows a lane
  * @param threads number of workers
  * @param wholeWinters whether every winter lies in one batch, so that lanes need not be kept between batches
+ * @param tiled whether target rows are folded tile by tile over the nights that matter, where they are fine enough; the same values
+ *     as over all nights
  * @param memory what it will take
  */
 public record FoldPlan(List<Band> bands, List<Batch> batches, int laneRows, int threads, boolean wholeWinters,
-                       MemoryEstimate memory) {
+                       boolean tiled, MemoryEstimate memory) {
+
+    /** The same plan, folded over every night: the reference that tiles are held to. */
+    FoldPlan plain() {
+        return new FoldPlan(bands, batches, laneRows, threads, wholeWinters, false, memory);
+    }
 
     /**
      * Target rows worked on from the first day to the last, and the rows of the source window that they need.

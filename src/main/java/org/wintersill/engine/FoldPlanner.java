@@ -3,6 +3,7 @@ package org.wintersill.engine;
 import java.util.ArrayList;
 import java.util.List;
 import org.wintersill.elevation.SourcePositions;
+import org.wintersill.elevation.TargetTiles;
 import org.wintersill.engine.FoldPlan.Band;
 import org.wintersill.engine.FoldPlan.Batch;
 import org.wintersill.engine.FoldPlan.Piece;
@@ -86,22 +87,27 @@ public final class FoldPlanner {
         int sourceRows = bands.stream().mapToInt(band -> band.sourceEnd() - band.sourceRow()).max().orElse(0);
         long sourceCells = (long) sourceRows * job.window().columns();
         int batchDays = batches.stream().mapToInt(Batch::count).max().orElse(0);
-        long laneCells = (long) laneRows * columns;
-        long kept = whole ? threads * laneCells : (long) bandRows * columns;
+        // State models see every night of every cell.
+        boolean tiled = job.states().isNone() && TargetTiles.mayGain(job.adjustment());
+        long laneCells = (long) (tiled ? Math.max(laneRows, TargetTiles.mostRows(columns)) : laneRows) * columns;
+        long kept = whole ? (long) threads * laneRows * columns : (long) bandRows * columns;
         long values = FLOAT * WinterValues.planes(job.cultivars(), job.levels());
         MemoryEstimate memory = new MemoryEstimate()
                 .add(TARGET, positionBytes())
                 .add(SLAB, batchDays * sourceCells * FLOAT)
                 .add("missing days of source cells", 5 * sourceCells)
                 .add("running values of the winter", kept * WinterLane.bytesPerCell(job.cultivars(), job.levels()))
-                .add("room of the workers", threads * laneCells * (WinterLane.STRETCH * FLOAT + 2 * values));
+                .add("room of the workers", threads * (laneCells * 2 * values + (long) laneRows * columns * WinterLane.STRETCH * FLOAT));
         if (job.states().hasSecond()) {
             memory.add("days of maxima or means in memory", batchDays * sourceCells * FLOAT);
         }
         if (!job.states().isNone()) {
             memory.add("states of the cultivars", kept * StateLane.bytesPerCell(job.states().cultivars()));
         }
-        return new FoldPlan(bands, batches, laneRows, threads, whole, memory);
+        if (tiled) {
+            memory.add("bounds of the nights", threads * TiledFold.bytesOfBounds(longestSeason(), columns));
+        }
+        return new FoldPlan(bands, batches, laneRows, threads, whole, tiled, memory);
     }
 
     private long positionBytes() {

@@ -1,5 +1,7 @@
 package org.wintersill.season;
 
+import java.util.ArrayList;
+import java.util.List;
 import org.wintersill.damage.ToleranceCurve;
 import org.wintersill.hardiness.LethalTemperatures;
 
@@ -40,5 +42,25 @@ public record NightCurve(ToleranceCurve tolerance, double[] levels, float[][] le
             cold[night] = (float) (1 / tolerance.coldSpread(lt50, lt90));
         }
         return new NightCurve(tolerance, levels, lethal, warm, cold);
+    }
+
+    /**
+     * One quantity that falls with temperature and whose lowest value over the winter is kept: (T - reference) * factor.
+     *
+     * @param reference {@code [night]}, degrees Celsius
+     * @param factor {@code [night]}, positive; null for 1
+     */
+    public record Measure(float[] reference, float[] factor) {
+    }
+
+    /** All that {@link WinterAccumulator} keeps the lowest value of. A night that lowers none of them need not be looked at. */
+    public List<Measure> measures() {
+        List<Measure> measures = new ArrayList<>();
+        for (float[] temperatures : lethal) {
+            measures.add(new Measure(temperatures, null));
+        }
+        measures.add(new Measure(lethal[0], warmInverse));
+        measures.add(new Measure(lethal[0], coldInverse));
+        return measures;
     }
 }

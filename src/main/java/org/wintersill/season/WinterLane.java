@@ -60,12 +60,22 @@ public final class WinterLane {
      * @param positions {@code [night of the stretch]}, position in the window, ascending
      */
     public void accept(NightCurve[] curves, float[][] nights, int count, int[] positions) {
-        LowestValues.ofDifference(nights, count, NO_REFERENCE, ANY_POSITION, minimum, cells);
+        acceptMinimum(nights, count);
         for (int c = 0; c < cultivars.length; c++) {
             if (curves[c] != null) {
-                cultivars[c].accept(curves[c], nights, count, positions, before, reached);
+                accept(c, curves[c], nights, count, positions);
             }
         }
+    }
+
+    /** Takes nights for the lowest minimum alone. */
+    public void acceptMinimum(float[][] nights, int count) {
+        LowestValues.ofDifference(nights, count, NO_REFERENCE, ANY_POSITION, minimum, cells);
+    }
+
+    /** Takes nights for one cultivar alone. */
+    public void accept(int cultivar, NightCurve curve, float[][] nights, int count, int[] positions) {
+        cultivars[cultivar].accept(curve, nights, count, positions, before, reached);
     }
 
     /**

@@ -9,8 +9,12 @@ public final class WinterValues {
     private final float[][] planes;
 
     WinterValues(int cultivars, int levels, int cells) {
+        this(levels, new float[planes(cultivars, levels)][cells]);
+    }
+
+    private WinterValues(int levels, float[][] planes) {
         this.levels = levels;
-        planes = new float[planes(cultivars, levels)][cells];
+        this.planes = planes;
     }
 
     /** Number of planes: the minimum, and for each cultivar a margin a level, the damage and the worst night. */
@@ -34,6 +38,26 @@ public final class WinterValues {
 
     public static int worstNightPlane(int cultivar, int levels) {
         return marginPlane(cultivar, levels + 1, levels);
+    }
+
+    /** Empty values of as many planes as these, for another number of cells. */
+    public WinterValues room(int cells) {
+        return new WinterValues(levels, new float[planes.length][cells]);
+    }
+
+    /**
+     * Puts the values of a block of cells in their place among wider rows.
+     *
+     * @param block values of {@code rows * columns} cells, row by row
+     * @param first place of the block's first cell among these
+     * @param rowLength cells of a row of these
+     */
+    public void put(WinterValues block, int rows, int columns, int first, int rowLength) {
+        for (int plane = 0; plane < planes.length; plane++) {
+            for (int row = 0; row < rows; row++) {
+                System.arraycopy(block.planes[plane], row * columns, planes[plane], first + row * rowLength, columns);
+            }
+        }
     }
 
     public int planeCount() {
