@@ -8,6 +8,7 @@ import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.OptionalLong;
 import java.util.Set;
+import org.wintersill.io.cultivar.BuiltInCultivars;
 import org.wintersill.io.yaml.YamlChecks;
 import org.wintersill.io.yaml.YamlSection;
 import org.wintersill.io.yaml.YamlValue;
@@ -17,6 +18,7 @@ final class OutputSections {
     private static final String AUTO = "auto";
     private static final int MOST_THREADS = 1024;
     private static final String NAME_FORM = "[a-z0-9]+(-[a-z0-9]+)*";
+    private static final String CULTIVAR_FORM = "(" + BuiltInCultivars.PREFIX + ")?" + NAME_FORM;
 
     private OutputSections() {
     }
@@ -26,13 +28,17 @@ final class OutputSections {
                 : YamlValue.Mapping.empty(value.place()).with("files", value, value.place());
         YamlSection section = new YamlSection(mapping, "cultivars", checks);
         String key = value == mapping ? section.path("files") : "cultivars";
-        InputFinder.Files files = section.required("files", "Name a cultivar file")
-                .map(given -> finder.files(given, key, Set.of(".yaml", ".yml"), false))
-                .orElse(new InputFinder.Files(List.of(), List.of()));
         List<String> use = section.value("use").filter(given -> !isWord(given, "all")).map(given -> ChoiceSections.names(given,
-                section.path("use"), checks, NAME_FORM, "a cultivar id: lower-case letters, digits and hyphens")).orElse(List.of());
+                section.path("use"), checks, CULTIVAR_FORM, "a cultivar id: lower-case letters, digits and hyphens, after built-in: for those "
+                + "that come with the program")).orElse(List.of());
+        boolean allBuiltIn = !use.isEmpty() && use.stream().allMatch(id -> id.startsWith(BuiltInCultivars.PREFIX));
+        Optional<YamlValue> named = allBuiltIn ? section.value("files") : section.required("files", "Name a cultivar file");
+        InputFinder.Files files = named.map(given -> finder.files(given, key, Set.of(".yaml", ".yml"), false))
+                .orElse(new InputFinder.Files(List.of(), List.of()));
         section.finish();
-        tree.put("files", files.tree());
+        if (!files.given().isEmpty()) {
+            tree.put("files", files.tree());
+        }
         tree.put("use", use.isEmpty() ? "all" : use);
         return new CultivarConfig(files.files(), use);
     }

@@ -204,7 +204,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             float tmin = temperatures.tmin()[n];
             nights.add(new Night(season.date(n).toString(), temperatures.source()[n], temperatures.interpolated()[n],
                     plan.adjustment().lapseRates().ofMonth(season.date(n).month()), tmin, lt10, lt50, lt90,
-                    tmin - curve.lethal()[0][n], cultivar.tolerance().killedFraction(tmin, lt10, lt50, lt90)));
+                    Double.isNaN(lt50) ? Float.NaN : tmin - curve.lethal()[0][n], cultivar.tolerance().killedFraction(tmin, lt10, lt50, lt90)));
         }
         return nights;
     }

@@ -11,9 +11,9 @@ import org.wintersill.hardiness.LethalTemperatures;
  *
  * @param tolerance form of the curve through the lethal temperatures
  * @param levels percent of buds of each level; the first is 50
- * @param lethal {@code [level][night]}, degrees Celsius
- * @param warmInverse {@code [night]}, 1 / spread of the warm side, per K
- * @param coldInverse {@code [night]}, 1 / spread of the cold side, per K
+ * @param lethal {@code [level][night]}, degrees Celsius; negative infinity on nights of which the model says nothing
+ * @param warmInverse {@code [night]}, 1 / spread of the warm side, per K; 1 on such nights
+ * @param coldInverse {@code [night]}, 1 / spread of the cold side, per K; 1 on such nights
  */
 public record NightCurve(ToleranceCurve tolerance, double[] levels, float[][] lethal, float[] warmInverse, float[] coldInverse) {
 
@@ -32,6 +32,10 @@ public record NightCurve(ToleranceCurve tolerance, double[] levels, float[][] le
         float[] warm = new float[nights];
         float[] cold = new float[nights];
         for (int night = 0; night < nights; night++) {
+            if (Double.isNaN(course.lt50()[night])) {
+                silence(lethal, warm, cold, night);
+                continue;
+            }
             double lt10 = course.lt10()[night];
             double lt50 = course.lt50()[night];
             double lt90 = course.lt90()[night];
@@ -62,5 +66,14 @@ public record NightCurve(ToleranceCurve tolerance, double[] levels, float[][] le
         measures.add(new Measure(lethal[0], warmInverse));
         measures.add(new Measure(lethal[0], coldInverse));
         return measures;
+    }
+
+    /** A night without hardiness: its margin is positive infinity, which never is the lowest. */
+    private static void silence(float[][] lethal, float[] warm, float[] cold, int night) {
+        for (float[] level : lethal) {
+            level[night] = Float.NEGATIVE_INFINITY;
+        }
+        warm[night] = 1;
+        cold[night] = 1;
     }
 }

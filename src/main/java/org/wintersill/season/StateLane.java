@@ -29,6 +29,8 @@ public final class StateLane {
     private final boolean[] anyBroken;
     private final Witness witness;
     private Season season;
+    /** Whether the record of this winter has begun. */
+    private boolean begun;
     private int earliest;
     private int latest;
 
@@ -83,7 +85,7 @@ public final class StateLane {
 
     /** First day that any of the cultivars takes, as a position in the window; at most 0, since the nights begin there. */
     public static int firstDay(List<StateCultivar> cultivars, Season season) {
-        return cultivars.stream().mapToInt(cultivar -> cultivar.model().firstDay(season)).reduce(0, Math::min);
+        return cultivars.stream().mapToInt(cultivar -> cultivar.model().earliestDay(season)).reduce(0, Math::min);
     }
 
     /**
@@ -95,8 +97,9 @@ public final class StateLane {
         season = winter;
         earliest = firstDay(cultivars, winter);
         latest = earliest - 1;
+        begun = false;
         for (int c = 0; c < values.length; c++) {
-            firstDays[c] = cultivars.get(c).model().firstDay(winter);
+            firstDays[c] = cultivars.get(c).model().earliestDay(winter);
             states[c] = cultivars.get(c).model().begin(winter, latitudes);
             values[c].begin();
             Arrays.fill(broken[c], false);
@@ -127,6 +130,7 @@ public final class StateLane {
     /** The room for the next day was filled. */
     public void accept() {
         latest++;
+        begun = true;
         ring.complete(latest);
         follow(latest - MeanRing.LONGEST_GAP);
     }
@@ -134,8 +138,18 @@ public final class StateLane {
     /** The next day has no record. */
     public void absent() {
         latest++;
+        if (!begun) {
+            beginAfter(latest);
+        }
         ring.absent(latest);
         follow(latest - MeanRing.LONGEST_GAP);
+    }
+
+    /** A record that begins after the earliest day that a model can use, but not after the one that it must have, is taken from there. */
+    private void beginAfter(int day) {
+        for (int c = 0; c < firstDays.length; c++) {
+            firstDays[c] = Math.max(firstDays[c], Math.min(day + 1, cultivars.get(c).model().firstDay(season)));
+        }
     }
 
     private void follow(int day) {

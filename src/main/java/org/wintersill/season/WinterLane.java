@@ -91,11 +91,12 @@ public final class WinterLane {
             values.minimum()[i] = valid ? minimum[i] : Float.NaN;
             for (int c = 0; c < cultivars.length; c++) {
                 WinterAccumulator cultivar = cultivars[c];
+                boolean known = valid && cultivar.worstNight(i) >= 0;
                 for (int level = 0; level < levels; level++) {
-                    values.margin(c, level)[i] = valid ? cultivar.margin(level, i) : Float.NaN;
+                    values.margin(c, level)[i] = known ? cultivar.margin(level, i) : Float.NaN;
                 }
-                values.damage(c)[i] = valid ? (float) cultivar.damage(i) : Float.NaN;
-                values.worstNight(c)[i] = valid ? cultivar.worstNight(i) : Float.NaN;
+                values.damage(c)[i] = known ? (float) cultivar.damage(i) : Float.NaN;
+                values.worstNight(c)[i] = known ? cultivar.worstNight(i) : Float.NaN;
             }
         }
         return values;

@@ -26,7 +26,8 @@ import org.wintersill.problem.Problems;
  * Reads a cultivar file: a list of entries, bare or under the key {@code cultivars}.
  *
  * <p>An entry has {@code id}, {@code name}, {@code species}, {@code organ}, {@code model}, {@code source}, {@code status}, {@code tolerance}
- * (the form of the tolerance curve) and the parameters of its model. Id, model, source and status must be there.
+ * (the form of the tolerance curve), {@code variants} and the parameters of its model. Id, model, source and status must be there. An
+ * entry with {@code built-in} stands on a cultivar of {@link BuiltInCultivars}.
  */
 public final class CultivarFile {
     /** Names that Windows keeps for devices. */
@@ -39,6 +40,7 @@ public final class CultivarFile {
     private final Notices notices;
     private final Problems problems = new Problems();
     private final YamlChecks checks = new YamlChecks(Problem.Kind.INPUT, problems);
+    private final BuiltInReference builtIn = new BuiltInReference(checks);
     private final Map<String, String> places = new HashMap<>();
 
     private CultivarFile(String file, Notices notices) {
@@ -55,6 +57,24 @@ public final class CultivarFile {
     public static List<Cultivar> read(Path file, Notices notices) {
         YamlValue tree = new YamlReader(Problem.Kind.INPUT).read(file);
         return new CultivarFile(file.toString(), notices).cultivars(tree);
+    }
+
+    /**
+     * A cultivar that comes with the program.
+     *
+     * @param where what asked for it, such as {@code cultivars.use}
+     * @throws org.wintersill.problem.ProblemException when there is none of that id, or it needs more than the program knows
+     */
+    public static Cultivar builtIn(String id, String where, Notices notices) {
+        YamlValue.Mapping entry = BuiltInCultivars.mappings().get(id);
+        if (entry == null) {
+            throw Problem.usage("there is no built-in cultivar " + id, where, BuiltInCultivars.remedy(id)).asException();
+        }
+        if (BuiltInCultivars.list().stream().anyMatch(known -> known.id().equals(id) && !known.complete())) {
+            throw Problem.usage("the built-in cultivar " + id + " has bud stages without dates", where, "Write a cultivar file with an entry "
+                    + "built-in: " + id + " and dates: {full bloom: 04-12, ...} or degree-days: {base: 5, at: {full bloom: 250, ...}}").asException();
+        }
+        return new CultivarFile("built-in " + id, notices).cultivars(new YamlValue.Sequence(List.of(entry), entry.place())).get(0);
     }
 
     /**
@@ -86,7 +106,7 @@ public final class CultivarFile {
         List<Cultivar> cultivars = new ArrayList<>();
         List<YamlValue> entries = entries(tree);
         for (YamlValue entry : entries) {
-            cultivar(YamlSection.of(entry, "", checks)).ifPresent(cultivars::add);
+            cultivar(YamlSection.of(builtIn.writtenOut(entry), "", checks)).ifPresent(cultivars::add);
         }
         if (entries.isEmpty() && problems.isEmpty()) {
             problems.add(Problem.input("the file has no cultivar", file, "Write a list of cultivars under the key cultivars"));
