@@ -59,16 +59,4 @@ public enum FrequencyInterval {
      * @param level 0..1, such as 0.90
      */
     public abstract double[] bounds(double k, int n, double level);
-
-    /** The bounds for every whole k and n up to a number of winters: {@code [n][k]} gives lower and upper; n from 1. */
-    public double[][][] table(int winters, double level) {
-        double[][][] table = new double[winters + 1][][];
-        for (int n = 1; n <= winters; n++) {
-            table[n] = new double[n + 1][];
-            for (int k = 0; k <= n; k++) {
-                table[n][k] = bounds(k, n, level);
-            }
-        }
-        return table;
-    }
 }

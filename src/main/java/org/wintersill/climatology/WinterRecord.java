@@ -5,6 +5,8 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.function.Supplier;
 import org.wintersill.damage.ToleranceCurve;
+import org.wintersill.damage.Uncertainty;
+import org.wintersill.season.DamageReckoning;
 
 /**
  * The values of all winters in some cells, for one cultivar. Arrays are {@code [winter][cell]}, NaN where a winter does not
@@ -19,8 +21,20 @@ public final class WinterRecord {
     private final long firstCell;
     private final Optional<ToleranceCurve> tolerance;
     private final Map<Object, Object> derived = new HashMap<>();
+    private final Details details;
     private int[] counts;
-    private final int[][] events;
+    private final double[][] events;
+
+    /**
+     * What is kept besides margins and damage.
+     *
+     * @param reckoning how damage was reckoned
+     * @param levels percent of buds of each level
+     * @param expectedDamage {@code [winter][cell]}, expected fraction killed with uncertainty; empty where nothing is uncertain
+     * @param damageAt {@code [phase end][winter][cell]}, fraction killed when autumn (0) and midwinter (1) ended; empty where not kept
+     */
+    public record Details(DamageReckoning reckoning, int[] levels, float[][] expectedDamage, float[][][] damageAt) {
+    }
 
     /**
      * @param years year in which each winter ends
@@ -32,7 +46,7 @@ public final class WinterRecord {
      * @param tolerance form of the cultivar's tolerance curve; empty where only {@code minimum} is asked for
      */
     public WinterRecord(int[] years, float[][] minimum, float[][][] margins, float[][] damage, int cells, long firstCell,
-                        Optional<ToleranceCurve> tolerance) {
+                        Optional<ToleranceCurve> tolerance, Details details) {
         this.years = years;
         this.minimum = minimum;
         this.margins = margins;
@@ -40,7 +54,8 @@ public final class WinterRecord {
         this.cells = cells;
         this.firstCell = firstCell;
         this.tolerance = tolerance;
-        events = new int[margins.length][];
+        this.details = details;
+        events = new double[margins.length][];
     }
 
     /** Number of winters of the run, whether they count at a cell or not. */
@@ -98,6 +113,16 @@ public final class WinterRecord {
         return damage;
     }
 
+    /** Expected fraction of buds killed, {@code [winter][cell]}: with the uncertainty of the margin where there is any. */
+    public float[][] expectedDamage() {
+        return details.reckoning().keepsExpected() ? details.expectedDamage() : damage;
+    }
+
+    /** Fraction of buds killed when autumn (0) or midwinter (1) ended, {@code [winter][cell]}. */
+    public float[][] damageAt(int phaseEnd) {
+        return details.damageAt()[phaseEnd];
+    }
+
     /** Number of winters that count at each cell, by the margins where there are any. */
     public int[] counts() {
         if (counts == null) {
@@ -112,19 +137,39 @@ public final class WinterRecord {
     }
 
     /**
-     * Number of winters at each cell whose margin to the lethal temperature of a level is not above zero, so that the level's share
-     * of buds died; a margin of exactly zero is such a winter.
+     * Number of winters at each cell that kill at least a level's share of the buds; where margins are uncertain, the sum of their
+     * probabilities (science 16.4). Where the worst night decides, such a winter is one whose margin to the lethal temperature of the
+     * level is not above zero; where nights are joined, one whose damage is not below the share.
      */
-    public int[] events(int level) {
+    public double[] events(int level) {
         if (events[level] == null) {
-            events[level] = new int[cells];
-            for (float[] winter : margins[level]) {
-                for (int cell = 0; cell < cells; cell++) {
-                    events[level][cell] += winter[cell] <= 0 ? 1 : 0;
+            double sd = details.reckoning().uncertainty().sd();
+            double[] sum = new double[cells];
+            for (int winter = 0; winter < years.length; winter++) {
+                if (!details.reckoning().nights().isWorst()) {
+                    addAtLeast(damage[winter], (float) (details.levels()[level] / 100.0), sum);
+                } else {
+                    addNotAbove(margins[level][winter], sd, sum);
                 }
             }
+            events[level] = sum;
         }
         return events[level];
+    }
+
+    private static void addAtLeast(float[] damage, float share, double[] sum) {
+        for (int cell = 0; cell < sum.length; cell++) {
+            sum[cell] += damage[cell] >= share ? 1 : 0;
+        }
+    }
+
+    private static void addNotAbove(float[] margins, double sd, double[] sum) {
+        for (int cell = 0; cell < sum.length; cell++) {
+            float margin = margins[cell];
+            if (margin == margin) {
+                sum[cell] += Uncertainty.probabilityNotAbove(margin, sd);
+            }
+        }
     }
 
     /** Copies the values of a cell that count into {@code room}, in the order of time, and says how many there are. */

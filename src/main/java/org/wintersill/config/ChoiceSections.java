@@ -10,49 +10,12 @@ import org.wintersill.io.yaml.YamlChecks;
 import org.wintersill.io.yaml.YamlSection;
 import org.wintersill.io.yaml.YamlValue;
 
-/** Reads {@code damage}, {@code classes} and {@code missing-days}. */
+/** Reads {@code classes} and {@code missing-days}. */
 final class ChoiceSections {
     private static final List<String> MISSING_DAY_RULES = List.of("month-10-5", "month-5-3", "none");
     private static final List<Double> DEFAULT_CLASSES = List.of(0.05, 0.10, 0.20);
 
     private ChoiceSections() {
-    }
-
-    static DamageConfig damage(YamlSection section, Map<String, Object> tree) {
-        String nights = section.word("nights", List.of("worst"), List.of("independent", "correlated")).orElse("worst");
-        List<Integer> levels = section.value("levels").map(value -> levels(value, section)).orElse(List.of(10, 50, 90));
-        int killing = section.whole("killing", 1, 99).orElse(50);
-        section.later("uncertainty", "rho");
-        section.finish();
-        if (!levels.isEmpty() && !levels.contains(killing)) {
-            boolean given = section.value("killing").isPresent();
-            section.problem(given ? "killing" : "levels", "a killing winter is one that kills " + killing
-                    + " percent, which is not among the levels " + levels, given ? "Choose one of the levels, or add "
-                    + killing + " to them" : "Add " + killing + " to the levels, or choose killing among them");
-        }
-        tree.put("nights", nights);
-        tree.put("levels", levels);
-        tree.put("killing", killing);
-        return new DamageConfig(nights, levels, killing);
-    }
-
-    private static List<Integer> levels(YamlValue value, YamlSection section) {
-        List<Integer> levels = new ArrayList<>();
-        String key = section.path("levels");
-        List<YamlValue> items = section.checks().items(value, key);
-        for (YamlValue item : items) {
-            section.checks().whole(item, key, 1, 99).ifPresent(level -> {
-                if (levels.contains(level)) {
-                    section.checks().problem(item, key, "the level " + level + " is given twice", "Keep one of the two");
-                } else {
-                    levels.add(level);
-                }
-            });
-        }
-        if (items.isEmpty() && value instanceof YamlValue.Sequence) {
-            section.problem("levels", "the list is empty", "Give percents of organs killed, such as [10, 50, 90]");
-        }
-        return levels.stream().sorted().toList();
     }
 
     static List<Double> classes(YamlSection top) {

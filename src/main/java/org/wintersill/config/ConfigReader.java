@@ -84,7 +84,7 @@ public final class ConfigReader {
                         : "Name a cultivar file: cultivars: cultivars.yaml")
                 .map(value -> OutputSections.cultivars(value, checks, finder, tree("cultivars")))
                 .orElse(new CultivarConfig(List.of(), List.of()));
-        DamageConfig damage = ChoiceSections.damage(section(top, "damage"), tree("damage"));
+        DamageConfig damage = DamageSection.read(section(top, "damage"), tree("damage"));
         StatisticsConfig statistics = StatisticsSection.read(section(top, "statistics"), tree("statistics"));
         List<Double> classes = ChoiceSections.classes(top);
         effective.put("classes", classes);

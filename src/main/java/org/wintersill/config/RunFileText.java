@@ -28,7 +28,8 @@ public final class RunFileText {
             Map.entry("winter", "First and last day, and the part that must be complete; auto: by hemisphere."),
             Map.entry("missing-days", "When a month with missing days still counts: month-10-5, month-5-3 or none."),
             Map.entry("cultivars", "Cultivar files, and the ids to use."),
-            Map.entry("damage", "Percents of organs killed, and the one that makes a killing winter."),
+            Map.entry("damage", "Percents of organs killed, the one that makes a killing winter, and how nights are joined (worst, independent,\n"
+                    + "# correlated with rho). Uncertainty: standard deviations in K by component, such as {model: 1.0, site: 0.8}."),
             Map.entry("statistics", "Interval of the bounds, and the frequency of killing winters that is still accepted."),
             Map.entry("classes", "Highest frequency of killing winters that is secure, workable, marginal."),
             Map.entry("area", "The part of the target grid to work on: bbox: [west, south, east, north] in its reference system, polygons: a file."),

@@ -189,7 +189,7 @@ final class BandFold implements AutoCloseable {
         int slot = slot(worker, laneNumber);
         int cells = rows * columns;
         if (lanes[slot] == null || lanes[slot].cells() != cells) {
-            lanes[slot] = new WinterLane(job.cultivars(), job.levels(), cells);
+            lanes[slot] = new WinterLane(job.cultivars(), job.levels(), job.reckoning(), cells);
         }
         return lanes[slot];
     }

@@ -3,8 +3,10 @@ package org.wintersill.engine;
 import java.util.List;
 import org.wintersill.elevation.ElevationAdjustment;
 import org.wintersill.grid.Block;
+import org.wintersill.season.DamageReckoning;
 import org.wintersill.season.MissingDayPolicy;
 import org.wintersill.season.NightCurve;
+import org.wintersill.season.WinterValues;
 import org.wintersill.temperature.DailyTemperatureSource;
 import org.wintersill.time.Season;
 
@@ -18,10 +20,12 @@ import org.wintersill.time.Season;
  * @param policy when a winter counts
  * @param curves {@code [season][cultivar]}; null for a cultivar with a state model
  * @param levels number of levels of damage that margins are kept for; the first is LT50
+ * @param reckoning how damage is reckoned and what of it is kept
  * @param states cultivars with state models, and what they need beside the minima
  */
 public record FoldJob(DailyTemperatureSource source, Block window, ElevationAdjustment adjustment, List<Season> seasons,
-                      MissingDayPolicy policy, List<NightCurve[]> curves, int levels, StateForcing states) {
+                      MissingDayPolicy policy, List<NightCurve[]> curves, int levels, DamageReckoning reckoning,
+                      StateForcing states) {
 
     public FoldJob {
         seasons = List.copyOf(seasons);
@@ -30,12 +34,17 @@ public record FoldJob(DailyTemperatureSource source, Block window, ElevationAdju
 
     /** A job whose curves all depend on the date alone. */
     public FoldJob(DailyTemperatureSource source, Block window, ElevationAdjustment adjustment, List<Season> seasons,
-                   MissingDayPolicy policy, List<NightCurve[]> curves, int levels) {
-        this(source, window, adjustment, seasons, policy, curves, levels, StateForcing.none());
+                   MissingDayPolicy policy, List<NightCurve[]> curves, int levels, DamageReckoning reckoning) {
+        this(source, window, adjustment, seasons, policy, curves, levels, reckoning, StateForcing.none());
     }
 
     public int cultivars() {
         return curves.isEmpty() ? 0 : curves.get(0).length;
+    }
+
+    /** Values that are kept of every cell and winter. */
+    public int planes() {
+        return WinterValues.planes(cultivars(), levels, reckoning);
     }
 
     /** Number of rows of the target grid. */

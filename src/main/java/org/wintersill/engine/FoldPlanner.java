@@ -10,7 +10,6 @@ import org.wintersill.engine.FoldPlan.Piece;
 import org.wintersill.problem.Problem;
 import org.wintersill.season.StateLane;
 import org.wintersill.season.WinterLane;
-import org.wintersill.season.WinterValues;
 import org.wintersill.temperature.StorageLayout;
 import org.wintersill.time.DayAxis;
 import org.wintersill.time.Season;
@@ -87,22 +86,22 @@ public final class FoldPlanner {
         int sourceRows = bands.stream().mapToInt(band -> band.sourceEnd() - band.sourceRow()).max().orElse(0);
         long sourceCells = (long) sourceRows * job.window().columns();
         int batchDays = batches.stream().mapToInt(Batch::count).max().orElse(0);
-        // State models see every night of every cell.
-        boolean tiled = job.states().isNone() && TargetTiles.mayGain(job.adjustment());
+        // State models see every night of every cell, and so do nights that are joined.
+        boolean tiled = job.states().isNone() && job.reckoning().nights().isWorst() && TargetTiles.mayGain(job.adjustment());
         long laneCells = (long) (tiled ? Math.max(laneRows, TargetTiles.mostRows(columns)) : laneRows) * columns;
         long kept = whole ? (long) threads * laneRows * columns : (long) bandRows * columns;
-        long values = FLOAT * WinterValues.planes(job.cultivars(), job.levels());
+        long values = FLOAT * job.planes();
         MemoryEstimate memory = new MemoryEstimate()
                 .add(TARGET, positionBytes())
                 .add(SLAB, batchDays * sourceCells * FLOAT)
                 .add("missing days of source cells", 5 * sourceCells)
-                .add("running values of the winter", kept * WinterLane.bytesPerCell(job.cultivars(), job.levels()))
+                .add("running values of the winter", kept * WinterLane.bytesPerCell(job.cultivars(), job.levels(), job.reckoning()))
                 .add("room of the workers", threads * (laneCells * 2 * values + (long) laneRows * columns * WinterLane.STRETCH * FLOAT));
         if (job.states().hasSecond()) {
             memory.add("days of maxima or means in memory", batchDays * sourceCells * FLOAT);
         }
         if (!job.states().isNone()) {
-            memory.add("states of the cultivars", kept * StateLane.bytesPerCell(job.states().cultivars()));
+            memory.add("states of the cultivars", kept * StateLane.bytesPerCell(job.states().cultivars(), job.reckoning()));
         }
         if (tiled) {
             memory.add("bounds of the nights", threads * TiledFold.bytesOfBounds(longestSeason(), columns));

@@ -112,7 +112,7 @@ final class StateFold implements AutoCloseable {
 
     private StateLane lane(int slot, int cells) {
         if (lanes[slot] == null || lanes[slot].cells() != cells) {
-            lanes[slot] = new StateLane(forcing.cultivars(), cells);
+            lanes[slot] = new StateLane(forcing.cultivars(), job.reckoning(), cells);
         }
         return lanes[slot];
     }

@@ -128,8 +128,6 @@ final class TiledFold {
                 lane.begin();
             }
             if (!tile.empty()) {
-                room.selection.refine(t, room.bounds, measures.get(days.season()), room.positions, room.lapse, 0, days.nights().length,
-                        days.slab(), days.offsets(), job.window().columns());
                 foldTile(room, lane, t, days);
             }
             if (days.closes()) {
@@ -153,20 +151,51 @@ final class TiledFold {
         }
         room.bounds.complete();
         room.selection.begin(tileRow.size(), measures.get(days.season()));
-        room.selection.mark(room.bounds, measures.get(days.season()), room.positions, room.lapse, 0, days.nights().length);
+        int from = 0;
+        while (from < days.nights().length) {
+            int to = endOfPhase(days, from);
+            select(room, tileRow, days, from, to);
+            from = to;
+        }
+    }
+
+    /** Where values are kept at the ends of phases, a night must not be left out for one of a later phase. */
+    private int endOfPhase(Nights days, int from) {
+        NightCurve[] curves = job.curves().get(days.season());
+        int to = days.nights().length;
+        if (!job.reckoning().phases() || curves.length == 0) {
+            return to;
+        }
+        for (int n = from + 1; n < to; n++) {
+            if (curves[0].phases().of(days.nights()[n]) != curves[0].phases().of(days.nights()[from])) {
+                return n;
+            }
+        }
+        return to;
+    }
+
+    private void select(Room room, List<TargetTile> tileRow, Nights days, int from, int to) {
+        List<List<Measure>> ofSeason = measures.get(days.season());
+        room.selection.mark(room.bounds, ofSeason, room.positions, room.lapse, from, to);
+        for (int t = 0; t < tileRow.size(); t++) {
+            if (!tileRow.get(t).empty()) {
+                room.selection.refine(t, room.bounds, ofSeason, room.positions, room.lapse, from, to, days.slab(), days.offsets(),
+                        job.window().columns());
+            }
+        }
     }
 
     private WinterLane lane(Room room, int row, int t) {
         List<TargetTile> tileRow = tiles.rows().get(row);
         int cells = tileRow.get(t).cells();
         if (wholeWinters) {
-            return room.lanes.computeIfAbsent(cells, size -> new WinterLane(job.cultivars(), job.levels(), size));
+            return room.lanes.computeIfAbsent(cells, size -> new WinterLane(job.cultivars(), job.levels(), job.reckoning(), size));
         }
         if (kept[row] == null) {
             kept[row] = new WinterLane[tileRow.size()];
         }
         if (kept[row][t] == null) {
-            kept[row][t] = new WinterLane(job.cultivars(), job.levels(), cells);
+            kept[row][t] = new WinterLane(job.cultivars(), job.levels(), job.reckoning(), cells);
         }
         return kept[row][t];
     }

@@ -29,6 +29,11 @@ public interface StateModel extends HardinessModel {
      */
     HardinessTrajectory begin(Season season, double[] latitudes);
 
+    /** Whether {@link HardinessTrajectory#phaseSwitch} tells where spring begins; otherwise the date does. */
+    default boolean knowsPhases() {
+        return true;
+    }
+
     /** Bytes that a state keeps for each cell, for the estimate of memory; at the most. */
     default int bytesPerCell() {
         return 128;

@@ -177,7 +177,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
     private static void addWinter(RunPlan plan, int s, Temperatures temperatures, List<List<Winter>> courses) {
         Season season = plan.seasons().get(s);
         NightCurve[] curves = plan.job().curves().get(s);
-        WinterLane lane = new WinterLane(curves.length, plan.job().levels(), 1);
+        WinterLane lane = new WinterLane(curves.length, plan.job().levels(), plan.job().reckoning(), 1);
         float[][] night = new float[1][1];
         for (int n = 0; n < season.days(); n++) {
             float tmin = temperatures.tmin()[n];

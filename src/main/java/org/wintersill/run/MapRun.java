@@ -57,7 +57,7 @@ public final class MapRun {
                 Workers workers = new Workers(plan.foldPlan().threads(), cancelled);
                 InputDigests digests = new InputDigests(RunRecord.inputFiles(plan));
                 WinterStore store = new WinterStore(folder.unfinished("winters.tmp"),
-                        WinterValues.planes(cultivars, plan.job().levels()), wantedPlanes(cultivars), plan.seasons().size(), plan.target().rows(),
+                        plan.job().planes(), wantedPlanes(cultivars), plan.seasons().size(), plan.target().rows(),
                         plan.target().columns())) {
             fold(folder, store, workers);
             CountingWinters.require(plan, store);

@@ -4,17 +4,22 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.Set;
+import java.util.TreeMap;
 import org.wintersill.climatology.FrequencyInterval;
 import org.wintersill.climatology.extreme.ExtremeFit;
 import org.wintersill.climatology.statistic.ClimatologyStatistics;
 import org.wintersill.climatology.statistic.ExtremeChoices;
 import org.wintersill.climatology.statistic.HardinessRule;
+import org.wintersill.climatology.statistic.PhaseShare;
 import org.wintersill.climatology.statistic.Suitability;
 import org.wintersill.config.RunConfig;
 import org.wintersill.config.StatisticsConfig;
 import org.wintersill.config.WinterConfig;
+import org.wintersill.damage.NightJoining;
+import org.wintersill.damage.Uncertainty;
 import org.wintersill.engine.FoldJob;
 import org.wintersill.engine.FoldPlan;
 import org.wintersill.engine.FoldPlanner;
@@ -27,8 +32,10 @@ import org.wintersill.hardiness.Cultivar;
 import org.wintersill.problem.Notices;
 import org.wintersill.problem.Problem;
 import org.wintersill.problem.Problems;
+import org.wintersill.season.DamageReckoning;
 import org.wintersill.season.MissingDayPolicy;
 import org.wintersill.season.NightCurve;
+import org.wintersill.season.Phases;
 import org.wintersill.temperature.DailyTemperatureSource;
 import org.wintersill.time.MonthDay;
 import org.wintersill.time.Season;
@@ -57,7 +64,8 @@ public final class RunPlanner {
         List<DailyTemperatureSource> opened = new ArrayList<>();
         problems.attempt(() -> cultivars.addAll(new CultivarSelection(config.cultivars()).read(notices)));
         problems.attempt(() -> opened.add(formats.open(config.temperature().minimum(), notices)));
-        problems.attempt(() -> LayerSelection.check(config.outputs().layers(), choices(config, new int[ExtremeFit.FEWEST_WINTERS])));
+        problems.attempt(() -> LayerSelection.check(config.outputs().layers(),
+                choices(config, new int[ExtremeFit.FEWEST_WINTERS], reckoning(config, true, false))));
         problems.throwIfAny();
         DailyTemperatureSource source = config.scenario().isPresent()
                 ? ScenarioPlan.of(config.scenario().get(), opened.get(0), formats, operations, notices) : opened.get(0);
@@ -70,6 +78,10 @@ public final class RunPlanner {
                         + ": do not plan by it");
             }
         }
+        if (!config.damage().nights().equals("worst")) {
+            notices.add("nights are joined as " + config.damage().nights() + ": damage and its probabilities are those of all nights, "
+                    + "margins, worst night and required hardiness those of the worst night alone");
+        }
         String sourceName = source.files().isEmpty() ? "the record" : source.files().get(0).path();
         TargetPlan targetPlan = TargetPlan.of(source.grid(), sourceName, config.elevation(),
                 new AreaCut.Wanted(config.area(), formats, operations, notices), formats, operations, notices);
@@ -80,9 +92,11 @@ public final class RunPlanner {
         checkWinters(winters, source, sourceName);
         checkCoverage(cultivars, window, config);
         tellOfWinters(winters, config, notices);
-        ClimatologyStatistics.Choices choices = choices(config, winters.used().stream().mapToInt(Season::year).toArray());
+        DamageReckoning reckoning = reckoning(config,
+                PhaseShare.IDS.stream().anyMatch(new LayerSelection(config.outputs().layers())::contains), window.hemisphere() == Hemisphere.SOUTH);
+        ClimatologyStatistics.Choices choices = choices(config, winters.used().stream().mapToInt(Season::year).toArray(), reckoning);
         FoldJob job = new FoldJob(source, targetPlan.window(), targetPlan.adjustment(), winters.used(), policy,
-                curves(cultivars, winters.used(), choices), choices.levels().length);
+                curves(cultivars, winters.used(), choices), choices.levels().length, reckoning);
         int threads = config.limits().threads().orElse(Runtime.getRuntime().availableProcessors());
         long budget = Estimates.budget(config.limits());
         long writers = Estimates.writerBytes(target, choices, config.outputs());
@@ -136,15 +150,23 @@ public final class RunPlanner {
         double[] others = java.util.Arrays.stream(choices.levels()).skip(1).asDoubleStream().toArray();
         List<NightCurve[]> curves = new ArrayList<>();
         for (Season season : seasons) {
+            Phases phases = Phases.of(season, choices.reckoning().south());
             curves.add(cultivars.stream().map(cultivar -> NightCurve.of(((CalendarModel) cultivar.model()).overSeason(season),
-                            cultivar.tolerance(), others))
+                            cultivar.tolerance(), others, phases))
                     .toArray(NightCurve[]::new));
         }
         return curves;
     }
 
+    private static DamageReckoning reckoning(RunConfig config, boolean phases, boolean south) {
+        NightJoining.Rule rule = NightJoining.Rule.valueOf(config.damage().nights().toUpperCase(Locale.ROOT));
+        return new DamageReckoning(new NightJoining(rule, config.damage().correlation()),
+                new Uncertainty(new TreeMap<>(config.damage().uncertainty())),
+                phases, south);
+    }
+
     /** Levels with LT50 first, whatever the order of the run file, since every margin refers to it. */
-    private static ClimatologyStatistics.Choices choices(RunConfig config, int[] years) {
+    private static ClimatologyStatistics.Choices choices(RunConfig config, int[] years, DamageReckoning reckoning) {
         Set<Integer> seen = new HashSet<>();
         List<Integer> levels = new ArrayList<>(List.of(50));
         seen.add(50);
@@ -156,7 +178,8 @@ public final class RunPlanner {
         return new ClimatologyStatistics.Choices(levels.stream().mapToInt(Integer::intValue).toArray(), config.damage().killing(),
                 FrequencyInterval.named(config.statistics().bounds()).orElseThrow(), config.statistics().interval(),
                 config.statistics().targets().stream().mapToDouble(Double::doubleValue).toArray(),
-                HardinessRule.named(config.statistics().rule()).orElseThrow(), extremes(config.statistics()), config.classes().stream().mapToDouble(Double::doubleValue).toArray(), years);
+                HardinessRule.named(config.statistics().rule()).orElseThrow(), extremes(config.statistics()), config.classes().stream().mapToDouble(Double::doubleValue).toArray(), years,
+                reckoning);
     }
 
     private static ExtremeChoices extremes(StatisticsConfig statistics) {

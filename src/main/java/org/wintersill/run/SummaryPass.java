@@ -18,6 +18,7 @@ import org.wintersill.engine.Workers;
 import org.wintersill.layer.LayerDefinition;
 import org.wintersill.layer.RasterHeader;
 import org.wintersill.layer.RasterWriter;
+import org.wintersill.season.DamageReckoning;
 import org.wintersill.season.WinterValues;
 
 /**
@@ -190,7 +191,25 @@ final class SummaryPass {
             damage[winter] = store.read(WinterValues.damagePlane(cultivar.get(), levels), winter, row, count);
         }
         return new WinterRecord(plan.choices().years(), cultivar.isPresent() ? new float[0][] : minimum, margins, damage, count * columns,
-                (long) row * columns, cultivar.map(number -> plan.cultivars().get(number).tolerance()));
+                (long) row * columns, cultivar.map(number -> plan.cultivars().get(number).tolerance()), details(cultivar, row, count));
+    }
+
+    private WinterRecord.Details details(Optional<Integer> cultivar, int row, int count) {
+        DamageReckoning reckoning = plan.job().reckoning();
+        int winters = plan.seasons().size();
+        int cultivars = plan.cultivars().size();
+        float[][] expected = new float[cultivar.isPresent() && reckoning.keepsExpected() ? winters : 0][];
+        float[][][] damageAt = new float[cultivar.isPresent() && reckoning.phases() ? 2 : 0][winters][];
+        for (int winter = 0; winter < expected.length; winter++) {
+            expected[winter] = store.read(WinterValues.expectedDamagePlane(cultivar.get(), cultivars, levels, reckoning), winter, row, count);
+        }
+        for (int end = 0; end < damageAt.length; end++) {
+            int plane = WinterValues.damageAtPlane(cultivar.get(), end, cultivars, levels, reckoning);
+            for (int winter = 0; winter < winters; winter++) {
+                damageAt[end][winter] = store.read(plane, winter, row, count);
+            }
+        }
+        return new WinterRecord.Details(reckoning, plan.choices().levels(), expected, damageAt);
     }
 
     /** Takes full-width rows of all summary layers of a cultivar. */

@@ -14,16 +14,19 @@ import org.wintersill.hardiness.LethalTemperatures;
  * @param lethal {@code [level][night]}, degrees Celsius; negative infinity on nights of which the model says nothing
  * @param warmInverse {@code [night]}, 1 / spread of the warm side, per K; 1 on such nights
  * @param coldInverse {@code [night]}, 1 / spread of the cold side, per K; 1 on such nights
+ * @param phases where the phases of the winter begin
  */
-public record NightCurve(ToleranceCurve tolerance, double[] levels, float[][] lethal, float[] warmInverse, float[] coldInverse) {
+public record NightCurve(ToleranceCurve tolerance, double[] levels, float[][] lethal, float[] warmInverse, float[] coldInverse,
+                         Phases phases) {
 
     /**
      * Builds the curve.
      *
      * @param course LT10, LT50 and LT90 by night
      * @param otherLevels levels besides 50, in the order of the output
+     * @param phases where the phases of the winter begin
      */
-    public static NightCurve of(LethalTemperatures course, ToleranceCurve tolerance, double[] otherLevels) {
+    public static NightCurve of(LethalTemperatures course, ToleranceCurve tolerance, double[] otherLevels, Phases phases) {
         int nights = course.lt50().length;
         double[] levels = new double[otherLevels.length + 1];
         levels[0] = 50;
@@ -45,7 +48,7 @@ public record NightCurve(ToleranceCurve tolerance, double[] levels, float[][] le
             warm[night] = (float) (1 / tolerance.warmSpread(lt10, lt50));
             cold[night] = (float) (1 / tolerance.coldSpread(lt50, lt90));
         }
-        return new NightCurve(tolerance, levels, lethal, warm, cold);
+        return new NightCurve(tolerance, levels, lethal, warm, cold, phases);
     }
 
     /**

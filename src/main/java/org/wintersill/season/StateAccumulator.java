@@ -1,6 +1,7 @@
 package org.wintersill.season;
 
 import java.util.Arrays;
+import org.wintersill.hardiness.HardinessTrajectory;
 import org.wintersill.hardiness.NightTolerance;
 
 /**
@@ -27,8 +28,14 @@ final class StateAccumulator {
     private final float[] worstNight;
     private final boolean[] lost;
     private final float[] margin;
+    /** Takes the nights one by one; null where the lowest values of both sides suffice. */
+    private final DamageFold nightly;
+    private final float[] warmInverse;
+    private final float[] coldInverse;
+    private final boolean expected;
+    private final PhaseEnds ends;
 
-    StateAccumulator(StateCultivar cultivar, int cells) {
+    StateAccumulator(StateCultivar cultivar, DamageReckoning reckoning, int cells) {
         this.cultivar = cultivar;
         this.cells = cells;
         spreadsToTenth = (float) cultivar.tolerance().spreadsToTenth();
@@ -39,13 +46,20 @@ final class StateAccumulator {
         worstNight = new float[cells];
         lost = new boolean[cells];
         margin = new float[cells];
+        nightly = reckoning.nightByNight() ? new DamageFold(reckoning, cells) : null;
+        warmInverse = new float[nightly == null ? 0 : cells];
+        coldInverse = new float[nightly == null ? 0 : cells];
+        expected = reckoning.keepsExpected();
+        ends = reckoning.phases() ? new PhaseEnds(cells) : null;
     }
 
-    static long bytesPerCell(int levels) {
-        return (levels + 4L) * Float.BYTES + 1;
+    static long bytesPerCell(int levels, DamageReckoning reckoning) {
+        return (levels + 4L) * Float.BYTES + 1 + reckoning.bytesPerCell() + (reckoning.nightByNight() ? 2L * Float.BYTES : 0)
+                + (reckoning.phases() ? 1 : 0);
     }
 
-    void begin() {
+    /** @param phases where the phases of the winter begin by the date */
+    void begin(Phases phases) {
         for (float[] values : lowest) {
             Arrays.fill(values, NONE);
         }
@@ -53,6 +67,24 @@ final class StateAccumulator {
         Arrays.fill(cold, NONE);
         Arrays.fill(worstNight, -1);
         Arrays.fill(lost, false);
+        if (nightly != null) {
+            nightly.begin();
+        }
+        if (ends != null) {
+            ends.begin(phases);
+        }
+    }
+
+    /** Keeps the damage of the cells in which a phase ended before the night; called before {@link #accept}. */
+    void closePhases(int night, HardinessTrajectory state) {
+        if (ends != null) {
+            ends.close(night, cultivar.model().knowsPhases() ? state : null, this::damage);
+        }
+    }
+
+    private double damage(int cell) {
+        return nightly != null ? nightly.damage(cell)
+                : cultivar.tolerance().fractionOfDeficit(-(double) (cold[cell] < 0 ? cold[cell] : warm[cell]));
     }
 
     /**
@@ -72,8 +104,20 @@ final class StateAccumulator {
         for (int level = 1; level < shares.length; level++) {
             below(margin, shares[level] > 0 ? tolerance.toLt10() : tolerance.toLt90(), shares[level], lowest[level], cells);
         }
+        if (nightly != null) {
+            invert(tolerance.toLt10(), warmInverse);
+            invert(tolerance.toLt90(), coldInverse);
+            nightly.accept(cultivar.tolerance(), t, tolerance.lt50(), warmInverse, coldInverse);
+            return;
+        }
         standardised(margin, tolerance.toLt10(), spreadsToTenth, warm, cells);
         standardised(margin, tolerance.toLt90(), spreadsToTenth, cold, cells);
+    }
+
+    private void invert(float[] distance, float[] inverse) {
+        for (int i = 0; i < cells; i++) {
+            inverse[i] = spreadsToTenth / distance[i];
+        }
     }
 
     private void noteLostStates(float[] t, boolean[] broken) {
@@ -134,9 +178,14 @@ final class StateAccumulator {
             for (int level = 0; level < lowest.length; level++) {
                 values.margin(c, level)[i] = known ? lowest[level][i] : Float.NaN;
             }
-            double deficit = -(double) (cold[i] < 0 ? cold[i] : warm[i]);
-            values.damage(c)[i] = known ? (float) cultivar.tolerance().fractionOfDeficit(deficit) : Float.NaN;
+            values.damage(c)[i] = known ? (float) damage(i) : Float.NaN;
             values.worstNight(c)[i] = known ? worstNight[i] : Float.NaN;
+            if (expected) {
+                values.expectedDamage(c)[i] = known ? (float) nightly.expected(i) : Float.NaN;
+            }
+            for (int end = 0; ends != null && end < Phases.BOUNDARIES; end++) {
+                values.damageAt(c, end)[i] = known ? (float) ends.damageAt(end, i, this::damage) : Float.NaN;
+            }
         }
     }
 }

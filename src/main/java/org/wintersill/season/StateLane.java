@@ -17,6 +17,7 @@ import org.wintersill.time.Season;
  */
 public final class StateLane {
     private final List<StateCultivar> cultivars;
+    private final DamageReckoning reckoning;
     private final int cells;
     private final MeanRing ring;
     private final NightTolerance tolerance;
@@ -48,13 +49,14 @@ public final class StateLane {
         void night(int cultivar, int night, NightTolerance tolerance, float[] mean, HardinessTrajectory state);
     }
 
-    public StateLane(List<StateCultivar> cultivars, int cells) {
-        this(cultivars, cells, null);
+    public StateLane(List<StateCultivar> cultivars, DamageReckoning reckoning, int cells) {
+        this(cultivars, reckoning, cells, null);
     }
 
     /** @param witness told of every night; null for none */
-    public StateLane(List<StateCultivar> cultivars, int cells, Witness witness) {
+    public StateLane(List<StateCultivar> cultivars, DamageReckoning reckoning, int cells, Witness witness) {
         this.cultivars = List.copyOf(cultivars);
+        this.reckoning = reckoning;
         this.cells = cells;
         this.witness = witness;
         ring = new MeanRing(cells);
@@ -62,7 +64,7 @@ public final class StateLane {
         room = new float[cells];
         values = new StateAccumulator[cultivars.size()];
         for (int c = 0; c < values.length; c++) {
-            values[c] = new StateAccumulator(cultivars.get(c), cells);
+            values[c] = new StateAccumulator(cultivars.get(c), reckoning, cells);
         }
         states = new HardinessTrajectory[values.length];
         firstDays = new int[values.length];
@@ -75,10 +77,10 @@ public final class StateLane {
     }
 
     /** Bytes that a lane takes for each of its cells. */
-    public static long bytesPerCell(List<StateCultivar> cultivars) {
+    public static long bytesPerCell(List<StateCultivar> cultivars, DamageReckoning reckoning) {
         long bytes = MeanRing.bytesPerCell() + 4L * Float.BYTES + Double.BYTES;
         for (StateCultivar cultivar : cultivars) {
-            bytes += StateAccumulator.bytesPerCell(cultivar.levels().length) + Float.BYTES + 1 + cultivar.model().bytesPerCell();
+            bytes += StateAccumulator.bytesPerCell(cultivar.levels().length, reckoning) + Float.BYTES + 1 + cultivar.model().bytesPerCell();
         }
         return bytes;
     }
@@ -98,10 +100,11 @@ public final class StateLane {
         earliest = firstDay(cultivars, winter);
         latest = earliest - 1;
         begun = false;
+        Phases phases = Phases.of(winter, reckoning.south());
         for (int c = 0; c < values.length; c++) {
             firstDays[c] = cultivars.get(c).model().earliestDay(winter);
             states[c] = cultivars.get(c).model().begin(winter, latitudes);
-            values[c].begin();
+            values[c].begin(phases);
             Arrays.fill(broken[c], false);
             anyBroken[c] = false;
         }
@@ -166,6 +169,7 @@ public final class StateLane {
                 if (witness != null) {
                     witness.night(c, day, tolerance, mean, states[c]);
                 }
+                values[c].closePhases(day, states[c]);
                 values[c].accept(day, ring.minima(day), tolerance, anyBroken[c] ? broken[c] : null);
             }
             states[c].advance(day, mean);

@@ -7,9 +7,12 @@ import org.wintersill.damage.ToleranceCurve;
  * The running values of one cultivar in one lane of cells through one winter (science 16.3): lowest margin to LT50 and to the
  * lethal temperature of each further level, the earliest night of the lowest margin, and the damage of the worst night.
  *
- * <p>Damage needs no exponential in the day loop: p falls with T on each side of the split curve, so the lowest standardised
- * margin of each side is kept, and the curve is applied once a winter. If any night was colder than LT50 the cold side
- * decides, otherwise the warm side; that is exact.
+ * <p>Damage of the worst night needs no exponential in the day loop: p falls with T on each side of the split curve, so the lowest
+ * standardised margin of each side is kept, and the curve is applied once a winter. If any night was colder than LT50 the cold side
+ * decides, otherwise the warm side; that is exact. Where more than that is asked for, a {@link DamageFold} takes the nights one by one.
+ *
+ * <p>Where phases are asked for, the damage reached at the end of autumn and of midwinter is kept: since a night adds what it raises the
+ * running damage, the shares of the phases are the differences (science 16.12).
  *
  * <p>Arrays are {@code [cell of the lane]}; a missing night is positive infinity and changes nothing. Not thread-safe: a lane
  * belongs to one worker at a time.
@@ -20,14 +23,21 @@ public final class WinterAccumulator {
     private final float[] warm;
     private final float[] cold;
     private final short[] worstNight;
+    /** Takes the nights one by one; null where the lowest values of both sides suffice. */
+    private final DamageFold nightly;
+    /** {@code [boundary][cell]}: damage reached when a phase ended; no rows where phases are not asked for. */
+    private final float[][] reachedAt;
+    private int boundary;
     private ToleranceCurve tolerance = ToleranceCurve.SPLIT_LOGISTIC;
 
     /** @param levels number of levels, LT50 being the first */
-    public WinterAccumulator(int levels, int cells) {
+    public WinterAccumulator(int levels, DamageReckoning reckoning, int cells) {
         this.cells = cells;
         lowestMargin = new float[levels][cells];
-        warm = new float[cells];
-        cold = new float[cells];
+        nightly = reckoning.nightByNight() ? new DamageFold(reckoning, cells) : null;
+        warm = new float[nightly == null ? cells : 0];
+        cold = new float[nightly == null ? cells : 0];
+        reachedAt = new float[reckoning.phases() ? Phases.BOUNDARIES : 0][cells];
         worstNight = new short[cells];
         begin();
     }
@@ -40,10 +50,14 @@ public final class WinterAccumulator {
         Arrays.fill(warm, Float.POSITIVE_INFINITY);
         Arrays.fill(cold, Float.POSITIVE_INFINITY);
         Arrays.fill(worstNight, (short) -1);
+        boundary = 0;
+        if (nightly != null) {
+            nightly.begin();
+        }
     }
 
     /**
-     * Takes a stretch of nights, in their order.
+     * Takes a stretch of nights, in their order; nights of a later phase never come before nights of an earlier one.
      *
      * @param nights {@code [night of the stretch][cell of the lane]}, degrees Celsius, positive infinity for missing
      * @param count number of nights
@@ -53,12 +67,53 @@ public final class WinterAccumulator {
      */
     public void accept(NightCurve curve, float[][] nights, int count, int[] positions, float[] before, float[] reached) {
         tolerance = curve.tolerance();
+        int from = 0;
+        while (boundary < reachedAt.length) {
+            int end = from;
+            while (end < count && positions[end] < curve.phases().start(boundary)) {
+                end++;
+            }
+            if (end == count) {
+                break;
+            }
+            acceptPart(curve, nights, from, end, positions, before, reached);
+            keepDamage(reachedAt[boundary]);
+            boundary++;
+            from = end;
+        }
+        acceptPart(curve, nights, from, count, positions, before, reached);
+    }
+
+    /** Takes the nights from..to of a stretch; a stretch is cut only where a phase ends. */
+    private void acceptPart(NightCurve curve, float[][] nights, int from, int to, int[] positions, float[] before, float[] reached) {
+        if (from > 0) {
+            foldNights(curve, Arrays.copyOfRange(nights, from, to), to - from, Arrays.copyOfRange(positions, from, to), before, reached);
+        } else {
+            foldNights(curve, nights, to, positions, before, reached);
+        }
+    }
+
+    private void keepDamage(float[] out) {
+        for (int i = 0; i < cells; i++) {
+            out[i] = (float) damage(i);
+        }
+    }
+
+    private void foldNights(NightCurve curve, float[][] nights, int count, int[] positions, float[] before, float[] reached) {
         float[] margin = lowestMargin[0];
         System.arraycopy(margin, 0, before, 0, cells);
         LowestValues.ofDifference(nights, count, curve.lethal()[0], positions, margin, cells);
         noteWorstNights(curve.lethal()[0], nights, count, positions, before, reached);
         for (int level = 1; level < lowestMargin.length; level++) {
             LowestValues.ofDifference(nights, count, curve.lethal()[level], positions, lowestMargin[level], cells);
+        }
+        if (nightly != null) {
+            for (int n = 0; n < count; n++) {
+                int position = positions[n];
+                nightly.accept(tolerance, nights[n], curve.lethal()[0][position], curve.warmInverse()[position],
+                        curve.coldInverse()[position]);
+            }
+            return;
         }
         LowestValues.ofBothSides(nights, count, curve.lethal()[0], curve.warmInverse(), curve.coldInverse(), positions, warm, cold,
                 cells);
@@ -92,8 +147,21 @@ public final class WinterAccumulator {
         return worstNight[cell];
     }
 
-    /** Fraction of buds killed by the worst night, 0..1; 0 where no night had a value. */
+    /** Fraction of buds killed, 0..1, without uncertainty; 0 where no night had a value. */
     public double damage(int cell) {
+        if (nightly != null) {
+            return nightly.damage(cell);
+        }
         return tolerance.fractionOfDeficit(-(double) (cold[cell] < 0 ? cold[cell] : warm[cell]));
+    }
+
+    /** Expected fraction killed with the uncertainty of the reckoning, 0..1; only where the reckoning keeps it. */
+    public double expectedDamage(int cell) {
+        return nightly.expected(cell);
+    }
+
+    /** Damage reached when autumn (0) or midwinter (1) ended; that of the whole winter where no night came after. */
+    public double damageAt(int phaseEnd, int cell) {
+        return phaseEnd < boundary ? reachedAt[phaseEnd][cell] : damage(cell);
     }
 }

@@ -16,20 +16,22 @@ public final class WinterLane {
 
     private final int cells;
     private final int levels;
+    private final DamageReckoning reckoning;
     private final float[] minimum;
     private final float[] before;
     private final float[] reached;
     private final WinterAccumulator[] cultivars;
 
-    public WinterLane(int cultivarCount, int levels, int cells) {
+    public WinterLane(int cultivarCount, int levels, DamageReckoning reckoning, int cells) {
         this.cells = cells;
         this.levels = levels;
+        this.reckoning = reckoning;
         minimum = new float[cells];
         before = new float[cells];
         reached = new float[cells];
         cultivars = new WinterAccumulator[cultivarCount];
         for (int c = 0; c < cultivarCount; c++) {
-            cultivars[c] = new WinterAccumulator(levels, cells);
+            cultivars[c] = new WinterAccumulator(levels, reckoning, cells);
         }
         begin();
     }
@@ -39,8 +41,8 @@ public final class WinterLane {
     }
 
     /** Bytes that a lane takes for each of its cells. */
-    public static long bytesPerCell(int cultivarCount, int levels) {
-        return 12 + (long) cultivarCount * (4L * levels + 10);
+    public static long bytesPerCell(int cultivarCount, int levels, DamageReckoning reckoning) {
+        return 12 + cultivarCount * (4L * levels + 10 + reckoning.bytesPerCell());
     }
 
     /** Makes ready for the next winter. */
@@ -85,7 +87,7 @@ public final class WinterLane {
      * @return a fresh set; NaN where the winter does not count or no night had a value
      */
     public WinterValues finish(IntPredicate counts) {
-        WinterValues values = new WinterValues(cultivars.length, levels, cells);
+        WinterValues values = new WinterValues(cultivars.length, levels, reckoning, cells);
         for (int i = 0; i < cells; i++) {
             boolean valid = minimum[i] < Float.POSITIVE_INFINITY && counts.test(i);
             values.minimum()[i] = valid ? minimum[i] : Float.NaN;
@@ -97,6 +99,12 @@ public final class WinterLane {
                 }
                 values.damage(c)[i] = known ? (float) cultivar.damage(i) : Float.NaN;
                 values.worstNight(c)[i] = known ? cultivar.worstNight(i) : Float.NaN;
+                if (reckoning.keepsExpected()) {
+                    values.expectedDamage(c)[i] = known ? (float) cultivar.expectedDamage(i) : Float.NaN;
+                }
+                for (int end = 0; reckoning.phases() && end < Phases.BOUNDARIES; end++) {
+                    values.damageAt(c, end)[i] = known ? (float) cultivar.damageAt(end, i) : Float.NaN;
+                }
             }
         }
         return values;

@@ -6,20 +6,23 @@ package org.wintersill.season;
  */
 public final class WinterValues {
     private final int levels;
+    private final int cultivars;
+    private final DamageReckoning reckoning;
     private final float[][] planes;
 
-    WinterValues(int cultivars, int levels, int cells) {
-        this(levels, new float[planes(cultivars, levels)][cells]);
-    }
-
-    private WinterValues(int levels, float[][] planes) {
+    WinterValues(int cultivars, int levels, DamageReckoning reckoning, int cells) {
+        this.cultivars = cultivars;
         this.levels = levels;
-        this.planes = planes;
+        this.reckoning = reckoning;
+        planes = new float[planes(cultivars, levels, reckoning)][cells];
     }
 
-    /** Number of planes: the minimum, and for each cultivar a margin a level, the damage and the worst night. */
-    public static int planes(int cultivars, int levels) {
-        return 1 + cultivars * (levels + 2);
+    /**
+     * Number of planes: the minimum, for each cultivar a margin a level, the damage and the worst night, and after all of these what
+     * else the reckoning keeps of each cultivar.
+     */
+    public static int planes(int cultivars, int levels, DamageReckoning reckoning) {
+        return 1 + cultivars * (levels + 2 + reckoning.extraPlanes());
     }
 
     /** Plane of the lowest minimum. */
@@ -42,7 +45,7 @@ public final class WinterValues {
 
     /** Empty values of as many planes as these, for another number of cells. */
     public WinterValues room(int cells) {
-        return new WinterValues(levels, new float[planes.length][cells]);
+        return new WinterValues(cultivars, levels, reckoning, cells);
     }
 
     /**
@@ -58,6 +61,16 @@ public final class WinterValues {
                 System.arraycopy(block.planes[plane], row * columns, planes[plane], first + row * rowLength, columns);
             }
         }
+    }
+
+    /** Plane of a cultivar's expected damage with uncertainty; only where the reckoning keeps it. */
+    public static int expectedDamagePlane(int cultivar, int cultivars, int levels, DamageReckoning reckoning) {
+        return 1 + cultivars * (levels + 2) + cultivar * reckoning.extraPlanes();
+    }
+
+    /** Plane of a cultivar's damage when autumn (0) or midwinter (1) ended; only where the reckoning keeps it. */
+    public static int damageAtPlane(int cultivar, int phaseEnd, int cultivars, int levels, DamageReckoning reckoning) {
+        return expectedDamagePlane(cultivar, cultivars, levels, reckoning) + (reckoning.keepsExpected() ? 1 : 0) + phaseEnd;
     }
 
     public int planeCount() {
@@ -86,5 +99,15 @@ public final class WinterValues {
     /** Position in the window of the earliest night of the lowest margin, a whole number. */
     public float[] worstNight(int cultivar) {
         return planes[worstNightPlane(cultivar, levels)];
+    }
+
+    /** Expected fraction of buds killed with uncertainty, 0..1; only where the reckoning keeps it. */
+    public float[] expectedDamage(int cultivar) {
+        return planes[expectedDamagePlane(cultivar, cultivars, levels, reckoning)];
+    }
+
+    /** Fraction of buds killed when autumn (0) or midwinter (1) ended, 0..1; only where the reckoning keeps it. */
+    public float[] damageAt(int cultivar, int phaseEnd) {
+        return planes[damageAtPlane(cultivar, phaseEnd, cultivars, levels, reckoning)];
     }
 }

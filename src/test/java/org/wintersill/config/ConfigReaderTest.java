@@ -45,7 +45,7 @@ class ConfigReaderTest {
             winter: {from: 10-01, to: 04-30, complete: 11-01..03-31, hemisphere: north}
             missing-days: month-5-3
             cultivars: {files: [c.yaml], use: [slate, amber]}
-            damage: {nights: worst, levels: [90, 20, 50], killing: 20}
+            damage: {nights: worst, levels: [90, 20, 50], killing: 20, uncertainty: {model: 1.0, site: 0.8}, neighbourhood-km: 2.5}
             statistics: {interval: 0.95, bounds: wilson, target: [0.2, 0.05], rule: quantile, extremes: l-moments,
               return-periods: [30, 20], bootstrap: {replicates: 99, seed: 7}, trend: {false-discovery: 0.05}}
             classes: [0.1, 0.2, 0.3]
@@ -75,7 +75,7 @@ class ConfigReaderTest {
                 config.winter());
         assertEquals("month-10-5", config.missingDays());
         assertEquals(new CultivarConfig(List.of(folder.resolve("c.yaml")), List.of()), config.cultivars());
-        assertEquals(new DamageConfig("worst", List.of(10, 50, 90), 50), config.damage());
+        assertEquals(new DamageConfig("worst", 0, List.of(10, 50, 90), 50, Map.of(), 5), config.damage());
         assertEquals(new StatisticsConfig(0.90, "jeffreys", List.of(0.10), "frequency", "auto", List.of(10, 50, 100), 200, 1, 0.10), config.statistics());
         assertEquals(List.of(0.05, 0.10, 0.20), config.classes());
         assertEquals(Optional.empty(), config.area());
@@ -105,7 +105,7 @@ class ConfigReaderTest {
                 Optional.of(new MonthDay(11, 1)), Optional.of(new MonthDay(3, 31)), Optional.of(Hemisphere.NORTH)), config.winter());
         assertEquals("month-5-3", config.missingDays());
         assertEquals(List.of("slate", "amber"), config.cultivars().use());
-        assertEquals(new DamageConfig("worst", List.of(20, 50, 90), 20), config.damage());
+        assertEquals(new DamageConfig("worst", 0, List.of(20, 50, 90), 20, Map.of("model", 1.0, "site", 0.8), 2.5), config.damage());
         assertEquals(new StatisticsConfig(0.95, "wilson", List.of(0.2, 0.05), "quantile", "l-moments", List.of(20, 30), 99, 7, 0.05), config.statistics());
         assertEquals(List.of(0.1, 0.2, 0.3), config.classes());
         assertEquals(new AreaConfig(Optional.of(new Envelope(2600000, 1100000, 2700000, 1200000)), Optional.of(new PolygonEntry(folder.resolve("zones.gpkg"),
@@ -115,10 +115,21 @@ class ConfigReaderTest {
         assertEquals(new LimitConfig(OptionalInt.of(2), OptionalLong.of(3L << 29)), config.limits());
     }
 
+    @Test
+    void nightsAreJoinedByAWordOrByAMap() throws Exception {
+        assertEquals("independent", read(SMALL + "damage: {nights: independent}\n").damage().nights());
+        for (String form : List.of("{nights: correlated, rho: 0.6}", "{nights: {rule: correlated, rho: 0.6}}")) {
+            DamageConfig damage = read(SMALL + "damage: " + form + "\n").damage();
+            assertEquals("correlated", damage.nights(), form);
+            assertEquals(0.6, damage.correlation(), form);
+        }
+    }
+
     @ParameterizedTest
-    @CsvSource({"small", "full", "dem"})
+    @CsvSource({"small", "full", "dem", "correlated"})
     void theEffectiveConfigurationReadBackIsTheSame(String which) throws Exception {
-        RunConfig config = read(which.equals("full") ? FULL : which.equals("dem") ? SMALL + "elevation: {dem: dem.tif}\n" : SMALL);
+        RunConfig config = read(which.equals("full") ? FULL : which.equals("dem") ? SMALL + "elevation: {dem: dem.tif}\n"
+                : which.equals("correlated") ? SMALL + "damage: {nights: correlated, rho: 0.25}\n" : SMALL);
         RunConfig again = ConfigReader.read(Files.writeString(folder.resolve("run.yaml"), config.toYaml()), Map.of());
         assertEquals(config, again);
         assertEquals(config.toYaml(), again.toYaml());
@@ -190,8 +201,14 @@ class ConfigReaderTest {
         "titel: x                                       | 3 | the key titel is not known. Did you mean title?",
         "outputs: {folders: x}                          | 3 | Did you mean folder?",
         "scenario: {historical: tmin-1.nc}              | 3 | the key scenario.future is missing",
-        "damage: {uncertainty: {model: 1}}              | 3 | the key damage.uncertainty is not known to this version",
-        "damage: {nights: independent}                  | 3 | 'independent' is not known to this version",
+        "damage: {uncertainty: 1.2}                     | 3 | named components are needed",
+        "damage: {uncertainty: {model: -1}}             | 3 | a standard deviation in K from 0 to 20",
+        "damage: {uncertainty: {winter: 1}}             | 3 | 'winter' cannot name a component",
+        "damage: {nights: correlated}                   | 3 | correlated nights need their correlation rho",
+        "damage: {rho: 0.5}                             | 3 | rho is given, and the nights are joined as worst",
+        "damage: {nights: {rule: correlated, rho: 1}}   | 3 | a correlation above 0 and up to 0.99",
+        "damage: {nights: {rule: worst, roh: 0.5}}      | 3 | Did you mean rho?",
+        "damage: {nights: independent, uncertainty: {site: 1}} | 3 | uncertainty belongs to the worst night",
         "damage: {nights: wurst}                        | 3 | Did you mean worst?",
         "damage: {levels: [10, 90]}                     | 3 | not among the levels [10, 90]. Add 50",
         "damage: {killing: 40}                          | 3 | add 40 to them",

@@ -6,11 +6,15 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Random;
+import java.util.TreeMap;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.constraints.IntRange;
+import org.wintersill.damage.NightJoining;
 import org.wintersill.damage.ToleranceCurve;
+import org.wintersill.damage.Uncertainty;
 import org.wintersill.elevation.ElevationAdjustment;
 import org.wintersill.elevation.ElevationField;
 import org.wintersill.elevation.LapseRates;
@@ -21,7 +25,9 @@ import org.wintersill.grid.GridGeometry;
 import org.wintersill.hardiness.LethalTemperatures;
 import org.wintersill.problem.Notices;
 import org.wintersill.season.MissingDayPolicy;
+import org.wintersill.season.DamageReckoning;
 import org.wintersill.season.NightCurve;
+import org.wintersill.season.Phases;
 import org.wintersill.season.WinterValues;
 import org.wintersill.temperature.MemoryTemperatureSource;
 import org.wintersill.temperature.StorageLayout;
@@ -36,6 +42,11 @@ class FoldLaws {
     private static final Crs CRS = new Crs("EPSG:4326", "WGS 84", "", Crs.Kind.GEOGRAPHIC, 1, null);
     private static final double[] OTHER_LEVELS = {10, 90};
     private static final int LEVELS = 3;
+    private static final List<DamageReckoning> RECKONINGS = List.of(DamageReckoning.PLAIN,
+            new DamageReckoning(NightJoining.WORST_NIGHT, Uncertainty.none(), true, false),
+            new DamageReckoning(NightJoining.WORST_NIGHT, new Uncertainty(new TreeMap<>(Map.of("model", 1.2, "site", 0.5))), true, false),
+            new DamageReckoning(new NightJoining(NightJoining.Rule.INDEPENDENT, 0), Uncertainty.none(), true, false),
+            new DamageReckoning(new NightJoining(NightJoining.Rule.CORRELATED, 0.6), Uncertainty.none(), true, false));
 
     /** A random record of two and a bit winters with gaps, masked cells and a sea. */
     private static final class Sample {
@@ -44,10 +55,12 @@ class FoldLaws {
         final float[][] values;
         final List<Season> seasons;
         final List<NightCurve[]> curves = new ArrayList<>();
+        final DamageReckoning reckoning;
         final List<LethalTemperatures> courses = new ArrayList<>();
 
         Sample(long seed, int rows, int columns, CfCalendar calendar, boolean south) {
             Random random = new Random(seed);
+            reckoning = RECKONINGS.get((int) Math.floorMod(seed, RECKONINGS.size()));
             grid = new GridGeometry(columns, rows, -38, 50, 0.5, 0.25, CRS);
             long start = calendar.dayNumber(new CfDate(1999, 7, 1));
             List<Long> days = new ArrayList<>();
@@ -69,9 +82,10 @@ class FoldLaws {
             seasons = window.seasons(axis);
             for (Season season : seasons) {
                 LethalTemperatures course = course(season.days());
+                Phases phases = Phases.of(season, south);
                 courses.add(course);
-                curves.add(new NightCurve[] {NightCurve.of(course, ToleranceCurve.SPLIT_LOGISTIC, OTHER_LEVELS),
-                    NightCurve.of(shifted(course, 4), ToleranceCurve.SPLIT_PROBIT, OTHER_LEVELS)});
+                curves.add(new NightCurve[] {NightCurve.of(course, ToleranceCurve.SPLIT_LOGISTIC, OTHER_LEVELS, phases),
+                    NightCurve.of(shifted(course, 4), ToleranceCurve.SPLIT_PROBIT, OTHER_LEVELS, phases)});
             }
         }
 
@@ -88,7 +102,7 @@ class FoldLaws {
 
         FoldJob job(ElevationAdjustment adjustment, StorageLayout layout, MissingDayPolicy policy) {
             return new FoldJob(new MemoryTemperatureSource(grid, axis, layout, values), grid.whole(), adjustment, seasons, policy,
-                    curves, LEVELS);
+                    curves, LEVELS, reckoning);
         }
     }
 
@@ -107,7 +121,7 @@ class FoldLaws {
     /** {@code [season][plane][cell]}. */
     private static float[][][] run(FoldJob job, FoldPlan plan) {
         int cells = job.targetRows() * job.targetColumns();
-        int planes = WinterValues.planes(job.cultivars(), job.levels());
+        int planes = job.planes();
         float[][][] all = new float[job.seasons().size()][planes][cells];
         try (Workers workers = new Workers(plan.threads(), () -> false)) {
             new LocalEngine(job, plan).run((season, firstRow, values) -> {
@@ -200,6 +214,10 @@ class FoldLaws {
         double[] lowest = {Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY};
         double minimum = Double.POSITIVE_INFINITY;
         double damage = 0;
+        double untouched = 1;
+        double[] reached = {Double.NaN, Double.NaN};
+        Phases phases = sample.curves.get(s)[0].phases();
+        int deadliest = -1;
         int worst = -1;
         LethalTemperatures lt = sample.courses.get(s);
         for (int night = 0; night < season.days(); night++) {
@@ -208,6 +226,11 @@ class FoldLaws {
             if (Double.isNaN(t)) {
                 continue;
             }
+            for (int end = 0; end < 2; end++) {
+                if (Double.isNaN(reached[end]) && night >= (end == 0 ? phases.midwinter() : phases.spring())) {
+                    reached[end] = sample.reckoning.nights().isWorst() ? damage : 1 - untouched;
+                }
+            }
             minimum = Math.min(minimum, t);
             if (t - lt.lt50()[night] < lowest[0] - 1e-6) {
                 worst = night;
@@ -215,7 +238,10 @@ class FoldLaws {
             lowest[0] = Math.min(lowest[0], t - lt.lt50()[night]);
             lowest[1] = Math.min(lowest[1], t - lt.lt10()[night]);
             lowest[2] = Math.min(lowest[2], t - lt.lt90()[night]);
-            damage = Math.max(damage, ToleranceCurve.SPLIT_LOGISTIC.killedFraction(t, lt.lt10()[night], lt.lt50()[night], lt.lt90()[night]));
+            double killed = ToleranceCurve.SPLIT_LOGISTIC.killedFraction(t, lt.lt10()[night], lt.lt50()[night], lt.lt90()[night]);
+            deadliest = killed > damage ? night : deadliest;
+            damage = Math.max(damage, killed);
+            untouched *= 1 - killed;
         }
         if (!complete(sample, season, cell)) {
             assertTrue(Float.isNaN(planes[0][cell]) && Float.isNaN(planes[1][cell]), "an incomplete winter has no value");
@@ -225,11 +251,40 @@ class FoldLaws {
         for (int level = 0; level < LEVELS; level++) {
             assertEquals(lowest[level], planes[WinterValues.marginPlane(0, level, LEVELS)][cell], 1e-5);
         }
-        assertEquals(damage, planes[WinterValues.damagePlane(0, LEVELS)][cell], 1e-5);
+        float kept = planes[WinterValues.damagePlane(0, LEVELS)][cell];
+        switch (sample.reckoning.nights().rule()) {
+            case WORST -> assertEquals(damage, kept, 1e-5);
+            case INDEPENDENT -> assertEquals(1 - untouched, kept, 1e-5);
+            default -> assertTrue(kept >= damage - 1e-6 && kept <= 1 - untouched + 1e-6, "the copula lies between worst and independent");
+        }
+        if (sample.reckoning.keepsExpected()) {
+            double t = sample.values[sample.axis.indexOf(season.firstDay() + deadliest)][cell];
+            assertEquals(expected(t, lt, deadliest, sample.reckoning.uncertainty().sd()),
+                    planes[WinterValues.expectedDamagePlane(0, 2, LEVELS, sample.reckoning)][cell], 2e-3);
+        }
+        for (int end = 0; sample.reckoning.phases() && end < 2; end++) {
+            float at = planes[WinterValues.damageAtPlane(0, end, 2, LEVELS, sample.reckoning)][cell];
+            if (sample.reckoning.nights().rule() != NightJoining.Rule.CORRELATED) {
+                assertEquals(reached[end], at, 1e-5);
+            }
+            assertTrue(at >= 0 && at <= kept);
+        }
         float found = planes[WinterValues.worstNightPlane(0, LEVELS)][cell];
         double marginThere = sample.values[sample.axis.indexOf(season.firstDay() + (long) found)][cell] - lt.lt50()[(int) found];
         assertEquals(lowest[0], marginThere, 1e-5);
         assertTrue(found <= worst + 1e-9 || Math.abs(marginThere - lowest[0]) < 1e-5);
+    }
+
+    /** E p(T - e) by the trapezoidal rule on a fine net; the quadrature of 32 points is coarser where the curve is steep. */
+    private static double expected(double t, LethalTemperatures lt, int night, double sd) {
+        double sum = 0;
+        double weights = 0;
+        for (double u = -8; u <= 8; u += 0.002) {
+            double weight = Math.exp(-u * u / 2);
+            weights += weight;
+            sum += weight * ToleranceCurve.SPLIT_LOGISTIC.killedFraction(t - sd * u, lt.lt10()[night], lt.lt50()[night], lt.lt90()[night]);
+        }
+        return sum / weights;
     }
 
     private static boolean complete(Sample sample, Season season, int cell) {

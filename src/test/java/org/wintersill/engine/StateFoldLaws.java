@@ -8,11 +8,14 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Random;
+import java.util.TreeMap;
 import java.util.TreeSet;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.constraints.IntRange;
+import org.wintersill.damage.NightJoining;
 import org.wintersill.damage.ToleranceCurve;
+import org.wintersill.damage.Uncertainty;
 import org.wintersill.elevation.ElevationAdjustment;
 import org.wintersill.elevation.ElevationField;
 import org.wintersill.elevation.LapseRates;
@@ -25,7 +28,9 @@ import org.wintersill.hardiness.model.ThermalTimeModel;
 import org.wintersill.hardiness.model.ThermalTimeModel.Phase;
 import org.wintersill.problem.Notices;
 import org.wintersill.season.MissingDayPolicy;
+import org.wintersill.season.DamageReckoning;
 import org.wintersill.season.NightCurve;
+import org.wintersill.season.Phases;
 import org.wintersill.season.StateCultivar;
 import org.wintersill.season.WinterValues;
 import org.wintersill.temperature.AlignedTemperatureSource;
@@ -44,6 +49,10 @@ class StateFoldLaws {
     private static final Crs CRS = new Crs("EPSG:4326", "WGS 84", "", Crs.Kind.GEOGRAPHIC, 1, null);
     private static final double[] LEVELS = {50, 10, 90, 25};
     private static final double LN_9 = Math.log(9);
+    private static final List<DamageReckoning> RECKONINGS = List.of(DamageReckoning.PLAIN,
+            new DamageReckoning(NightJoining.WORST_NIGHT, Uncertainty.none(), true, false),
+            new DamageReckoning(NightJoining.WORST_NIGHT, new Uncertainty(new TreeMap<>(Map.of("model", 1.5))), true, false),
+            new DamageReckoning(new NightJoining(NightJoining.Rule.INDEPENDENT, 0), Uncertainty.none(), true, false));
     /** Invented; one begins inside the window, one before it. No mean and no sum of tenths meets their limits exactly. */
     private static final ThermalTimeModel SEPTEMBER = new ThermalTimeModel(null, -9, -2, -24, new Phase(12.013, 0.1, 0.06),
             new Phase(4.013, 0.05, 0.12), 5, -300.013, -2.2, 2, 3);
@@ -60,9 +69,11 @@ class StateFoldLaws {
         final float[][] maxima;
         final List<Season> seasons;
         final List<NightCurve[]> curves = new ArrayList<>();
+        final DamageReckoning reckoning;
 
         Sample(long seed, int rows, int columns) {
             Random random = new Random(seed);
+            reckoning = RECKONINGS.get((int) Math.floorMod(seed, RECKONINGS.size()));
             grid = new GridGeometry(columns, rows, -38, 50, 0.5, 0.25, CRS);
             CfCalendar calendar = CfCalendar.STANDARD;
             long start = calendar.dayNumber(new CfDate(1999, 7, 1));
@@ -90,7 +101,7 @@ class StateFoldLaws {
                     lt[2][d] = lt[1][d] - 3;
                 }
                 curves.add(new NightCurve[] {null, NightCurve.of(new LethalTemperatures(lt[0], lt[1], lt[2]),
-                        ToleranceCurve.SPLIT_LOGISTIC, new double[] {10, 90, 25}), null});
+                        ToleranceCurve.SPLIT_LOGISTIC, new double[] {10, 90, 25}, Phases.of(season, false)), null});
             }
         }
 
@@ -124,7 +135,7 @@ class StateFoldLaws {
                     new MemoryTemperatureSource(grid, maximumDays, second, maxima, ForcingVariable.MAXIMUM)), 0,
                     CoordinateOperation.identity());
             return new FoldJob(AlignedTemperatureSource.on(days, new MemoryTemperatureSource(grid, minimumDays, layout, minima)),
-                    grid.whole(), adjustment, seasons, MissingDayPolicy.MONTH_10_5, curves, LEVELS.length, states);
+                    grid.whole(), adjustment, seasons, MissingDayPolicy.MONTH_10_5, curves, LEVELS.length, reckoning, states);
         }
     }
 
@@ -134,7 +145,7 @@ class StateFoldLaws {
 
     private static Result run(FoldJob job, FoldPlan plan) {
         int cells = job.targetRows() * job.targetColumns();
-        int planes = WinterValues.planes(job.cultivars(), job.levels());
+        int planes = job.planes();
         float[][][] all = new float[job.seasons().size()][planes][cells];
         Notices notices = new Notices();
         try (Workers workers = new Workers(plan.threads(), () -> false)) {
@@ -219,10 +230,27 @@ class StateFoldLaws {
                         float found = fold[s][WinterValues.marginPlane(c, level, LEVELS.length)][cell];
                         assertEquals(counts ? expected[level] : Double.NaN, found, 2e-5, "level " + level);
                     }
-                    assertEquals(counts ? expected[4] : Double.NaN, fold[s][WinterValues.damagePlane(c, LEVELS.length)][cell], 1e-5);
+                    assertDamage(sample, c, cell, fold[s], counts, expected);
                     assertEquals(counts ? expected[5] : Double.NaN, fold[s][WinterValues.worstNightPlane(c, LEVELS.length)][cell]);
                 }
             }
+        }
+    }
+
+    private static void assertDamage(Sample sample, int c, int cell, float[][] planes, boolean counts, double[] expected) {
+        DamageReckoning reckoning = sample.reckoning;
+        int cultivars = sample.curves.get(0).length;
+        boolean worst = reckoning.nights().isWorst();
+        assertEquals(counts ? expected[worst ? 4 : 6] : Double.NaN, planes[WinterValues.damagePlane(c, LEVELS.length)][cell], 1e-5);
+        for (int end = 0; reckoning.phases() && end < 2; end++) {
+            assertEquals(counts ? expected[(worst ? 7 : 9) + end] : Double.NaN,
+                    planes[WinterValues.damageAtPlane(c, end, cultivars, LEVELS.length, reckoning)][cell], 1e-5);
+        }
+        if (reckoning.keepsExpected()) {
+            double mean = Uncertainty.expectedFraction(ToleranceCurve.SPLIT_LOGISTIC, expected[11], expected[12], expected[13],
+                    reckoning.uncertainty().sd());
+            assertEquals(counts ? mean : Double.NaN,
+                    planes[WinterValues.expectedDamagePlane(c, cultivars, LEVELS.length, reckoning)][cell], 1e-5);
         }
     }
 
@@ -231,7 +259,11 @@ class StateFoldLaws {
         return position < 0 ? Float.NaN : values[position][cell];
     }
 
-    /** Science 3.1, 9 and 16 in double precision, night by night: margins to the levels, damage, worst night; NaN after a long gap. */
+    /**
+     * Science 3.1, 9 and 16 in double precision, night by night: margins to the levels, damage, worst night; NaN after a long gap.
+     * Then the damage of independent nights, the damage when autumn and midwinter ended by the worst night and by independent nights, and
+     * margin and inverse spreads of the deadliest night.
+     */
     private static double[] definition(Sample sample, Season season, int cell, ThermalTimeModel model) {
         int first = model.firstDay(season);
         int days = season.days() - first;
@@ -244,6 +276,10 @@ class StateFoldLaws {
         double[] filled = filled(mean);
         double[] lowest = {1e9, 1e9, 1e9, 1e9};
         double damage = 0;
+        double alive = 1;
+        double[] reached = {Double.NaN, Double.NaN, Double.NaN, Double.NaN};
+        double[] deadliest = new double[3];
+        int midwinter = season.position(new CfDate(season.year() - 1, 12, 1));
         double worst = -1;
         double h = model.initial();
         double cooling = 0;
@@ -253,6 +289,12 @@ class StateFoldLaws {
         boolean lost = false;
         for (int d = 0; d < days; d++) {
             double t = value(sample.minima, sample.minimumDays, season.firstDay() + first + d, cell);
+            for (int end = 0; end < 2; end++) {
+                if (Double.isNaN(reached[end]) && first + d >= midwinter && (end == 0 || eco)) {
+                    reached[end] = damage;
+                    reached[2 + end] = 1 - alive;
+                }
+            }
             if (first + d >= 0 && !Double.isNaN(t)) {
                 lost |= Double.isNaN(h);
                 double lt50 = out ? model.tender() : h;
@@ -265,7 +307,12 @@ class StateFoldLaws {
                 lowest[2] = Math.min(lowest[2], margin + model.toLt90());
                 lowest[3] = Math.min(lowest[3], margin - model.toLt10() * Math.log(3) / LN_9);
                 double spread = (margin > 0 ? model.toLt10() : model.toLt90()) / LN_9;
-                damage = Math.max(damage, 1 / (1 + Math.exp(margin / spread)));
+                double killed = 1 / (1 + Math.exp(margin / spread));
+                if (killed > damage) {
+                    deadliest = new double[] {margin, LN_9 / model.toLt10(), LN_9 / model.toLt90()};
+                }
+                damage = Math.max(damage, killed);
+                alive *= 1 - killed;
             }
             Phase phase = eco ? model.ecodormancy() : model.endodormancy();
             double warm = Math.max(0, filled[d] - phase.threshold());
@@ -282,7 +329,9 @@ class StateFoldLaws {
         }
         double nothing = lost ? Double.NaN : 0;
         return new double[] {lowest[0] + nothing, lowest[1] + nothing, lowest[2] + nothing, lowest[3] + nothing, damage + nothing,
-            worst + nothing};
+            worst + nothing, 1 - alive + nothing, nothing + (Double.isNaN(reached[0]) ? damage : reached[0]),
+            nothing + (Double.isNaN(reached[1]) ? damage : reached[1]), nothing + (Double.isNaN(reached[2]) ? 1 - alive : reached[2]),
+            nothing + (Double.isNaN(reached[3]) ? 1 - alive : reached[3]), deadliest[0] + nothing, deadliest[1], deadliest[2]};
     }
 
     private static double[] filled(double[] mean) {
@@ -313,7 +362,7 @@ class StateFoldLaws {
         List<NightCurve[]> alone = sample.curves.stream().map(curves -> new NightCurve[] {curves[1]}).toList();
         float[][][] one = run(new FoldJob(new MemoryTemperatureSource(sample.grid, sample.minimumDays, daily, sample.minima),
                 sample.grid.whole(), ElevationAdjustment.none(sample.grid), sample.seasons, MissingDayPolicy.MONTH_10_5, alone,
-                LEVELS.length)).planes;
+                LEVELS.length, sample.reckoning)).planes;
         for (int s = 0; s < one.length; s++) {
             for (int p = 0; p < LEVELS.length + 2; p++) {
                 assertArrayEquals(one[s][WinterValues.marginPlane(0, p, LEVELS.length)],

@@ -5,12 +5,16 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Random;
+import java.util.TreeMap;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.constraints.IntRange;
 import org.junit.jupiter.api.Test;
+import org.wintersill.damage.NightJoining;
 import org.wintersill.damage.ToleranceCurve;
+import org.wintersill.damage.Uncertainty;
 import org.wintersill.elevation.ElevationAdjustment;
 import org.wintersill.elevation.ElevationField;
 import org.wintersill.elevation.LapseRates;
@@ -23,8 +27,9 @@ import org.wintersill.grid.GridGeometry;
 import org.wintersill.hardiness.LethalTemperatures;
 import org.wintersill.problem.Notices;
 import org.wintersill.season.MissingDayPolicy;
+import org.wintersill.season.DamageReckoning;
 import org.wintersill.season.NightCurve;
-import org.wintersill.season.WinterValues;
+import org.wintersill.season.Phases;
 import org.wintersill.temperature.MemoryTemperatureSource;
 import org.wintersill.temperature.StorageLayout;
 import org.wintersill.time.CfCalendar;
@@ -94,7 +99,7 @@ class TiledFoldLaws {
                 new ElevationField(target, heights, "random"), new LapseRates(months));
     }
 
-    private static NightCurve curve(Random random, int days, double shift) {
+    private static NightCurve curve(Random random, int days, Phases phases, double shift) {
         double[][] lt = new double[3][days];
         for (int d = 0; d < days; d++) {
             // A plateau in midwinter: there equal temperatures are equal margins.
@@ -104,7 +109,7 @@ class TiledFoldLaws {
             lt[2][d] = lt[1][d] - 0.8 - 2 * depth - 0.01 * random.nextInt(3);
         }
         ToleranceCurve form = random.nextBoolean() ? ToleranceCurve.SPLIT_LOGISTIC : ToleranceCurve.SPLIT_PROBIT;
-        return NightCurve.of(new LethalTemperatures(lt[0], lt[1], lt[2]), form, new double[] {10, 90});
+        return NightCurve.of(new LethalTemperatures(lt[0], lt[1], lt[2]), form, new double[] {10, 90}, phases);
     }
 
     private static FoldJob job(long seed, int rows, int columns, int factor, double roughness, Gaps gaps, Terrain terrain,
@@ -123,17 +128,22 @@ class TiledFoldLaws {
         List<Season> seasons = SeasonWindow.north().seasons(axis);
         List<NightCurve[]> curves = new ArrayList<>();
         for (Season season : seasons) {
-            curves.add(new NightCurve[] {curve(random, season.days(), 0), curve(random, season.days(), 4)});
+            curves.add(new NightCurve[] {curve(random, season.days(), Phases.of(season, false), 0),
+                curve(random, season.days(), Phases.of(season, false), 4)});
         }
         MemoryTemperatureSource source = new MemoryTemperatureSource(grid, axis, new StorageLayout(1, rows, columns, 0),
                 weather(random, axis, rows, columns, roughness, gaps));
         return new FoldJob(source, grid.whole(), adjustment(random, grid, factor, terrain, monthly, operation), seasons,
-                MissingDayPolicy.MONTH_10_5, curves, LEVELS);
+                MissingDayPolicy.MONTH_10_5, curves, LEVELS, RECKONINGS.get((int) Math.floorMod(seed, RECKONINGS.size())));
     }
+
+    private static final List<DamageReckoning> RECKONINGS = List.of(DamageReckoning.PLAIN,
+            new DamageReckoning(NightJoining.WORST_NIGHT, Uncertainty.none(), true, false),
+            new DamageReckoning(NightJoining.WORST_NIGHT, new Uncertainty(new TreeMap<>(Map.of("model", 1.2))), true, false));
 
     /** Bits of all values, {@code [season][plane][cell]}. */
     private static int[][][] run(FoldJob job, FoldPlan plan) {
-        int planes = WinterValues.planes(job.cultivars(), job.levels());
+        int planes = job.planes();
         int[][][] all = new int[job.seasons().size()][planes][job.targetRows() * job.targetColumns()];
         try (Workers workers = new Workers(plan.threads(), () -> false)) {
             new LocalEngine(job, plan).run((season, firstRow, values) -> {

@@ -45,7 +45,8 @@ class SampleRunTest {
                     "damage-probability-10-lower", "damage-probability-10-upper", "damage-probability-50",
                     "damage-probability-50-lower", "damage-probability-50-upper", "damage-probability-90",
                     "damage-probability-90-lower", "damage-probability-90-upper", "killing-winter-return",
-                    "killing-winter-return-lower", "required-hardiness", "suitability", "winters/margin", "winters/damage",
+                    "killing-winter-return-lower", "required-hardiness", "suitability", "autumn-share", "midwinter-share",
+                    "spring-share", "winters/margin", "winters/damage",
                     "winters/worst-night").forEach(layer -> add(expected, cultivar + "/" + layer));
             expected.add(cultivar + "/suitability.tif.aux.xml");
         }

@@ -32,7 +32,7 @@ public class WinterLaneBenchmark {
 
     private final float[][] nights = new float[NIGHTS][CELLS];
     private final NightCurve[] curves = new NightCurve[CULTIVARS];
-    private final WinterLane lane = new WinterLane(CULTIVARS, 3, CELLS);
+    private final WinterLane lane = new WinterLane(CULTIVARS, 3, DamageReckoning.PLAIN, CELLS);
     private final float[][] stretch = new float[WinterLane.STRETCH][];
     private final int[] positions = new int[WinterLane.STRETCH];
 
@@ -51,7 +51,7 @@ public class WinterLaneBenchmark {
                 lt[0][night] = lt[1][night] + 2;
                 lt[2][night] = lt[1][night] - 2.5;
             }
-            curves[c] = NightCurve.of(new LethalTemperatures(lt[0], lt[1], lt[2]), ToleranceCurve.SPLIT_LOGISTIC, new double[] {10, 90});
+            curves[c] = NightCurve.of(new LethalTemperatures(lt[0], lt[1], lt[2]), ToleranceCurve.SPLIT_LOGISTIC, new double[] {10, 90}, new Phases(91, 181));
         }
     }
 

@@ -1,6 +1,7 @@
 package org.wintersill.climatology.statistic;
 
 import org.wintersill.climatology.ClimatologyStatistic;
+import org.wintersill.climatology.FrequencyBounds;
 import org.wintersill.climatology.WinterRecord;
 import org.wintersill.layer.LayerDefinition;
 import org.wintersill.layer.LayerStyles;
@@ -28,21 +29,17 @@ public final class DamageProbability implements ClimatologyStatistic {
     private final int percent;
     private final int level;
     private final Part part;
-    private final double[][][] bounds;
-    private final String boundWords;
+    private final FrequencyBounds bounds;
 
     /**
      * @param percent share of the buds
      * @param level position of that share among the record's levels
-     * @param bounds {@code [n][k]}, lower and upper
-     * @param boundWords what the bounds are, such as {@code Jeffreys, 90 %}
      */
-    public DamageProbability(int percent, int level, Part part, double[][][] bounds, String boundWords) {
+    public DamageProbability(int percent, int level, Part part, FrequencyBounds bounds) {
         this.percent = percent;
         this.level = level;
         this.part = part;
         this.bounds = bounds;
-        this.boundWords = boundWords;
     }
 
     /** Whether this is the frequency itself, not a bound, of the given level. */
@@ -52,7 +49,7 @@ public final class DamageProbability implements ClimatologyStatistic {
 
     @Override
     public LayerDefinition layer() {
-        String about = part == Part.VALUE ? "" : " (" + boundWords + ")";
+        String about = part == Part.VALUE ? "" : " (" + bounds.words() + ")";
         return new LayerDefinition("damage-probability-" + percent + part.suffix,
                 "Probability of " + percent + " % damage" + part.words,
                 "Probability that a winter kills at least " + percent + " % of the buds" + part.words + about,
@@ -62,14 +59,14 @@ public final class DamageProbability implements ClimatologyStatistic {
     @Override
     public void summarise(WinterRecord record, float[] out, int from, int to) {
         int[] counts = record.counts();
-        int[] events = record.events(level);
+        double[] events = record.events(level);
         for (int cell = from; cell < to; cell++) {
             int n = counts[cell];
-            int k = events[cell];
+            double k = events[cell];
             out[cell] = n == 0 ? Float.NaN : (float) switch (part) {
-                case VALUE -> (double) k / n;
-                case LOWER -> bounds[n][k][0];
-                case UPPER -> bounds[n][k][1];
+                case VALUE -> k / n;
+                case LOWER -> bounds.lower(k, n);
+                case UPPER -> bounds.upper(k, n);
             };
         }
     }

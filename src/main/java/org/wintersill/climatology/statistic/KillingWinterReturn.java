@@ -1,6 +1,7 @@
 package org.wintersill.climatology.statistic;
 
 import org.wintersill.climatology.ClimatologyStatistic;
+import org.wintersill.climatology.FrequencyBounds;
 import org.wintersill.climatology.WinterRecord;
 import org.wintersill.layer.LayerDefinition;
 import org.wintersill.layer.LayerStyles;
@@ -11,30 +12,31 @@ import org.wintersill.layer.SampleType;
  * 1 / upper bound of the frequency, which exists everywhere (science 16.6).
  */
 public final class KillingWinterReturn implements ClimatologyStatistic {
+    /** Frequencies below are as good as none: with an uncertain margin no winter is ever quite safe (project choice). */
+    private static final double SELDOM = 1e-6;
+
     private final int percent;
     private final int level;
     private final boolean bound;
-    private final double[][][] bounds;
-    private final String boundWords;
+    private final FrequencyBounds bounds;
 
     /**
      * @param percent share of the buds that makes a killing winter
      * @param level position of that share among the record's levels
      * @param bound whether the lower bound is meant
      */
-    public KillingWinterReturn(int percent, int level, boolean bound, double[][][] bounds, String boundWords) {
+    public KillingWinterReturn(int percent, int level, boolean bound, FrequencyBounds bounds) {
         this.percent = percent;
         this.level = level;
         this.bound = bound;
         this.bounds = bounds;
-        this.boundWords = boundWords;
     }
 
     @Override
     public LayerDefinition layer() {
         return bound
                 ? new LayerDefinition("killing-winter-return-lower", "Return period of a killing winter, lower bound",
-                        "One divided by the upper bound (" + boundWords + ") of the frequency of winters that kill at least "
+                        "One divided by the upper bound (" + bounds.words() + ") of the frequency of winters that kill at least "
                                 + percent + " % of the buds: the return period is hardly shorter, even where none was seen",
                         "year", SampleType.FLOAT32, "", LayerStyles.returnPeriod())
                 : new LayerDefinition("killing-winter-return", "Return period of a killing winter",
@@ -46,14 +48,14 @@ public final class KillingWinterReturn implements ClimatologyStatistic {
     @Override
     public void summarise(WinterRecord record, float[] out, int from, int to) {
         int[] counts = record.counts();
-        int[] events = record.events(level);
+        double[] events = record.events(level);
         for (int cell = from; cell < to; cell++) {
             int n = counts[cell];
-            int k = events[cell];
-            if (n == 0 || !bound && k == 0) {
+            double k = events[cell];
+            if (n == 0 || !bound && k / n < SELDOM) {
                 out[cell] = Float.NaN;
             } else {
-                out[cell] = (float) (bound ? 1 / bounds[n][k][1] : (double) n / k);
+                out[cell] = (float) (bound ? 1 / bounds.upper(k, n) : n / k);
             }
         }
     }

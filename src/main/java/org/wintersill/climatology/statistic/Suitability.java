@@ -39,11 +39,11 @@ public final class Suitability implements ClimatologyStatistic {
     @Override
     public void summarise(WinterRecord record, float[] out, int from, int to) {
         int[] counts = record.counts();
-        int[] events = record.events(level);
+        double[] events = record.events(level);
         for (int cell = from; cell < to; cell++) {
             int n = counts[cell];
             out[cell] = n < FEWEST_WINTERS ? Float.NaN
-                    : classOf((double) events[cell] / n, limits);
+                    : classOf(events[cell] / n, limits);
         }
     }
 

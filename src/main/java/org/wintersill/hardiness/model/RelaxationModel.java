@@ -82,6 +82,11 @@ public record RelaxationModel(MonthDay start, double initial, double level, Part
     }
 
     @Override
+    public boolean knowsPhases() {
+        return false;
+    }
+
+    @Override
     public int firstDay(Season season) {
         return StartDay.position(season, start, ThermalTimeModel.NORTHERN_START, ThermalTimeModel.SOUTHERN_START);
     }

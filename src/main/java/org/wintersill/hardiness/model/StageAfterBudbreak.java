@@ -39,6 +39,11 @@ public record StageAfterBudbreak(StateModel before, HardinessModel stages) imple
     }
 
     @Override
+    public boolean knowsPhases() {
+        return before.knowsPhases();
+    }
+
+    @Override
     public int firstDay(Season season) {
         return before.firstDay(season);
     }

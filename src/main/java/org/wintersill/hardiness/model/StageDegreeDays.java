@@ -53,6 +53,11 @@ public record StageDegreeDays(double base, MonthDay from, List<Stage> stages, Li
     }
 
     @Override
+    public boolean knowsPhases() {
+        return false;
+    }
+
+    @Override
     public int firstDay(Season season) {
         return StartDay.position(season, from, NORTHERN_START, SOUTHERN_START);
     }
