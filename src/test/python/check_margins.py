@@ -242,6 +242,7 @@ class Result:
     valid: np.ndarray      # [winter, row, column]
     minimum: np.ndarray    # [winter, row, column]
     height_change: np.ndarray
+    elevation: np.ndarray
     cultivars: dict        # id -> dict of [winter, row, column] arrays: margin (per level too), damage, night, expected
 
 
@@ -307,7 +308,7 @@ def compute(folder, run, progress=lambda text: None):
                 out["level-%d" % q].append(np.where(gone, np.nan, s["level-%d" % q]))
     cultivars = {i: {k: np.stack(v) for k, v in d.items()} for i, d in folds.items()}
     change = z - interpolate(np.broadcast_to(z_source, source.values.shape[1:]).astype(float), rows, columns)
-    return Result(lat, lon, labels, numbers, np.stack(valid), np.stack(minima), change, cultivars)
+    return Result(lat, lon, labels, numbers, np.stack(valid), np.stack(minima), change, z, cultivars)
 
 
 def fresh(shape, levels):
@@ -366,6 +367,7 @@ def summaries(result, run):
         meets = sum((s["(killing)"] <= target + 1e-12).astype(int) for s in out.values())
         best = np.max([s["margin-low"] for s in out.values()], 0)
         shared = {"valid-winters": n.astype(float), "mean-minimum": np.nanmean(result.minimum, 0), "height-change": result.height_change,
+                  "elevation": result.elevation,
                   "choice": [np.where(none, np.nan, meets), best]}
     return out, shared
 
@@ -532,6 +534,9 @@ def compare(folder, out):
             got = c.load("shared", "height-change")
             if got:   # metres; where no winter is valid the layer may be missing
                 c.layer("shared/height-change", shared["height-change"], got[0][0], 1e-3, excused=none)
+            got = c.load("shared", "elevation")
+            if got:
+                c.layer("shared/elevation", shared["elevation"], got[0][0], 1e-3)
         got = c.load("shared", "choice")
         if got:
             c.layer("shared/choice band 1", shared["choice"][0], got[0][0], 0, excused=undecided_choice)

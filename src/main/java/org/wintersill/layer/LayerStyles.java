@@ -107,6 +107,12 @@ public final class LayerStyles {
                 v -> v == 1 ? "1 year" : whole(v) + " years");
     }
 
+    /** Ground height in m, from low ground to mountains. */
+    public static LayerStyle.Ramp elevation() {
+        return ramp("elevation", "Ground height (m)", new double[] {0, 200, 500, 1000, 1500, 2200, 3000}, FEW_TO_MANY,
+                v -> whole(v) + " m");
+    }
+
     /** Target elevation minus source elevation in m. */
     public static LayerStyle.Ramp heightChange() {
         return ramp("height-change", "Target minus source elevation (m)",
@@ -185,7 +191,7 @@ public final class LayerStyles {
     /** One style of each kind, in a fixed order; styles made to measure stand here in their usual size. */
     public static List<LayerStyle> all() {
         return List.of(margin(), requiredHardiness(), probability(), damage(), share(), temperature(), night(), year(),
-                count(), returnPeriod(), heightChange(), trend(), shape(), spread(), fitCorrelation(), fitFlag(), trendSignificance(),
+                count(), returnPeriod(), elevation(), heightChange(), trend(), shape(), spread(), fitCorrelation(), fitFlag(), trendSignificance(),
                 suitability(), choice(6));
     }
 

@@ -73,7 +73,7 @@ final class LayerSelection {
         }
         ids.add(ALL);
         ids.addAll(WinterLayers.ids());
-        ids.addAll(List.of(SharedLayers.CHOICE, SharedLayers.HEIGHT_CHANGE));
+        ids.addAll(List.of(SharedLayers.CHOICE, SharedLayers.ELEVATION, SharedLayers.HEIGHT_CHANGE));
         return ids;
     }
 }

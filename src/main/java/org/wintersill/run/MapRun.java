@@ -117,7 +117,7 @@ public final class MapRun {
         }
         summaries.shared();
         summaries.choice();
-        summaries.heightChange();
+        summaries.heights();
         if (winters) {
             summaries.winters();
         }

@@ -7,6 +7,7 @@ import org.wintersill.layer.SampleType;
 /** Layers of all cultivars together and of none, besides the statistics over winters. */
 final class SharedLayers {
     static final String CHOICE = "choice";
+    static final String ELEVATION = "elevation";
     static final String HEIGHT_CHANGE = "height-change";
 
     private SharedLayers() {
@@ -18,6 +19,12 @@ final class SharedLayers {
                 "Number of cultivars whose frequency of killing winters is at most " + target
                         + ", and the best 10th percentile of the winter margin among all cultivars",
                 "1", SampleType.FLOAT32, "", LayerStyles.choice(cultivars));
+    }
+
+    /** Ground height of the cells, for tables by height that are made from the outputs alone. */
+    static LayerDefinition elevation() {
+        return new LayerDefinition(ELEVATION, "Elevation", "Height of the cell's ground in the terrain model", "m", SampleType.FLOAT32, "",
+                LayerStyles.elevation());
     }
 
     static LayerDefinition heightChange() {

@@ -278,9 +278,18 @@ final class SummaryPass {
         }
     }
 
-    /** Writes what the elevation adjustment bridged. */
-    void heightChange() {
-        LayerDefinition layer = SharedLayers.heightChange();
+    /** Writes the ground heights, and what the elevation adjustment bridged. */
+    void heights() {
+        heights(SharedLayers.elevation(), (row, column) -> plan.adjustment().targetHeight(row * columns + column));
+        heights(SharedLayers.heightChange(), plan.adjustment()::heightChange);
+    }
+
+    /** A value of a cell in metres. */
+    private interface Height {
+        float at(int row, int column);
+    }
+
+    private void heights(LayerDefinition layer, Height height) {
         if (!plan.adjustment().hasHeights() || !selection.contains(layer.id())) {
             return;
         }
@@ -290,7 +299,7 @@ final class SummaryPass {
                 int count = Math.min(stripRows, rows - row);
                 float[] values = new float[count * columns];
                 for (int i = 0; i < values.length; i++) {
-                    values[i] = plan.adjustment().heightChange(row + i / columns, i % columns);
+                    values[i] = height.at(row + i / columns, i % columns);
                 }
                 writer.write(0, row, count, values);
                 progress.advance(count);
@@ -336,7 +345,7 @@ final class SummaryPass {
 
     /** Size of the whole pass in the unit of its progress. */
     long size(boolean winterLayers) {
-        long layers = (long) ofCultivar.size() * plan.cultivars().size() + ofAll.size() + 3;
+        long layers = (long) ofCultivar.size() * plan.cultivars().size() + ofAll.size() + 4;
         long winters = winterLayers ? plan.seasons().size() * (1L + 3L * plan.cultivars().size()) : 0;
         return rows * (layers + winters);
     }
