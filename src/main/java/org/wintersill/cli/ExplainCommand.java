@@ -48,6 +48,10 @@ final class ExplainCommand implements Callable<Integer>, Manners.Kept {
             + "of each night, and the temperatures against the band from LT10 to LT90.")
     private String chart;
 
+    @Option(names = "--statistics", description = "Tell of all winters together: every summary layer at the cell with its bounds, fits with "
+            + "profile intervals; --chart then draws return periods.")
+    private boolean statistics;
+
     @Option(names = "--overwrite", description = "Replace a chart of that name.")
     private boolean overwrite;
 
@@ -79,14 +83,18 @@ final class ExplainCommand implements Callable<Integer>, Manners.Kept {
         }
         ExplainOptions.Format format = ExplainOptions.Format.of(json, csv);
         Optional<Path> picture = Optional.ofNullable(chart).map(RunArguments::path);
-        if (picture.isPresent() && winter == null) {
-            throw Problem.usage("a chart shows one winter, and --winter is not given", "--chart", "Add for example --winter 2009-10")
+        if (statistics && winter != null) {
+            throw Problem.usage("--statistics and --winter are both given", "", "Statistics need all winters: keep one of the two").asException();
+        }
+        if (picture.isPresent() && winter == null && !statistics) {
+            throw Problem.usage("a chart shows one winter, and --winter is not given", "--chart", "Add for example --winter 2009-10, or "
+                    + "--statistics for a chart of return periods")
                     .asException();
         }
         picture.ifPresent(file -> ChartFile.check(file, overwrite));
         Place place = at == null ? Place.lonLat(atLonLat) : Place.parse(at, "--at", "X,Y");
         return new ExplainOptions(place.x(), place.y(), at == null, Optional.ofNullable(winter).map(ExplainCommand::label),
-                cultivars, format, picture, overwrite);
+                cultivars, format, picture, overwrite, statistics);
     }
 
     /** A winter's label; {@code 2021-2022} and {@code 2021-23} are caught here, a winter that is not in the record later. */

@@ -16,9 +16,10 @@ import org.wintersill.problem.Problem;
  * @param format how
  * @param chart where to draw the winter of the only cultivar; empty for nowhere
  * @param overwrite whether a chart of that name may be replaced
+ * @param statistics whether the winters together are told of, instead of their nights
  */
 public record ExplainOptions(double x, double y, boolean lonLat, Optional<String> winter, List<String> cultivars,
-                             Format format, Optional<Path> chart, boolean overwrite) {
+                             Format format, Optional<Path> chart, boolean overwrite, boolean statistics) {
 
     /** Forms of the answer. */
     public enum Format {

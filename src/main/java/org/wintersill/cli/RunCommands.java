@@ -16,6 +16,8 @@ import org.wintersill.problem.ProblemException;
 import org.wintersill.problem.Problems;
 import org.wintersill.run.Caution;
 import org.wintersill.run.CellExplanation;
+import org.wintersill.run.CellStatistics;
+import org.wintersill.run.CellStatisticsText;
 import org.wintersill.run.ElevationInspection;
 import org.wintersill.run.ExplanationText;
 import org.wintersill.run.FolderContents;
@@ -26,6 +28,7 @@ import org.wintersill.run.MapRun;
 import org.wintersill.run.MarginChart;
 import org.wintersill.run.OutputFolder;
 import org.wintersill.run.PlanText;
+import org.wintersill.run.ReturnPeriodChart;
 import org.wintersill.run.RunPlan;
 import org.wintersill.run.RunPlanner;
 import org.wintersill.run.RunReport;
@@ -144,6 +147,9 @@ final class RunCommands implements Commands {
         if (!options.cultivars().isEmpty()) {
             wanted = wanted.ofCultivars(options.cultivars());
         }
+        if (options.statistics()) {
+            return statistics(plan, wanted, options, console);
+        }
         if (options.chart().isPresent()) {
             ChartFile.write(MarginChart.of(plan, wanted), options.chart().get(), options.overwrite());
             console.message("The chart is " + options.chart().get());
@@ -152,6 +158,20 @@ final class RunCommands implements Commands {
             case JSON -> ExplanationText.json(wanted);
             case CSV -> ExplanationText.csv(wanted);
             case TEXT -> ExplanationText.table(wanted, NIGHTS_SHOWN);
+        });
+        return ExitCode.DONE;
+    }
+
+    private static int statistics(RunPlan plan, CellExplanation cell, ExplainOptions options, Console console) {
+        CellStatistics statistics = CellStatistics.of(plan, cell);
+        if (options.chart().isPresent()) {
+            ChartFile.write(ReturnPeriodChart.of(plan, cell, statistics), options.chart().get(), options.overwrite());
+            console.message("The chart is " + options.chart().get());
+        }
+        console.result(switch (options.format()) {
+            case JSON -> CellStatisticsText.json(cell, statistics);
+            case CSV -> CellStatisticsText.csv(statistics);
+            case TEXT -> ExplanationText.table(cell, NIGHTS_SHOWN) + "\n" + CellStatisticsText.table(statistics);
         });
         return ExitCode.DONE;
     }

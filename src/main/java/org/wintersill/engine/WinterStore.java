@@ -20,7 +20,7 @@ import org.wintersill.season.WinterValues;
  * planes of one value a cell for results that pass from one summary to the next. Writes and reads go to places of their
  * own, so any number of threads may use it.
  */
-public final class WinterStore implements WinterSink, AutoCloseable {
+public final class WinterStore implements WinterSink, WinterPlanes, AutoCloseable {
     private final Path file;
     private final FileChannel channel;
     private final int winterPlanes;
@@ -96,7 +96,7 @@ public final class WinterStore implements WinterSink, AutoCloseable {
         return position(winterPlanes, 0, 0) + 4L * columns * ((long) plane * rows + row);
     }
 
-    /** Rows of a plane in one winter, {@code [row * columns + column]}. */
+    @Override
     public float[] read(int plane, int season, int firstRow, int rowCount) {
         return read(position(plane, season, firstRow), rowCount);
     }

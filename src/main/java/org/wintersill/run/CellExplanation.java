@@ -28,8 +28,10 @@ import org.wintersill.time.Season;
  * @param elevation height of the cell, m; NaN without terrain model
  * @param heightChange what the elevation adjustment bridges, m; NaN without terrain model
  * @param cultivars in the order of the run
+ * @param values of each winter told of, for all cultivars of the run
  */
-public record CellExplanation(double x, double y, String crs, float elevation, float heightChange, List<CultivarCourse> cultivars) {
+public record CellExplanation(double x, double y, String crs, float elevation, float heightChange, List<CultivarCourse> cultivars,
+                              List<WinterValues> values) {
 
     /** @param winters in the order of time */
     public record CultivarCourse(Cultivar cultivar, List<Winter> winters) {
@@ -87,11 +89,12 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
                     + String.join(", ", plan.seasons().stream().map(Season::label).toList())).asException();
         }
         List<List<Winter>> courses = new ArrayList<>();
+        List<WinterValues> values = new ArrayList<>();
         plan.cultivars().forEach(cultivar -> courses.add(new ArrayList<>()));
         try (DailyTemperatureReader reader = plan.source().open()) {
             for (int s : wanted) {
                 Temperatures temperatures = temperatures(plan, reader, plan.seasons().get(s), row, column);
-                addWinter(plan, s, temperatures, courses);
+                values.add(addWinter(plan, s, temperatures, courses));
             }
         }
         List<CultivarCourse> cultivars = new ArrayList<>();
@@ -100,7 +103,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
         }
         int cell = row * plan.target().columns() + column;
         return new CellExplanation(plan.target().centreX(column), plan.target().centreY(row), plan.target().crs().label(),
-                plan.adjustment().targetHeight(cell), plan.adjustment().heightChange(row, column), cultivars);
+                plan.adjustment().targetHeight(cell), plan.adjustment().heightChange(row, column), cultivars, values);
     }
 
     /** The same for a place given as WGS 84 longitude and latitude. */
@@ -126,7 +129,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             }
         }
         return new CellExplanation(x, y, crs, elevation, heightChange, cultivars.stream()
-                .filter(course -> ids.stream().anyMatch(course.cultivar().id()::equalsIgnoreCase)).toList());
+                .filter(course -> ids.stream().anyMatch(course.cultivar().id()::equalsIgnoreCase)).toList(), values);
     }
 
     private static Temperatures temperatures(RunPlan plan, DailyTemperatureReader reader, Season season, int row, int column) {
@@ -174,7 +177,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
         return values;
     }
 
-    private static void addWinter(RunPlan plan, int s, Temperatures temperatures, List<List<Winter>> courses) {
+    private static WinterValues addWinter(RunPlan plan, int s, Temperatures temperatures, List<List<Winter>> courses) {
         Season season = plan.seasons().get(s);
         NightCurve[] curves = plan.job().curves().get(s);
         WinterLane lane = new WinterLane(curves.length, plan.job().levels(), plan.job().reckoning(), 1);
@@ -192,6 +195,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
                     valid ? season.date((int) worst).toString() : null,
                     nights(season, plan, plan.cultivars().get(c), curves[c], temperatures)));
         }
+        return values;
     }
 
     private static List<Night> nights(Season season, RunPlan plan, Cultivar cultivar, NightCurve curve, Temperatures temperatures) {

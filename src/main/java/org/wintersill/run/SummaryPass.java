@@ -13,6 +13,7 @@ import org.wintersill.climatology.statistic.MarginLow;
 import org.wintersill.climatology.statistic.Suitability;
 import org.wintersill.climatology.statistic.TrendSignificance;
 import org.wintersill.engine.Progress;
+import org.wintersill.engine.WinterPlanes;
 import org.wintersill.engine.WinterStore;
 import org.wintersill.engine.Workers;
 import org.wintersill.layer.LayerDefinition;
@@ -176,37 +177,51 @@ final class SummaryPass {
     }
 
     private WinterRecord record(Optional<Integer> cultivar, int row, int count) {
+        return record(plan, store, cultivar, row, count, (long) row * columns);
+    }
+
+    /**
+     * The winters of some rows.
+     *
+     * @param planes where they lie
+     * @param cultivar empty for what belongs to no cultivar
+     * @param firstCell number of the first cell in the grid
+     */
+    static WinterRecord record(RunPlan plan, WinterPlanes planes, Optional<Integer> cultivar, int row, int count, long firstCell) {
         int winters = plan.seasons().size();
+        int levels = plan.job().levels();
         float[][] minimum = new float[winters][];
         float[][][] margins = new float[cultivar.isPresent() ? levels : 0][winters][];
         float[][] damage = new float[cultivar.isPresent() ? winters : 0][];
         for (int winter = 0; winter < winters; winter++) {
             if (cultivar.isEmpty()) {
-                minimum[winter] = store.read(WinterValues.minimumPlane(), winter, row, count);
+                minimum[winter] = planes.read(WinterValues.minimumPlane(), winter, row, count);
                 continue;
             }
             for (int level = 0; level < levels; level++) {
-                margins[level][winter] = store.read(WinterValues.marginPlane(cultivar.get(), level, levels), winter, row, count);
+                margins[level][winter] = planes.read(WinterValues.marginPlane(cultivar.get(), level, levels), winter, row, count);
             }
-            damage[winter] = store.read(WinterValues.damagePlane(cultivar.get(), levels), winter, row, count);
+            damage[winter] = planes.read(WinterValues.damagePlane(cultivar.get(), levels), winter, row, count);
         }
-        return new WinterRecord(plan.choices().years(), cultivar.isPresent() ? new float[0][] : minimum, margins, damage, count * columns,
-                (long) row * columns, cultivar.map(number -> plan.cultivars().get(number).tolerance()), details(cultivar, row, count));
+        return new WinterRecord(plan.choices().years(), cultivar.isPresent() ? new float[0][] : minimum, margins, damage,
+                (cultivar.isPresent() ? damage : minimum)[0].length, firstCell,
+                cultivar.map(number -> plan.cultivars().get(number).tolerance()), details(plan, planes, cultivar, row, count));
     }
 
-    private WinterRecord.Details details(Optional<Integer> cultivar, int row, int count) {
+    private static WinterRecord.Details details(RunPlan plan, WinterPlanes planes, Optional<Integer> cultivar, int row, int count) {
         DamageReckoning reckoning = plan.job().reckoning();
+        int levels = plan.job().levels();
         int winters = plan.seasons().size();
         int cultivars = plan.cultivars().size();
         float[][] expected = new float[cultivar.isPresent() && reckoning.keepsExpected() ? winters : 0][];
         float[][][] damageAt = new float[cultivar.isPresent() && reckoning.phases() ? 2 : 0][winters][];
         for (int winter = 0; winter < expected.length; winter++) {
-            expected[winter] = store.read(WinterValues.expectedDamagePlane(cultivar.get(), cultivars, levels, reckoning), winter, row, count);
+            expected[winter] = planes.read(WinterValues.expectedDamagePlane(cultivar.get(), cultivars, levels, reckoning), winter, row, count);
         }
         for (int end = 0; end < damageAt.length; end++) {
             int plane = WinterValues.damageAtPlane(cultivar.get(), end, cultivars, levels, reckoning);
             for (int winter = 0; winter < winters; winter++) {
-                damageAt[end][winter] = store.read(plane, winter, row, count);
+                damageAt[end][winter] = planes.read(plane, winter, row, count);
             }
         }
         return new WinterRecord.Details(reckoning, plan.choices().levels(), expected, damageAt);

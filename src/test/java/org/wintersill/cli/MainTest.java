@@ -151,10 +151,10 @@ class MainTest {
     @Test
     void explainGetsPlaceAndChoice() {
         assertEquals(0, run("explain", run, "--at", "-1.5,5e2", "--winter", "1999-00", "--cultivar", "amber", "--json"));
-        assertEquals(new ExplainOptions(-1.5, 500, false, Optional.of("1999-00"), List.of("amber"), ExplainOptions.Format.JSON, Optional.empty(), false),
+        assertEquals(new ExplainOptions(-1.5, 500, false, Optional.of("1999-00"), List.of("amber"), ExplainOptions.Format.JSON, Optional.empty(), false, false),
                 commands.explainOptions);
         assertEquals(0, run("explain", run, "--at-lonlat", "-120, 46", "--csv"));
-        assertEquals(new ExplainOptions(-120, 46, true, Optional.empty(), List.of(), ExplainOptions.Format.CSV, Optional.empty(), false), commands.explainOptions);
+        assertEquals(new ExplainOptions(-120, 46, true, Optional.empty(), List.of(), ExplainOptions.Format.CSV, Optional.empty(), false, false), commands.explainOptions);
     }
 
     @Test

@@ -4,6 +4,8 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.ObjectMapper;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -115,6 +117,54 @@ class WinterStatisticsTest {
             assertTrue(value("shared/trend-minimum-location", cell) > 0 || !made);
             assertTrue(value("shared/trend-minimum-location-test", cell) < 0.01 || !made);
         }
+    }
+
+    @Test
+    void explainTellsTheVeryNumbersOfTheMap() throws Exception {
+        for (int cell : new int[] {0, 7, 13}) {
+            Program.Ended ended = Program.run("explain", run.path("run.yaml").toString(), "--at",
+                    (-9.75 + 0.5 * (cell % 5)) + "," + (49.75 - 0.5 * (cell / 5)), "--statistics", "--json").expect(0);
+            JsonNode document = new ObjectMapper().readTree(ended.out());
+            assertEquals(cell == 7 ? 29 : 30, document.get("winters").asInt());
+            int compared = agree(document.get("layers"), "shared/", cell) + agree(document.at("/cultivars/0/layers"), "oat/", cell);
+            assertTrue(compared > 50, compared + " layers compared");
+            JsonNode fit = document.at("/cultivars/0/margin-fit");
+            JsonNode level = fit.at("/return-levels/20");
+            assertTrue(level.get("lower").asDouble() < level.get("level").asDouble() && level.get("level").asDouble() < level.get("upper").asDouble());
+            assertTrue(Math.abs(level.get("level").asDouble() - value("oat/return-level-margin-20", cell)) < 2, "both estimators are near each other");
+        }
+    }
+
+    private static int agree(JsonNode layers, String place, int cell) {
+        int compared = 0;
+        for (java.util.Iterator<String> ids = layers.fieldNames(); ids.hasNext();) {
+            String id = ids.next();
+            float expected = value(place + id, cell);
+            assertEquals(Float.isNaN(expected), layers.get(id).isNull(), id);
+            assertTrue(Float.isNaN(expected) || expected == (float) layers.get(id).asDouble(), id + ": " + expected + " " + layers.get(id));
+            compared++;
+        }
+        return compared;
+    }
+
+    @Test
+    void aChartShowsReturnPeriodsAndTheTableIsForReaders() throws Exception {
+        String[] words = {"explain", run.path("run.yaml").toString(), "--at", "-8.7,49.2", "--statistics"};
+        List<String> drawn = new ArrayList<>(List.of(words));
+        drawn.addAll(List.of("--chart", run.path("periods.svg").toString()));
+        String table = Program.run(drawn.toArray(String[]::new)).expect(0).out();
+        assertTrue(table.contains("Statistics over 29 winters") || table.contains("Statistics over 30 winters"), table);
+        assertTrue(table.contains("maximum likelihood, profile intervals") && table.contains("return-level-margin-20"), table);
+        String svg = Files.readString(run.path("periods.svg"));
+        assertTrue(svg.contains("fitted distribution") && svg.contains("once in so many winters"), "the chart is one of return periods");
+        List<String> rows = new ArrayList<>(List.of(words));
+        rows.add("--csv");
+        String csv = Program.run(rows.toArray(String[]::new)).expect(0).out();
+        assertTrue(csv.startsWith("cultivar,layer,unit,value,lower,upper,winters\n"), csv);
+        assertTrue(csv.contains("oat,required-hardiness,K,"), csv);
+        List<String> both = new ArrayList<>(List.of(words));
+        both.addAll(List.of("--winter", "1980-81"));
+        Program.run(both.toArray(String[]::new)).expect(2);
     }
 
     @Test

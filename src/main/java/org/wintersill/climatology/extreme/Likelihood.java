@@ -25,13 +25,16 @@ final class Likelihood {
     /**
      * Nelder and Mead's simplex, begun anew at its own result until nothing is gained.
      *
-     * @param start where the function is finite
+     * @param start where the function is finite; where it is not, the start is all that comes back
      * @param steps size of the first simplex along each axis
      * @return the point; its value is asked of the function
      */
     static double[] lowest(MultivariateFunction function, double[] start, double[] steps) {
         double[] best = start.clone();
         double lowest = function.value(best);
+        if (Double.isInfinite(lowest)) {
+            return best;
+        }
         double[] size = steps.clone();
         for (int restart = 0; restart < MOST_RESTARTS; restart++) {
             double[] point = search(function, best, size);
