@@ -33,7 +33,6 @@ public final class ClimatologyStatistics {
             return targets[0];
         }
 
-
         /** Position of the killing level. */
         public int killingLevel() {
             for (int i = 0; i < levels.length; i++) {

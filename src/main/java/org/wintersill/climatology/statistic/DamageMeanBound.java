@@ -67,7 +67,7 @@ final class DamageMeanBound implements ClimatologyStatistic {
         double[] means = new double[DRAWS];
         double tail = (1 - confidence) / 2;
         for (int cell = 0; cell < record.cells(); cell++) {
-            int n = WinterRecord.valid(record.damage(), cell, damage);
+            int n = WinterRecord.valid(record.expectedDamage(), cell, damage);
             if (n == 0) {
                 bounds[0][cell] = Float.NaN;
                 bounds[1][cell] = Float.NaN;
