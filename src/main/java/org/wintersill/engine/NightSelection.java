@@ -176,7 +176,8 @@ final class NightSelection {
                 float reference = 0;
                 float factor = measure.factor() == null ? 1 : 0;
                 for (int n = from; n < to; n++) {
-                    reference = Math.max(reference, Math.abs(measure.reference()[positions[n]]));
+                    float of = Math.abs(measure.reference()[positions[n]]);
+                    reference = of < Float.POSITIVE_INFINITY ? Math.max(reference, of) : reference;
                     factor = measure.factor() == null ? 1 : Math.max(factor, measure.factor()[positions[n]]);
                 }
                 for (int t = 0; t < bounds.tiles(); t++) {

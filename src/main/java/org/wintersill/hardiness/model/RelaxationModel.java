@@ -96,6 +96,11 @@ public record RelaxationModel(MonthDay start, double initial, double level, Part
         return new Trajectory(this, season, latitudes);
     }
 
+    @Override
+    public int bytesPerCell() {
+        return 5 * Double.BYTES;
+    }
+
     /** Reads the parameters of an entry; empty after problems. */
     static Optional<HardinessModel> read(ModelParameters entry) {
         int before = entry.problems();

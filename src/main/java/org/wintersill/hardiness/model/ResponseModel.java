@@ -100,6 +100,11 @@ public record ResponseModel(FourParameterLogistic autumn, FourParameterLogistic 
         return new Trajectory(this, season, latitudes.length);
     }
 
+    @Override
+    public int bytesPerCell() {
+        return days * Float.BYTES + 6 * Double.BYTES;
+    }
+
     /** Reads the parameters of an entry; empty after problems. */
     static Optional<HardinessModel> read(ModelParameters entry) {
         int before = entry.problems();

@@ -59,6 +59,11 @@ public record StageAfterBudbreak(StateModel before, HardinessModel stages) imple
                 stages instanceof StageDegreeDays timed ? timed.beginAfter(latitudes.length) : null, latitudes.length);
     }
 
+    @Override
+    public int bytesPerCell() {
+        return before.bytesPerCell() + (stages instanceof StateModel timed ? timed.bytesPerCell() : 0) + 4 * Float.BYTES;
+    }
+
     /** Both states; the stages stand still until budbreak. */
     private static final class Trajectory implements HardinessTrajectory {
         private final HardinessTrajectory before;

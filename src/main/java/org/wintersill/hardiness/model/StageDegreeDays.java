@@ -73,6 +73,11 @@ public record StageDegreeDays(double base, MonthDay from, List<Stage> stages, Li
         return new Trajectory(this, firstDay(season), latitudes.length);
     }
 
+    @Override
+    public int bytesPerCell() {
+        return 4 * Double.BYTES;
+    }
+
     /** Stages that wait for another model: every day that is taken counts. */
     HardinessTrajectory beginAfter(int cells) {
         return new Trajectory(this, Integer.MIN_VALUE, cells);
