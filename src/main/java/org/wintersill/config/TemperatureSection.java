@@ -22,6 +22,9 @@ final class TemperatureSection {
     private static final Pattern DATE = Pattern.compile("(\\d{4})-(\\d{2})-(\\d{2})");
     /** One or more of the date letters, with anything that is no letter in between. */
     private static final Pattern DATE_PATTERN = Pattern.compile("[^A-Za-z]*(yyyy)[^A-Za-z]*((MM[^A-Za-z]*(dd)?)|DDD)[^A-Za-z]*");
+    /** Bounds of the daily range, K: none on earth is outside of them; project choice. */
+    private static final double SMALLEST_RANGE = 0.5;
+    private static final double LARGEST_RANGE = 60;
     private static final String ACCEPTED_DATES = "a pattern such as yyyyMMdd, yyyy_MM or yyyyDDD";
 
     private final InputFinder finder;
@@ -45,15 +48,21 @@ final class TemperatureSection {
         Optional<YamlValue> maximum = section.value("maximum");
         Optional<YamlValue> mean = section.value("mean");
         Words forAll = words(section);
-        section.later("daily-range");
+        Optional<Double> range = section.number("daily-range", SMALLEST_RANGE, LARGEST_RANGE, "a difference in K between "
+                + SMALLEST_RANGE + " and " + LARGEST_RANGE);
         section.finish();
         if (maximum.isPresent() && mean.isPresent()) {
             section.problem("mean", "maximum and mean are both given", "Keep one of the two; the mean is used as it is");
         }
+        if (range.isPresent() && (maximum.isPresent() || mean.isPresent())) {
+            section.problem("daily-range", "daily-range and " + (maximum.isPresent() ? "maximum" : "mean") + " are both given",
+                    "Keep one of the two; with files the daily range is not needed");
+        }
         Optional<TemperatureEntry> minima = minimum.flatMap(value -> entry(value, section, ForcingVariable.MINIMUM.word(), ForcingVariable.MINIMUM, forAll, tree));
         Optional<TemperatureEntry> maxima = maximum.flatMap(value -> entry(value, section, ForcingVariable.MAXIMUM.word(), ForcingVariable.MAXIMUM, forAll, tree));
         Optional<TemperatureEntry> means = mean.flatMap(value -> entry(value, section, ForcingVariable.MEAN.word(), ForcingVariable.MEAN, forAll, tree));
-        return minima.map(entry -> new TemperatureConfig(entry, maxima, means));
+        range.ifPresent(number -> tree.put("daily-range", number));
+        return minima.map(entry -> new TemperatureConfig(entry, maxima, means, range));
     }
 
     /** One entry by itself. */

@@ -2,6 +2,7 @@ package org.wintersill.engine;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.stream.IntStream;
 import org.wintersill.elevation.SourcePositions;
 import org.wintersill.elevation.TargetTiles;
 import org.wintersill.engine.FoldPlan.Band;
@@ -135,7 +136,7 @@ public final class FoldPlanner {
     }
 
     private int longestSeason() {
-        return job.seasons().stream().mapToInt(season -> season.days() - job.states().firstDay(season)).max().orElse(1);
+        return IntStream.range(0, job.seasons().size()).map(s -> job.seasons().get(s).days() - job.states().firstDay(s)).max().orElse(1);
     }
 
     /**
@@ -200,7 +201,7 @@ public final class FoldPlanner {
         List<Piece> pieces = new ArrayList<>();
         for (int s = 0; s < job.seasons().size(); s++) {
             Season season = job.seasons().get(s);
-            int first = axis.firstIndexFrom(season.firstDay() + job.states().firstDay(season));
+            int first = axis.firstIndexFrom(season.firstDay() + job.states().firstDay(s));
             int end = axis.firstIndexFrom(season.firstDay() + season.days());
             pieces.add(new Piece(s, first, end - first, true, true));
         }

@@ -7,7 +7,6 @@ import org.wintersill.elevation.LaneAdjuster;
 import org.wintersill.engine.FoldPlan.Band;
 import org.wintersill.engine.FoldPlan.Batch;
 import org.wintersill.engine.FoldPlan.Piece;
-import org.wintersill.grid.GridGeometry;
 import org.wintersill.season.StateLane;
 import org.wintersill.season.WinterValues;
 import org.wintersill.time.DayAxis;
@@ -83,7 +82,8 @@ final class StateFold implements AutoCloseable {
         StateLane lane = lane(slot, rows * job.targetColumns());
         Season season = job.seasons().get(piece.season());
         if (piece.opens()) {
-            lane.begin(season, latitudes(firstRow, rows));
+            lane.begin(season, forcing.firstDays().get(piece.season()),
+                    forcing.latitudes(job.adjustment().positions().target(), firstRow, 0, rows, job.targetColumns()));
         }
         if (adjusters[worker] == null) {
             adjusters[worker] = new LaneAdjuster(job.adjustment());
@@ -115,25 +115,6 @@ final class StateFold implements AutoCloseable {
             lanes[slot] = new StateLane(forcing.cultivars(), job.reckoning(), cells);
         }
         return lanes[slot];
-    }
-
-    private double[] latitudes(int firstRow, int rows) {
-        return latitudes(job.adjustment().positions().target(), forcing, firstRow, 0, rows, job.targetColumns());
-    }
-
-    /** Latitudes of the centres of a block of target cells, row by row, degrees north. */
-    static double[] latitudes(GridGeometry target, StateForcing forcing, int firstRow, int firstColumn, int rows, int columns) {
-        double[] places = new double[2 * rows * columns];
-        for (int i = 0; i < rows * columns; i++) {
-            places[2 * i] = target.centreX(firstColumn + i % columns);
-            places[2 * i + 1] = target.centreY(firstRow + i / columns);
-        }
-        forcing.toGeographic().transform(places, rows * columns);
-        double[] latitudes = new double[rows * columns];
-        for (int i = 0; i < latitudes.length; i++) {
-            latitudes[i] = places[2 * i + 1];
-        }
-        return latitudes;
     }
 
     /** Ends a winter of a lane. */

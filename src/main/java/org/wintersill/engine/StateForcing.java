@@ -1,12 +1,12 @@
 package org.wintersill.engine;
 
+import java.util.Arrays;
 import java.util.List;
 import org.wintersill.grid.CoordinateOperation;
+import org.wintersill.grid.GridGeometry;
 import org.wintersill.season.StateCultivar;
-import org.wintersill.season.StateLane;
 import org.wintersill.temperature.DailyTemperatureSource;
 import org.wintersill.temperature.ForcingVariable;
-import org.wintersill.time.Season;
 
 /**
  * What the cultivars with state models need beside the daily minima: the daily mean.
@@ -15,20 +15,23 @@ import org.wintersill.time.Season;
  * / 2 where neither is.
  *
  * @param cultivars those with a state model; none where the job has none
+ * @param firstDays {@code [season][cultivar]}: first day whose mean the model is told, as a position in the winter's window; negative
+ *     before it
  * @param second daily maxima or means on the grid and the days of the job's minima; null where there are none
  * @param dailyRange Tmax - Tmin, K; not used where there is a second record
  * @param toGeographic from the target's system to degrees of longitude and latitude
  */
-public record StateForcing(List<StateCultivar> cultivars, DailyTemperatureSource second, double dailyRange,
+public record StateForcing(List<StateCultivar> cultivars, List<int[]> firstDays, DailyTemperatureSource second, double dailyRange,
                            CoordinateOperation toGeographic) {
 
     public StateForcing {
         cultivars = List.copyOf(cultivars);
+        firstDays = List.copyOf(firstDays);
     }
 
     /** For a job whose curves all depend on the date alone. */
     public static StateForcing none() {
-        return new StateForcing(List.of(), null, 0, CoordinateOperation.identity());
+        return new StateForcing(List.of(), List.of(), null, 0, CoordinateOperation.identity());
     }
 
     public boolean isNone() {
@@ -44,9 +47,29 @@ public record StateForcing(List<StateCultivar> cultivars, DailyTemperatureSource
         return second != null && second.variable() == ForcingVariable.MAXIMUM;
     }
 
-    /** First day whose mean is wanted, as a position in the winter's window; not positive. */
-    public int firstDay(Season season) {
-        return StateLane.firstDay(cultivars, season);
+    /** How the daily mean comes about, in a few words. */
+    public String describe() {
+        return second == null ? "minimum + " + dailyRange / 2 + " K" : hasMaxima() ? "of minimum and maximum" : "given";
+    }
+
+    /** First day of a winter that any of the cultivars takes, as a position in its window; not positive, since the nights begin there. */
+    public int firstDay(int season) {
+        return isNone() ? 0 : Math.min(0, Arrays.stream(firstDays.get(season)).min().orElse(0));
+    }
+
+    /** Latitudes of the centres of a block of target cells, row by row, degrees north. */
+    public double[] latitudes(GridGeometry target, int firstRow, int firstColumn, int rows, int columns) {
+        double[] places = new double[2 * rows * columns];
+        for (int i = 0; i < rows * columns; i++) {
+            places[2 * i] = target.centreX(firstColumn + i % columns);
+            places[2 * i + 1] = target.centreY(firstRow + i / columns);
+        }
+        toGeographic.transform(places, rows * columns);
+        double[] latitudes = new double[rows * columns];
+        for (int i = 0; i < latitudes.length; i++) {
+            latitudes[i] = places[2 * i + 1];
+        }
+        return latitudes;
     }
 
     /**

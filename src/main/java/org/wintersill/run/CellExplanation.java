@@ -2,6 +2,7 @@ package org.wintersill.run;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import org.wintersill.elevation.LaneAdjuster;
 import org.wintersill.grid.Block;
 import org.wintersill.grid.CoordinateOperations;
@@ -12,6 +13,7 @@ import org.wintersill.problem.NearestName;
 import org.wintersill.problem.Problem;
 import org.wintersill.season.CompletenessTally;
 import org.wintersill.season.NightCurve;
+import org.wintersill.season.Phases;
 import org.wintersill.season.WinterLane;
 import org.wintersill.season.WinterValues;
 import org.wintersill.temperature.DailyTemperatureReader;
@@ -51,10 +53,13 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
      * @param interpolated value between source cells, before the change of height
      * @param lapseRate K/km of the night
      * @param tmin value at the cell's own height
+     * @param tmean daily mean of the date as a state model is told it, degC; NaN for curves by date and where it is missing
+     * @param phase {@code autumn}, {@code midwinter} or {@code spring}, which begins with the state of the cultivar (science 16.12); null for
+     *     curves by date
      * @param margin with the fold's own arithmetic, so that the lowest of a winter's nights is the winter's margin to the bit
      */
-    public record Night(String date, float source, float interpolated, double lapseRate, float tmin, double lt10, double lt50,
-                        double lt90, float margin, double damage) {
+    public record Night(String date, float source, float interpolated, double lapseRate, float tmin, float tmean, String phase,
+                        double lt10, double lt50, double lt90, float margin, double damage) {
     }
 
     /** The temperatures of one winter at the cell. */
@@ -91,10 +96,10 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
         List<List<Winter>> courses = new ArrayList<>();
         List<WinterValues> values = new ArrayList<>();
         plan.cultivars().forEach(cultivar -> courses.add(new ArrayList<>()));
-        try (DailyTemperatureReader reader = plan.source().open()) {
+        try (DailyTemperatureReader reader = plan.source().open(); CellStates states = new CellStates(plan, row, column)) {
             for (int s : wanted) {
                 Temperatures temperatures = temperatures(plan, reader, plan.seasons().get(s), row, column);
-                values.add(addWinter(plan, s, temperatures, courses));
+                values.add(addWinter(plan, s, temperatures, states, courses));
             }
         }
         List<CultivarCourse> cultivars = new ArrayList<>();
@@ -177,7 +182,8 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
         return values;
     }
 
-    private static WinterValues addWinter(RunPlan plan, int s, Temperatures temperatures, List<List<Winter>> courses) {
+    private static WinterValues addWinter(RunPlan plan, int s, Temperatures temperatures, CellStates states,
+                                  List<List<Winter>> courses) {
         Season season = plan.seasons().get(s);
         NightCurve[] curves = plan.job().curves().get(s);
         WinterLane lane = new WinterLane(curves.length, plan.job().levels(), plan.job().reckoning(), 1);
@@ -188,12 +194,14 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             lane.accept(curves, night, 1, new int[] {n});
         }
         WinterValues values = lane.finish(cell -> temperatures.complete());
+        Map<Integer, CellStates.Course> stateCourses = states.follow(s, temperatures.complete(), values);
         for (int c = 0; c < curves.length; c++) {
             float worst = values.worstNight(c)[0];
             boolean valid = !Float.isNaN(worst);
             courses.get(c).add(new Winter(season.label(), valid, values.margin(c, 0)[0], values.damage(c)[0],
                     valid ? season.date((int) worst).toString() : null,
-                    nights(season, plan, plan.cultivars().get(c), curves[c], temperatures)));
+                    curves[c] == null ? nights(season, plan, plan.cultivars().get(c), stateCourses.get(c), temperatures)
+                            : nights(season, plan, plan.cultivars().get(c), curves[c], temperatures)));
         }
         return values;
     }
@@ -207,9 +215,34 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             double lt90 = course.lt90()[n];
             float tmin = temperatures.tmin()[n];
             nights.add(new Night(season.date(n).toString(), temperatures.source()[n], temperatures.interpolated()[n],
-                    plan.adjustment().lapseRates().ofMonth(season.date(n).month()), tmin, lt10, lt50, lt90,
+                    plan.adjustment().lapseRates().ofMonth(season.date(n).month()), tmin, Float.NaN, null, lt10, lt50, lt90,
                     Double.isNaN(lt50) ? Float.NaN : tmin - curve.lethal()[0][n], cultivar.tolerance().killedFraction(tmin, lt10, lt50, lt90)));
         }
         return nights;
+    }
+
+    private static List<Night> nights(Season season, RunPlan plan, Cultivar cultivar, CellStates.Course course, Temperatures temperatures) {
+        Phases byDate = Phases.of(season, plan.job().reckoning().south());
+        List<Night> nights = new ArrayList<>();
+        for (int n = 0; n < season.days(); n++) {
+            float lt10 = course.lt10()[n];
+            float lt50 = course.lt50()[n];
+            float lt90 = course.lt90()[n];
+            float tmin = temperatures.tmin()[n];
+            nights.add(new Night(season.date(n).toString(), temperatures.source()[n], temperatures.interpolated()[n],
+                    plan.adjustment().lapseRates().ofMonth(season.date(n).month()), tmin, course.mean()[n], phase(byDate, n, course.spring()),
+                    shortest(lt10), shortest(lt50), shortest(lt90), tmin - lt50, cultivar.tolerance().killedFraction(tmin, lt10, lt50, lt90)));
+        }
+        return nights;
+    }
+
+    /** Spring begins with the change of the state, but not before midwinter does (science 16.12). */
+    private static String phase(Phases byDate, int night, int spring) {
+        return night < byDate.midwinter() ? "autumn" : night < spring ? "midwinter" : "spring";
+    }
+
+    /** The number of the fewest digits that stands for the same float. */
+    private static double shortest(float value) {
+        return Double.parseDouble(Float.toString(value));
     }
 }

@@ -20,6 +20,8 @@ final class Estimates {
     private static final double READ_RATE = 150e6;
     /** Cell-nights times cultivars a second and thread. */
     private static final double FOLD_RATE = 1e9;
+    /** Cell-days times cultivars with a state model a second and thread. */
+    private static final double STATE_RATE = 40e6;
     /** Bytes of layers a second and thread. */
     private static final double WRITE_RATE = 40e6;
     private static final double START_SECONDS = 1.5;
@@ -58,8 +60,9 @@ final class Estimates {
         long winterLayers = outputs.winters() ? 4 * cells * winters * (1 + 3L * cultivars) : 0;
         double nights = plan.batches().stream().mapToLong(FoldPlan.Batch::count).sum();
         double seconds = START_SECONDS
-                + nights * job.window().cells() * 4 * plan.bands().size() / READ_RATE / plan.threads()
+                + nights * job.window().cells() * 4 * (job.states().hasSecond() ? 2 : 1) * plan.bands().size() / READ_RATE / plan.threads()
                 + nights * cells * cultivars / FOLD_RATE / plan.threads()
+                + nights * cells * job.states().cultivars().size() / STATE_RATE / plan.threads()
                 + (summaries + winterLayers) / WRITE_RATE / plan.threads();
         long kept = plan.memory().items().getOrDefault(FoldPlanner.TARGET, 0L);
         long memory = Math.max(plan.memory().total(), kept + writerBytes) + residentBytes(job.adjustment().positions().target(), cultivars);

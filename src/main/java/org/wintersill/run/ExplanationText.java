@@ -51,6 +51,8 @@ public final class ExplanationText {
         entry.put("date", night.date());
         entry.put("source", JsonText.number(night.source()));
         entry.put("tmin", JsonText.number(night.tmin()));
+        entry.put("tmean", JsonText.number(night.tmean()));
+        entry.put("phase", night.phase());
         entry.put("lt10", JsonText.number(night.lt10()));
         entry.put("lt50", JsonText.number(night.lt50()));
         entry.put("lt90", JsonText.number(night.lt90()));
@@ -62,13 +64,13 @@ public final class ExplanationText {
     /** One row a night and cultivar. */
     public static String csv(CellExplanation cell) {
         CsvText csv = new CsvText("cultivar", "winter", "date", "source_degc", "interpolated_degc", "lapse_rate_k_per_km",
-                "height_change_m", "tmin_degc", "lt10_degc", "lt50_degc", "lt90_degc", "margin_k", "damage");
+                "height_change_m", "tmin_degc", "tmean_degc", "phase", "lt10_degc", "lt50_degc", "lt90_degc", "margin_k", "damage");
         for (CultivarCourse course : cell.cultivars()) {
             for (Winter winter : course.winters()) {
                 for (Night night : winter.nights()) {
                     csv.row(course.cultivar().id(), winter.label(), night.date(), night.source(), night.interpolated(),
-                            night.lapseRate(), cell.heightChange(), night.tmin(), night.lt10(), night.lt50(), night.lt90(),
-                            night.margin(), night.damage());
+                            night.lapseRate(), cell.heightChange(), night.tmin(), night.tmean(), night.phase(),
+                            night.lt10(), night.lt50(), night.lt90(), night.margin(), night.damage());
                 }
             }
         }
@@ -103,13 +105,16 @@ public final class ExplanationText {
 
     private static void coldest(StringBuilder text, Winter winter, int count, float heightChange) {
         line(text, "  nights of the lowest margins:");
-        line(text, "  date        source  interpolated  + height    = Tmin     LT10     LT50     LT90  margin K  damage");
-        winter.nights().stream().filter(night -> !Float.isNaN(night.tmin()))
+        boolean means = winter.nights().stream().anyMatch(night -> !Float.isNaN(night.tmean()));
+        line(text, "  date        source  interpolated  + height    = Tmin %s    LT10     LT50     LT90  margin K  damage%s",
+                means ? "   Tmean " : "", means ? "  phase" : "");
+        winter.nights().stream().filter(night -> !Float.isNaN(night.margin()))
                 .sorted(java.util.Comparator.comparingDouble(Night::margin).thenComparing(Night::date)).limit(count)
-                .forEach(night -> line(text, "  %s %8.2f %13.2f %9.2f %9.2f %8.2f %8.2f %8.2f %+9.2f %7.3f", night.date(),
+                .forEach(night -> line(text, "  %s %8.2f %13.2f %9.2f %9.2f %s%8.2f %8.2f %8.2f %+9.2f %7.3f%s", night.date(),
                         night.source(), night.interpolated(),
-                        Float.isNaN(heightChange) ? 0 : -night.lapseRate() * heightChange / 1000, night.tmin(), night.lt10(),
-                        night.lt50(), night.lt90(), night.margin(), night.damage()));
+                        Float.isNaN(heightChange) ? 0 : -night.lapseRate() * heightChange / 1000, night.tmin(),
+                        means ? format("%8.2f ", night.tmean()) : "", night.lt10(), night.lt50(), night.lt90(), night.margin(),
+                        night.damage(), means && night.phase() != null ? "  " + night.phase() : ""));
     }
 
     private static void line(StringBuilder text, String form, Object... values) {

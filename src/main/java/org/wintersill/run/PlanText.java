@@ -31,6 +31,9 @@ public final class PlanText {
         document.put("calendar", days.calendar().cfName());
         document.put("missing-days", days.missingCount());
         document.put("gaps", days.gaps(MOST_GAPS));
+        if (!plan.job().states().isNone()) {
+            document.put("daily-mean", plan.job().states().describe());
+        }
         document.put("winter-window", plan.window().from() + " to " + plan.window().to());
         document.put("winters", plan.seasons().stream().map(Season::label).toList());
         Map<String, Object> dropped = new LinkedHashMap<>();
@@ -61,6 +64,9 @@ public final class PlanText {
         if (!gaps.isEmpty()) {
             line(text, "missing days", days.missingCount() + ": " + String.join(", ", gaps)
                     + (gaps.size() == MOST_GAPS ? ", ..." : ""));
+        }
+        if (!plan.job().states().isNone()) {
+            line(text, "daily mean", plan.job().states().describe());
         }
         line(text, "winter", plan.window().from() + " to " + plan.window().to() + "; " + plan.window().completeFrom() + " to "
                 + plan.window().completeTo() + " must be complete (" + plan.job().policy().key() + ")");

@@ -64,14 +64,12 @@ public final class RunPlanner {
         List<DailyTemperatureSource> opened = new ArrayList<>();
         problems.attempt(() -> cultivars.addAll(new CultivarSelection(config.cultivars()).read(notices)));
         problems.attempt(() -> opened.add(formats.open(config.temperature().minimum(), notices)));
+        problems.attempt(() -> DailyMeans.require(cultivars, config));
         problems.attempt(() -> LayerSelection.check(config.outputs().layers(),
                 choices(config, new int[ExtremeFit.FEWEST_WINTERS], reckoning(config, true, false))));
         problems.throwIfAny();
         DailyTemperatureSource source = config.scenario().isPresent()
                 ? ScenarioPlan.of(config.scenario().get(), opened.get(0), formats, operations, notices) : opened.get(0);
-        if (config.temperature().maximum().isPresent() || config.temperature().mean().isPresent()) {
-            notices.add("no model of this run needs the daily mean: maximum and mean temperatures are not read");
-        }
         for (Cultivar cultivar : cultivars) {
             if (!cultivar.status().dependable()) {
                 notices.add("the curve of cultivar " + cultivar.id() + " is " + cultivar.status().word()
@@ -88,15 +86,18 @@ public final class RunPlanner {
         GridGeometry target = targetPlan.target();
         SeasonWindow window = window(config.winter(), target, notices);
         MissingDayPolicy policy = MissingDayPolicy.named(config.missingDays()).orElseThrow();
-        WinterSelection winters = WinterSelection.of(source.days(), window, policy);
+        DailyMeans means = DailyMeans.of(config.temperature(), cultivars, window, source, formats, notices);
+        WinterSelection winters = means.winters(WinterSelection.of(source.days(), window, policy));
         checkWinters(winters, source, sourceName);
         checkCoverage(cultivars, window, config);
         tellOfWinters(winters, config, notices);
+        means.tellOfGaps(winters.used(), notices);
         DamageReckoning reckoning = reckoning(config,
                 PhaseShare.IDS.stream().anyMatch(new LayerSelection(config.outputs().layers())::contains), window.hemisphere() == Hemisphere.SOUTH);
         ClimatologyStatistics.Choices choices = choices(config, winters.used().stream().mapToInt(Season::year).toArray(), reckoning);
-        FoldJob job = new FoldJob(source, targetPlan.window(), targetPlan.adjustment(), winters.used(), policy,
-                curves(cultivars, winters.used(), choices), choices.levels().length, reckoning);
+        FoldJob job = new FoldJob(means.minima(), targetPlan.window(), targetPlan.adjustment(), winters.used(), policy,
+                curves(cultivars, winters.used(), choices), choices.levels().length, reckoning,
+                means.forcing(winters.used(), target, choices.levels(), operations));
         int threads = config.limits().threads().orElse(Runtime.getRuntime().availableProcessors());
         long budget = Estimates.budget(config.limits());
         long writers = Estimates.writerBytes(target, choices, config.outputs());
@@ -151,8 +152,8 @@ public final class RunPlanner {
         List<NightCurve[]> curves = new ArrayList<>();
         for (Season season : seasons) {
             Phases phases = Phases.of(season, choices.reckoning().south());
-            curves.add(cultivars.stream().map(cultivar -> NightCurve.of(((CalendarModel) cultivar.model()).overSeason(season),
-                            cultivar.tolerance(), others, phases))
+            curves.add(cultivars.stream().map(cultivar -> cultivar.model() instanceof CalendarModel model
+                            ? NightCurve.of(model.overSeason(season), cultivar.tolerance(), others, phases) : null)
                     .toArray(NightCurve[]::new));
         }
         return curves;

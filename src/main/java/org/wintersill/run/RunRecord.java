@@ -11,6 +11,7 @@ import org.wintersill.config.AreaConfig;
 import org.wintersill.config.PolygonEntry;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.problem.Notices;
+import org.wintersill.temperature.DailyTemperatureSource;
 import org.wintersill.temperature.SourceFile;
 
 /**
@@ -59,16 +60,10 @@ final class RunRecord {
     private static List<Map<String, Object>> inputs(RunPlan plan, Map<Path, String> digests) {
         List<Map<String, Object>> inputs = new ArrayList<>();
         Path base = plan.config().baseFolder().toAbsolutePath().normalize();
-        for (SourceFile file : plan.source().files()) {
-            Map<String, Object> entry = entry(base, Path.of(file.path()), "minimum temperature", digests);
-            entry.put("format", file.format());
-            entry.put("variable", file.variable());
-            entry.put("unit", file.unit());
-            entry.put("calendar", file.calendar());
-            entry.put("period", file.firstDate() + " to " + file.lastDate());
-            entry.put("days", file.dayCount());
-            entry.put("grid", file.grid());
-            inputs.add(entry);
+        plan.source().files().forEach(file -> inputs.add(temperatures(base, file, plan.source(), digests)));
+        if (plan.job().states().hasSecond()) {
+            DailyTemperatureSource second = plan.job().states().second();
+            second.files().forEach(file -> inputs.add(temperatures(base, file, second, digests)));
         }
         plan.config().elevation().ifPresent(elevation -> {
             inputs.add(entry(base, elevation.dem().file(), "terrain model", digests));
@@ -79,10 +74,26 @@ final class RunRecord {
         return inputs;
     }
 
+    private static Map<String, Object> temperatures(Path base, SourceFile file, DailyTemperatureSource source,
+                                                    Map<Path, String> digests) {
+        Map<String, Object> entry = entry(base, Path.of(file.path()), source.variable().word() + " temperature", digests);
+        entry.put("format", file.format());
+        entry.put("variable", file.variable());
+        entry.put("unit", file.unit());
+        entry.put("calendar", file.calendar());
+        entry.put("period", file.firstDate() + " to " + file.lastDate());
+        entry.put("days", file.dayCount());
+        entry.put("grid", file.grid());
+        return entry;
+    }
+
     /** All input files of a run. */
     static List<Path> inputFiles(RunPlan plan) {
         List<Path> files = new ArrayList<>();
         plan.source().files().forEach(file -> files.add(Path.of(file.path())));
+        if (plan.job().states().hasSecond()) {
+            plan.job().states().second().files().forEach(file -> files.add(Path.of(file.path())));
+        }
         plan.config().elevation().ifPresent(elevation -> {
             files.add(elevation.dem().file());
             elevation.sourceHeight().ifPresent(height -> files.add(height.file()));

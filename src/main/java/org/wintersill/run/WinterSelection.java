@@ -2,6 +2,9 @@ package org.wintersill.run;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
+import org.wintersill.hardiness.Cultivar;
+import org.wintersill.hardiness.StateModel;
 import org.wintersill.run.RunPlan.DroppedWinter;
 import org.wintersill.season.CompletenessTally;
 import org.wintersill.season.MissingDayPolicy;
@@ -42,5 +45,28 @@ record WinterSelection(List<Season> used, List<DroppedWinter> dropped) {
             }
         }
         return new WinterSelection(List.copyOf(used), List.copyOf(dropped));
+    }
+
+    /**
+     * Without the winters for which the daily mean is not known from the day on that a state model begins with: they are left out for
+     * all cultivars, so that every cultivar is judged by the same winters.
+     *
+     * @param known first day whose mean is known
+     */
+    WinterSelection withMeansFrom(long known, List<Cultivar> cultivars) {
+        List<Season> kept = new ArrayList<>();
+        List<DroppedWinter> all = new ArrayList<>(dropped);
+        for (Season season : used) {
+            Optional<Cultivar> early = cultivars.stream().filter(cultivar -> cultivar.model() instanceof StateModel model
+                    && season.firstDay() + model.firstDay(season) < known).findFirst();
+            if (early.isEmpty()) {
+                kept.add(season);
+            } else {
+                all.add(new DroppedWinter(season.label(), "cultivar " + early.get().id() + " begins on "
+                        + season.date(((StateModel) early.get().model()).firstDay(season)) + ", and the daily mean is only known from "
+                        + season.calendar().date(known) + " on"));
+            }
+        }
+        return new WinterSelection(List.copyOf(kept), List.copyOf(all));
     }
 }

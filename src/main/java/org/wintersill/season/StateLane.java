@@ -12,10 +12,13 @@ import org.wintersill.time.Season;
  * {@link WinterLane} gives for cultivars whose curve depends on the date alone.
  *
  * <p>For each day: {@code minima(day)} and {@code means(day)} are filled, then {@link #accept} is called, or {@link #absent}. Days
- * come one after the other from {@link #firstDay} on. A day is worked on {@link MeanRing#LONGEST_GAP} days later, when it is known
+ * come one after the other from {@link #firstDay} on. A day is worked on {@link #LONGEST_GAP} days later, when it is known
  * whether a missing mean can be filled. A lane belongs to one worker at a time.
  */
 public final class StateLane {
+    /** Missing daily means in a row that are filled. */
+    public static final int LONGEST_GAP = MeanRing.LONGEST_GAP;
+
     private final List<StateCultivar> cultivars;
     private final DamageReckoning reckoning;
     private final int cells;
@@ -30,8 +33,6 @@ public final class StateLane {
     private final boolean[] anyBroken;
     private final Witness witness;
     private Season season;
-    /** Whether the record of this winter has begun. */
-    private boolean begun;
     private int earliest;
     private int latest;
 
@@ -85,24 +86,19 @@ public final class StateLane {
         return bytes;
     }
 
-    /** First day that any of the cultivars takes, as a position in the window; at most 0, since the nights begin there. */
-    public static int firstDay(List<StateCultivar> cultivars, Season season) {
-        return cultivars.stream().mapToInt(cultivar -> cultivar.model().earliestDay(season)).reduce(0, Math::min);
-    }
-
     /**
      * Makes ready for a winter.
      *
+     * @param first {@code [cultivar]}, first day whose mean the model is told, as a position in the window
      * @param latitudes {@code [cell]}, degrees north
      */
-    public void begin(Season winter, double[] latitudes) {
+    public void begin(Season winter, int[] first, double[] latitudes) {
         season = winter;
-        earliest = firstDay(cultivars, winter);
+        earliest = Math.min(0, Arrays.stream(first).min().orElse(0));
         latest = earliest - 1;
-        begun = false;
         Phases phases = Phases.of(winter, reckoning.south());
         for (int c = 0; c < values.length; c++) {
-            firstDays[c] = cultivars.get(c).model().earliestDay(winter);
+            firstDays[c] = first[c];
             states[c] = cultivars.get(c).model().begin(winter, latitudes);
             values[c].begin(phases);
             Arrays.fill(broken[c], false);
@@ -133,26 +129,15 @@ public final class StateLane {
     /** The room for the next day was filled. */
     public void accept() {
         latest++;
-        begun = true;
         ring.complete(latest);
-        follow(latest - MeanRing.LONGEST_GAP);
+        follow(latest - LONGEST_GAP);
     }
 
     /** The next day has no record. */
     public void absent() {
         latest++;
-        if (!begun) {
-            beginAfter(latest);
-        }
         ring.absent(latest);
-        follow(latest - MeanRing.LONGEST_GAP);
-    }
-
-    /** A record that begins after the earliest day that a model can use, but not after the one that it must have, is taken from there. */
-    private void beginAfter(int day) {
-        for (int c = 0; c < firstDays.length; c++) {
-            firstDays[c] = Math.max(firstDays[c], Math.min(day + 1, cultivars.get(c).model().firstDay(season)));
-        }
+        follow(latest - LONGEST_GAP);
     }
 
     private void follow(int day) {
@@ -195,7 +180,7 @@ public final class StateLane {
      * @param out takes the values of the lane's cultivars; NaN where the winter does not count
      */
     public void finish(IntPredicate counts, WinterValues out) {
-        while (latest < season.days() - 1 + MeanRing.LONGEST_GAP) {
+        while (latest < season.days() - 1 + LONGEST_GAP) {
             absent();
         }
         boolean[] valid = new boolean[cells];

@@ -131,7 +131,9 @@ class StateFoldLaws {
         }
 
         FoldJob job(ElevationAdjustment adjustment, StorageLayout layout, StorageLayout second) {
-            StateForcing states = new StateForcing(cultivars(), AlignedTemperatureSource.on(days,
+            List<int[]> firstDays = seasons.stream()
+                    .map(season -> new int[] {SEPTEMBER.firstDay(season), AUGUST.firstDay(season)}).toList();
+            StateForcing states = new StateForcing(cultivars(), firstDays, AlignedTemperatureSource.on(days,
                     new MemoryTemperatureSource(grid, maximumDays, second, maxima, ForcingVariable.MAXIMUM)), 0,
                     CoordinateOperation.identity());
             return new FoldJob(AlignedTemperatureSource.on(days, new MemoryTemperatureSource(grid, minimumDays, layout, minima)),

@@ -154,7 +154,7 @@ class ExplainAgreesWithMapTest {
             assertKeys(winter, "winter", "valid", "margin", "damage", "worst-night", "nights");
             assertEquals(273, winter.get("nights").size());
             winter.get("nights").forEach(night ->
-                    assertKeys(night, "date", "source", "tmin", "lt10", "lt50", "lt90", "margin", "damage"));
+                    assertKeys(night, "date", "source", "tmin", "tmean", "phase", "lt10", "lt50", "lt90", "margin", "damage"));
         }
         int row = plan.target().rowAt(50.0011);
         int column = plan.target().columnAt(-37.5012);

@@ -20,6 +20,7 @@ final class RecordFile {
     private int turnedColumns;
     private double turn;
     private boolean unlimited;
+    private String quantity = "minimum";
     private String timeUnit = "days since 1990-01-01";
 
     RecordFile(ColdRecord record) {
@@ -72,6 +73,12 @@ final class RecordFile {
         return this;
     }
 
+    /** Says that the values are maxima or means. */
+    RecordFile quantity(String word) {
+        quantity = word;
+        return this;
+    }
+
     RecordFile hours() {
         timeUnit = "hours since 1990-01-01 00:00:00";
         return this;
@@ -81,7 +88,7 @@ final class RecordFile {
         Map<String, Object> values = new LinkedHashMap<>();
         values.put("standard_name", "air_temperature");
         values.put("units", unit);
-        values.put("cell_methods", "time: minimum");
+        values.put("cell_methods", "time: " + quantity);
         if (type == short.class) {
             values.put("scale_factor", scale);
             values.put("_FillValue", (short) MISSING);
@@ -97,7 +104,7 @@ final class RecordFile {
         file.variable("time", List.of("time"), double.class, attributes("time", timeUnit, "calendar", calendar), times())
                 .variable("lat", List.of("lat"), double.class, attributes("latitude", "degrees_north", "axis", "Y"), latitudes())
                 .variable("lon", List.of("lon"), double.class, attributes("longitude", "degrees_east", "axis", "X"), longitudes())
-                .variable("tmin", order, type, values, values(lengths)).write(path);
+                .variable("t" + quantity.substring(0, 3), order, type, values, values(lengths)).write(path);
     }
 
     private static Map<String, Object> attributes(String standardName, String unit, String name, String value) {
