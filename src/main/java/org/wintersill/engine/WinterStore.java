@@ -21,6 +21,9 @@ import org.wintersill.season.WinterValues;
  * own, so any number of threads may use it.
  */
 public final class WinterStore implements WinterSink, WinterPlanes, AutoCloseable {
+    private static final ThreadLocal<ByteBuffer> ROOM =
+            ThreadLocal.withInitial(() -> ByteBuffer.allocateDirect(1 << 16).order(ByteOrder.LITTLE_ENDIAN));
+
     private final Path file;
     private final FileChannel channel;
     private final int winterPlanes;
@@ -76,8 +79,18 @@ public final class WinterStore implements WinterSink, WinterPlanes, AutoCloseabl
         write(extraPosition(plane, firstRow), values);
     }
 
+    /** The thread's own buffer outside the heap, as the system wants it. */
+    private static ByteBuffer room(int values) {
+        ByteBuffer room = ROOM.get();
+        if (room.capacity() < 4 * values) {
+            room = ByteBuffer.allocateDirect(Math.multiplyExact(4, values)).order(ByteOrder.LITTLE_ENDIAN);
+            ROOM.set(room);
+        }
+        return room.clear().limit(4 * values);
+    }
+
     private void write(long position, float[] values) {
-        ByteBuffer bytes = ByteBuffer.allocate(4 * values.length).order(ByteOrder.LITTLE_ENDIAN);
+        ByteBuffer bytes = room(values.length);
         bytes.asFloatBuffer().put(values);
         try {
             while (bytes.hasRemaining()) {
@@ -107,7 +120,7 @@ public final class WinterStore implements WinterSink, WinterPlanes, AutoCloseabl
     }
 
     private float[] read(long position, int rowCount) {
-        ByteBuffer bytes = ByteBuffer.allocate(4 * columns * rowCount).order(ByteOrder.LITTLE_ENDIAN);
+        ByteBuffer bytes = room(columns * rowCount);
         try {
             while (bytes.hasRemaining() && channel.read(bytes, position + bytes.position()) >= 0) {
                 // until full

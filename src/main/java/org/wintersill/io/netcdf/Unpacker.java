@@ -15,6 +15,8 @@ final class Unpacker {
     static final int WILD_BITS = 0x7fc0beef;
     static final float WILD = Float.intBitsToFloat(WILD_BITS);
 
+    /** Values that are looked at together: a fill value sends so many through the slow way. */
+    private static final int BLOCK = 256;
     private static final VarHandle SHORT_LE = handle(short[].class, ByteOrder.LITTLE_ENDIAN);
     private static final VarHandle SHORT_BE = handle(short[].class, ByteOrder.BIG_ENDIAN);
     private static final VarHandle INT_LE = handle(int[].class, ByteOrder.LITTLE_ENDIAN);
@@ -170,25 +172,39 @@ final class Unpacker {
         return decode(ordered, 0, 0, count, out, at);
     }
 
-    /** Stores one float; the common case is two comparisons. */
-    /** Byte-sorted floats that need no arithmetic: the usual case of large files. */
+    /**
+     * Byte-sorted floats that need no arithmetic: the usual case of large files. A block at a time is put together without looking
+     * at single values; only where one of them is not ordinary is the block gone through again.
+     */
     private boolean planarFloats(byte[] bytes, int from, int plane, int count, float[] out, int at) {
-        int second = from + plane;
-        int third = second + plane;
-        int fourth = third + plane;
         boolean wild = false;
-        for (int i = 0; i < count; i++) {
-            int bits = bytes[from + i] & 0xff | (bytes[second + i] & 0xff) << 8 | (bytes[third + i] & 0xff) << 16
-                    | bytes[fourth + i] << 24;
-            if ((bits & Integer.MAX_VALUE) <= ordinaryBits) {
-                out[at + i] = Float.intBitsToFloat(bits);
-            } else {
-                wild |= single(Float.intBitsToFloat(bits), out, at + i);
+        for (int start = 0; start < count; start += BLOCK) {
+            int length = Math.min(BLOCK, count - start);
+            if (join(bytes, from + start, plane, length, out, at + start) > ordinaryBits) {
+                for (int i = at + start; i < at + start + length; i++) {
+                    wild |= single(out[i], out, i);
+                }
             }
         }
         return wild;
     }
 
+    /** Puts floats together from four planes of bytes, lowest first; gives the bits of the largest amount. */
+    private static int join(byte[] bytes, int from, int plane, int count, float[] out, int at) {
+        int second = from + plane;
+        int third = second + plane;
+        int fourth = third + plane;
+        int largest = 0;
+        for (int i = 0; i < count; i++) {
+            int bits = bytes[from + i] & 0xff | (bytes[second + i] & 0xff) << 8 | (bytes[third + i] & 0xff) << 16
+                    | bytes[fourth + i] << 24;
+            largest = Math.max(largest, bits & Integer.MAX_VALUE);
+            out[at + i] = Float.intBitsToFloat(bits);
+        }
+        return largest;
+    }
+
+    /** Stores one float; the common case is two comparisons. */
     private boolean single(float raw, float[] out, int at) {
         float value = convert(raw);
         if (value >= lowest && value <= highest && !wary) {

@@ -16,8 +16,8 @@ import org.wintersill.problem.ProblemException;
 
 /**
  * One Cloud Optimized GeoTIFF under way. Used by one thread, which may itself belong to the workers. Memory: a few tiles a
- * processor and twelve bytes a tile of the file, whatever the number of bands; disk: the compressed tiles twice until
- * {@link #finish} is done.
+ * processor and twenty bytes a tile of the file, whatever the number of bands; disk: the compressed tiles twice, and 64 KiB a tile,
+ * until {@link #finish} is done.
  */
 public final class CogWriter implements RasterWriter {
     private static final int TILE = PyramidLevel.TILE;
@@ -78,6 +78,9 @@ public final class CogWriter implements RasterWriter {
 
     private void keep(TileJob job) throws IOException {
         spool.append(job.level(), job.band(), job.tile(), job.packed(), job.length());
+        if (job.level() + 1 < levels.size()) {
+            spool.appendQuarter(job.level(), job.band(), job.tile(), job.quarter());
+        }
         if (job.level() == 0) {
             statistics.get(job.band()).add(job.statistics());
         }
@@ -173,6 +176,6 @@ public final class CogWriter implements RasterWriter {
         if (spool == null || spool.tiles() == 0) {
             return tiles * TileCodec.largest(header.layer().type());
         }
-        return (long) (tiles * ((double) spool.bytes() / spool.tiles()));
+        return (long) (tiles * ((double) spool.tileBytes() / spool.tiles()));
     }
 }

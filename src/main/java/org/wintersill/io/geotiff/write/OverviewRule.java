@@ -33,22 +33,33 @@ final class OverviewRule {
     }
 
     /**
-     * Halves a tile into one quarter of the tile above it.
+     * Halves a tile.
      *
      * @param choice which rule
      * @param below {@code [row * 256 + column]}, NaN for missing and beyond the edge of the grid
-     * @param above tile that receives 128 x 128 cells
-     * @param right whether the eastern quarters are meant
-     * @param lower whether the southern quarters are meant
+     * @param half receives {@code [row * 128 + column]}
      */
-    static void halve(Choice choice, float[] below, float[] above, boolean right, boolean lower) {
-        int start = (lower ? HALF * TILE : 0) + (right ? HALF : 0);
+    static void halve(Choice choice, float[] below, float[] half) {
         for (int row = 0; row < HALF; row++) {
             for (int column = 0; column < HALF; column++) {
                 int from = 2 * row * TILE + 2 * column;
-                above[start + row * TILE + column] = cell(choice, below[from], below[from + 1],
-                        below[from + TILE], below[from + TILE + 1]);
+                half[row * HALF + column] = cell(choice, below[from], below[from + 1], below[from + TILE], below[from + TILE + 1]);
             }
+        }
+    }
+
+    /**
+     * Puts a halved tile into a quarter of the tile above it.
+     *
+     * @param half {@code [row * 128 + column]}
+     * @param above tile that receives it
+     * @param right whether an eastern quarter is meant
+     * @param lower whether a southern quarter is meant
+     */
+    static void place(float[] half, float[] above, boolean right, boolean lower) {
+        int start = (lower ? HALF * TILE : 0) + (right ? HALF : 0);
+        for (int row = 0; row < HALF; row++) {
+            System.arraycopy(half, row * HALF, above, start + row * TILE, HALF);
         }
     }
 

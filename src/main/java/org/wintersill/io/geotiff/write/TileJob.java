@@ -1,6 +1,8 @@
 package org.wintersill.io.geotiff.write;
 
 import java.io.IOException;
+import java.nio.ByteBuffer;
+import java.nio.ByteOrder;
 import java.util.Arrays;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.FutureTask;
@@ -9,14 +11,16 @@ import org.wintersill.layer.SampleType;
 /** One tile being made, with all the memory that it needs; used again for tile after tile. */
 final class TileJob implements AutoCloseable {
     private static final int TILE = PyramidLevel.TILE;
+    /** Cells of a halved tile. */
+    private static final int QUARTER = TILE * TILE / 4;
 
     private final SampleType type;
     private final OverviewRule.Choice overviews;
     private final TileCodec codec;
     private final float[] values = new float[TILE * TILE];
     private final ValueStatistics statistics = new ValueStatistics();
-    private float[] below;
-    private byte[] packedBelow;
+    private final float[] half = new float[QUARTER];
+    private final ByteBuffer quarter = ByteBuffer.allocate(4 * QUARTER).order(ByteOrder.nativeOrder());
     private int level;
     private int band;
     private int tile;
@@ -41,6 +45,7 @@ final class TileJob implements AutoCloseable {
             dropWildValues();
             statistics.of(values);
             codec.pack(values);
+            halve();
             return null;
         });
     }
@@ -50,22 +55,24 @@ final class TileJob implements AutoCloseable {
         begin(level, band, tile);
         task = new FutureTask<>(() -> {
             Arrays.fill(values, Float.NaN);
-            if (below == null) {
-                below = new float[TILE * TILE];
-                packedBelow = new byte[codec.packed().length];
-            }
             int firstRow = tile / here.tilesAcross() * 2;
             int firstColumn = tile % here.tilesAcross() * 2;
             for (int row = firstRow; row < Math.min(firstRow + 2, under.tilesDown()); row++) {
                 for (int column = firstColumn; column < Math.min(firstColumn + 2, under.tilesAcross()); column++) {
-                    int length = spool.read(level - 1, band, row * under.tilesAcross() + column, packedBelow);
-                    codec.unpack(packedBelow, length, below);
-                    OverviewRule.halve(overviews, below, values, column > firstColumn, row > firstRow);
+                    spool.readQuarter(level - 1, band, row * under.tilesAcross() + column, quarter);
+                    quarter.flip().asFloatBuffer().get(half);
+                    OverviewRule.place(half, values, column > firstColumn, row > firstRow);
                 }
             }
             codec.pack(values);
+            halve();
             return null;
         });
+    }
+
+    private void halve() {
+        OverviewRule.halve(overviews, values, half);
+        quarter.clear().asFloatBuffer().put(half);
     }
 
     private void begin(int level, int band, int tile) {
@@ -146,6 +153,11 @@ final class TileJob implements AutoCloseable {
 
     int length() {
         return codec.length();
+    }
+
+    /** The tile halved, for the level above: 128 x 128 floats. */
+    ByteBuffer quarter() {
+        return quarter;
     }
 
     /** Statistics of the values of a tile of the full grid. */

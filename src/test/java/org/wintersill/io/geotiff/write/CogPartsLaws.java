@@ -29,7 +29,7 @@ class CogPartsLaws {
         try (TileCodec codec = new TileCodec(type)) {
             codec.pack(values);
             assertTrue(codec.length() <= TileCodec.largest(type));
-            codec.unpack(codec.packed().clone(), codec.length(), back);
+            new TileReading(type).unpack(codec.packed().clone(), codec.length(), back);
         }
         for (int i = 0; i < CELLS; i++) {
             assertEquals(values[i], back[i]);
