@@ -47,13 +47,21 @@ final class NightSelection {
         return (kept[curve][tile][night >> 6] >>> night & 1) != 0;
     }
 
-    /** Whether a night of a tile is kept for any curve. */
-    boolean keeps(int tile, int night) {
-        boolean any = false;
-        for (int c = 0; c < curves && !any; c++) {
-            any = keeps(c, tile, night);
+    /** The first night from the given one that is kept for any curve; -1 if there is none. */
+    int next(int tile, int night) {
+        long mask = -1L << night;
+        for (int word = night >> 6; word < words; word++) {
+            long any = 0;
+            for (int c = 0; c < curves; c++) {
+                any |= kept[c][tile][word];
+            }
+            any &= mask;
+            if (any != 0) {
+                return (word << 6) + Long.numberOfTrailingZeros(any);
+            }
+            mask = -1L;
         }
-        return any;
+        return -1;
     }
 
     /** Begins a row of tiles: no night is kept yet. */
@@ -176,8 +184,9 @@ final class NightSelection {
                 float reference = 0;
                 float factor = measure.factor() == null ? 1 : 0;
                 for (int n = from; n < to; n++) {
-                    float of = Math.abs(measure.reference()[positions[n]]);
-                    reference = of < Float.POSITIVE_INFINITY ? Math.max(reference, of) : reference;
+                    float here = Math.abs(measure.reference()[positions[n]]);
+                    // Infinite on nights without hardiness, which never lower anything.
+                    reference = here < Float.POSITIVE_INFINITY ? Math.max(reference, here) : reference;
                     factor = measure.factor() == null ? 1 : Math.max(factor, measure.factor()[positions[n]]);
                 }
                 for (int t = 0; t < bounds.tiles(); t++) {
@@ -198,8 +207,8 @@ final class NightSelection {
     void refine(int t, TileBounds bounds, List<List<Measure>> measures, int[] positions, float[] lapse, int from, int to, float[] values,
                 int[] offsets, int sourceColumns) {
         refinement.begin(t, bounds, lapse, positions);
-        for (int n = from; n < to; n++) {
-            if (keeps(t, n) && bounds.high(n)[t] < Float.POSITIVE_INFINITY) {
+        for (int n = next(t, from); n >= 0 && n < to; n = next(t, n + 1)) {
+            if (bounds.high(n)[t] < Float.POSITIVE_INFINITY) {
                 refinement.add(n, values, offsets[n], sourceColumns);
             }
         }

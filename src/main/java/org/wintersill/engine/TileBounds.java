@@ -55,6 +55,10 @@ final class TileBounds {
     void add(float[] values, int offset, int sourceColumns) {
         for (int t = 0; t < tiles.size(); t++) {
             TargetTile tile = tiles.get(t);
+            if (tile.nodes() == 4 && tile.sourceRows() == 2 && tile.withHeight() == 15 && addFour(values,
+                    offset + tile.sourceRow() * sourceColumns + tile.sourceColumn(), sourceColumns, t)) {
+                continue;
+            }
             float lowest = Float.POSITIVE_INFINITY;
             float highest = Float.NEGATIVE_INFINITY;
             int count = 0;
@@ -81,6 +85,25 @@ final class TileBounds {
             }
         }
         nights++;
+    }
+
+    /** The usual tile: four nodes, all with values; false where one is missing. */
+    private boolean addFour(float[] values, int from, int sourceColumns, int t) {
+        float a = values[from];
+        float b = values[from + 1];
+        float c = values[from + sourceColumns];
+        float d = values[from + sourceColumns + 1];
+        float lowest = Math.min(Math.min(a, b), Math.min(c, d));
+        float highest = Math.max(Math.max(a, b), Math.max(c, d));
+        if (lowest != lowest) {
+            return false;
+        }
+        seen[t] |= 15;
+        low[nights][t] = lowest;
+        high[nights][t] = highest;
+        present[nights][t] = 4;
+        largest[t] = Math.max(largest[t], Math.max(-lowest, highest));
+        return true;
     }
 
     /** Ends the row: all nights are known. */

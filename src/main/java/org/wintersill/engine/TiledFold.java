@@ -202,13 +202,11 @@ final class TiledFold {
 
     private void foldTile(Room room, WinterLane lane, int t, Nights days) {
         int count = 0;
-        for (int n = 0; n < days.nights().length; n++) {
-            if (room.selection.keeps(t, n)) {
-                room.chosen[count++] = n;
-                if (count == WinterLane.STRETCH) {
-                    foldStretch(room, lane, t, days, count);
-                    count = 0;
-                }
+        for (int n = room.selection.next(t, 0); n >= 0; n = room.selection.next(t, n + 1)) {
+            room.chosen[count++] = n;
+            if (count == WinterLane.STRETCH) {
+                foldStretch(room, lane, t, days, count);
+                count = 0;
             }
         }
         if (count > 0) {

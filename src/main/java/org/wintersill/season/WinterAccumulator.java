@@ -27,6 +27,7 @@ public final class WinterAccumulator {
     private final DamageFold nightly;
     /** {@code [boundary][cell]}: damage reached when a phase ended; no rows where phases are not asked for. */
     private final float[][] reachedAt;
+    private final boolean keepsExpected;
     private int boundary;
     private ToleranceCurve tolerance = ToleranceCurve.SPLIT_LOGISTIC;
 
@@ -34,6 +35,7 @@ public final class WinterAccumulator {
     public WinterAccumulator(int levels, DamageReckoning reckoning, int cells) {
         this.cells = cells;
         lowestMargin = new float[levels][cells];
+        keepsExpected = reckoning.keepsExpected();
         nightly = reckoning.nightByNight() ? new DamageFold(reckoning, cells) : null;
         warm = new float[nightly == null ? cells : 0];
         cold = new float[nightly == null ? cells : 0];
@@ -137,31 +139,50 @@ public final class WinterAccumulator {
         }
     }
 
-    /** Lowest margin to the lethal temperature of a level, K; positive infinity where no night had a value. */
-    public float margin(int level, int cell) {
-        return lowestMargin[level][cell];
-    }
-
-    /** Position in the window of the earliest night with the lowest margin to LT50; -1 where no night had a value. */
-    public int worstNight(int cell) {
-        return worstNight[cell];
+    /**
+     * Hands the winter's values over: NaN where the winter does not count or no night had a value.
+     *
+     * @param valid whether the winter counts, by cell of the lane
+     * @param cultivar number of the cultivar in {@code values}
+     */
+    void finish(boolean[] valid, WinterValues values, int cultivar) {
+        boolean[] known = new boolean[cells];
+        for (int i = 0; i < cells; i++) {
+            known[i] = valid[i] && worstNight[i] >= 0;
+        }
+        for (int level = 0; level < lowestMargin.length; level++) {
+            float[] lowest = lowestMargin[level];
+            float[] margin = values.margin(cultivar, level);
+            for (int i = 0; i < cells; i++) {
+                margin[i] = known[i] ? lowest[i] : Float.NaN;
+            }
+        }
+        float[] damage = values.damage(cultivar);
+        float[] night = values.worstNight(cultivar);
+        for (int i = 0; i < cells; i++) {
+            damage[i] = known[i] ? (float) damage(i) : Float.NaN;
+            night[i] = known[i] ? worstNight[i] : Float.NaN;
+        }
+        for (int i = 0; keepsExpected && i < cells; i++) {
+            values.expectedDamage(cultivar)[i] = known[i] ? (float) nightly.expected(i) : Float.NaN;
+        }
+        for (int end = 0; end < reachedAt.length; end++) {
+            for (int i = 0; i < cells; i++) {
+                values.damageAt(cultivar, end)[i] = known[i] ? (float) damageAt(end, i) : Float.NaN;
+            }
+        }
     }
 
     /** Fraction of buds killed, 0..1, without uncertainty; 0 where no night had a value. */
-    public double damage(int cell) {
+    double damage(int cell) {
         if (nightly != null) {
             return nightly.damage(cell);
         }
         return tolerance.fractionOfDeficit(-(double) (cold[cell] < 0 ? cold[cell] : warm[cell]));
     }
 
-    /** Expected fraction killed with the uncertainty of the reckoning, 0..1; only where the reckoning keeps it. */
-    public double expectedDamage(int cell) {
-        return nightly.expected(cell);
-    }
-
     /** Damage reached when autumn (0) or midwinter (1) ended; that of the whole winter where no night came after. */
-    public double damageAt(int phaseEnd, int cell) {
+    double damageAt(int phaseEnd, int cell) {
         return phaseEnd < boundary ? reachedAt[phaseEnd][cell] : damage(cell);
     }
 }

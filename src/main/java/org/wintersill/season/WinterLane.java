@@ -88,24 +88,13 @@ public final class WinterLane {
      */
     public WinterValues finish(IntPredicate counts) {
         WinterValues values = new WinterValues(cultivars.length, levels, reckoning, cells);
+        boolean[] valid = new boolean[cells];
         for (int i = 0; i < cells; i++) {
-            boolean valid = minimum[i] < Float.POSITIVE_INFINITY && counts.test(i);
-            values.minimum()[i] = valid ? minimum[i] : Float.NaN;
-            for (int c = 0; c < cultivars.length; c++) {
-                WinterAccumulator cultivar = cultivars[c];
-                boolean known = valid && cultivar.worstNight(i) >= 0;
-                for (int level = 0; level < levels; level++) {
-                    values.margin(c, level)[i] = known ? cultivar.margin(level, i) : Float.NaN;
-                }
-                values.damage(c)[i] = known ? (float) cultivar.damage(i) : Float.NaN;
-                values.worstNight(c)[i] = known ? cultivar.worstNight(i) : Float.NaN;
-                if (reckoning.keepsExpected()) {
-                    values.expectedDamage(c)[i] = known ? (float) cultivar.expectedDamage(i) : Float.NaN;
-                }
-                for (int end = 0; reckoning.phases() && end < Phases.BOUNDARIES; end++) {
-                    values.damageAt(c, end)[i] = known ? (float) cultivar.damageAt(end, i) : Float.NaN;
-                }
-            }
+            valid[i] = minimum[i] < Float.POSITIVE_INFINITY && counts.test(i);
+            values.minimum()[i] = valid[i] ? minimum[i] : Float.NaN;
+        }
+        for (int c = 0; c < cultivars.length; c++) {
+            cultivars[c].finish(valid, values, c);
         }
         return values;
     }
