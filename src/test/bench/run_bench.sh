@@ -3,9 +3,10 @@
 #   run_bench.sh JAR FOLDER SIZE [REPEATS]
 # FOLDER keeps the grids (made when absent). SIZE: S (200 x 200, 10 years), M (400 x 400, 20 years) or XS (40 x 40, 4 years, to try the script).
 # Contenders alternate, so that a busy machine troubles all alike; medians and ratios go to results/DATE-SIZE.md with machine, JDK, commit and command.
-# Results are compared with the peer's before anything is timed. JAVA_OPTIONS is handed to java; JOBS names some of: day block classic dem.
+# Results are compared with the peer's before anything is timed. JAVA_OPTIONS is handed to java; JOBS names some of: day block classic dem state.
+# dem: both write the peer's seven layers; the peer does the southern PEER_ROWS rows alone (default 100), and rates are compared. state: a thermal-time model; no peer.
 set -euo pipefail
-[ $# -ge 3 ] || { sed -n 2,6p "$0" >&2; exit 2; }
+[ $# -ge 3 ] || { sed -n 2,7p "$0" >&2; exit 2; }
 jar=$(realpath "$1") folder=$2 name=$3 repeats=${4:-5}
 here=$(cd "$(dirname "$0")" && pwd)
 case $name in
@@ -25,30 +26,41 @@ timed() { /usr/bin/python3 "$here/timed.py" "$@" 2> "$work/stderr" || { tail -5 
 program() { # JOB
   rm -rf "$work/program"
   local inputs
-  if [ "$1" = dem ]; then inputs=("$folder/$name-run.yaml"); else inputs=(--minimum "$folder/$name-$1.nc" --cultivars "$folder/cultivars.yaml"); fi
+  if [ "$1" = dem ]; then
+    inputs=("$folder/$name-run.yaml" --set outputs.winters=false --set outputs.geopackage=false --set "outputs.layers=[margin-mean,margin-low,margin-worst,damage-probability-10,damage-probability-50,damage-probability-90,damage-mean]")
+  elif [ "$1" = state ]; then
+    inputs=("$folder/$name-state.yaml")
+  else inputs=(--minimum "$folder/$name-$1.nc" --cultivars "$folder/cultivars.yaml")
+  fi
   timed java "${java_options[@]}" -jar "$jar" map "${inputs[@]}" --out "$work/program" --quiet
 }
 peer() {
   rm -rf "$work/peer"
   if [ "$1" = dem ]; then
-    timed /usr/bin/python3 "$here/peer_numpy_dem.py" "$folder/$name-day.nc" "$folder/$name-dem.tif" "$folder/$name-orog.nc" "$folder/cultivars.yaml" "$work/peer"
+    timed /usr/bin/python3 "$here/peer_numpy_dem.py" "$folder/$name-day.nc" "$folder/$name-dem.tif" "$folder/$name-orog.nc" "$folder/cultivars.yaml" "$work/peer" "$peer_rows"
   else
     timed /usr/bin/python3 "$here/peer_numpy.py" "$folder/$name-$1.nc" "$folder/cultivars.yaml" "$work/peer"
   fi
 }
-reading() { timed /usr/bin/python3 "$here/read_c_library.py" "$folder/$name-$([ "$1" = dem ] && echo day || echo "$1").nc"; }
+reading() { timed /usr/bin/python3 "$here/read_c_library.py" "$folder/$name-$([ "$1" = dem ] || [ "$1" = state ] && echo day || echo "$1").nc"; }
+peer_rows=${PEER_ROWS:-100}
 
 jobs=(day block classic)
 [ "$name" = M ] || jobs+=(dem)      # the peer holds every winter of the fine grid in memory
 [ -z "${JOBS:-}" ] || read -r -a jobs <<< "$JOBS"
 for job in "${jobs[@]}"; do
+  contenders=(program peer reading)
+  if [ "$job" = state ]; then
+    contenders=(program reading)
+    [ -f "$folder/$name-tmax.nc" ] || /usr/bin/python3 "$here/make_bench_maxima.py" "$folder" "$name"
+  fi
   # The first round warms the file cache and is not counted.
-  program "$job" > /dev/null
-  peer "$job" > /dev/null
-  reading "$job" > /dev/null
-  /usr/bin/python3 "$here/compare_with_peer.py" "$work/program" "$work/peer"
+  for contender in "${contenders[@]}"; do
+    $contender "$job" > /dev/null
+  done
+  [ "$job" = state ] || /usr/bin/python3 "$here/compare_with_peer.py" "$work/program" "$work/peer"
   for ((k = 0; k < repeats; k++)); do
-    for contender in program peer reading; do
+    for contender in "${contenders[@]}"; do
       echo "$job $contender $($contender "$job")" | tee -a "$work/rows"
     done
   done
@@ -71,17 +83,34 @@ print("""# Whole runs, grid $name, $day
 - command: \`run_bench.sh JAR FOLDER $name $repeats\`, JOBS "${JOBS:-all}", JAVA_OPTIONS "${JAVA_OPTIONS:-}"
 - grid: $rows x $rows cells, $years years, five cultivars; dem: ten times finer
 
-Median (least to greatest) wall seconds of $repeats alternating runs, file cache warm. The program writes all its default layers, the peer seven a cultivar; the last contender only
+Median (least to greatest) wall seconds of $repeats alternating runs, file cache warm. The program writes all its default layers (dem: the peer's seven), the peer seven a cultivar; the last contender only
 reads every value with the netCDF C library on one thread. Results of program and peer were compared first.
 
-| job | contender | wall s | processor s | peak MB | wall, program = 1 |
-|---|---|---|---|---|---|""")
+Rates are those of the whole run, start of the JVM and writing included: cell-nights of winters times cultivars (state: cell-days), billions a second.
+
+| job | contender | wall s | processor s | peak MB | wall, program = 1 | G a second |
+|---|---|---|---|---|---|---|""")
+rows_, years_, finer = $rows, $years, 10
+winters = years_ - 1
+def work(job, contender):
+    """Cell-nights (273 a winter, 1 September to 31 May) times cultivars."""
+    if contender == "reading":
+        return None
+    cells = rows_ * rows_
+    if job == "dem":
+        cells *= finer * finer
+        if contender == "peer":
+            cells = min($peer_rows, rows_ * finer) * rows_ * finer
+    return cells * winters * 273 * (1 if job == "state" else 5)
 for job in dict.fromkeys(r[0] for r in rows):
     wall = {c: [float(r[2]) for r in rows if r[:2] == [job, c]] for c in ("program", "peer", "reading")}
+    wall = {c: w for c, w in wall.items() if w}
     for c, w in wall.items():
         mine = [r for r in rows if r[:2] == [job, c]]
-        print("| %s | %s | %.2f (%.2f to %.2f) | %.2f | %.0f | %.2f |" % (job, {"peer": "numpy peer", "reading": "C library, reading only"}.get(c, c), statistics.median(w), min(w), max(w),
-              statistics.median(float(r[3]) for r in mine), max(float(r[4]) for r in mine), statistics.median(w) / statistics.median(wall["program"])))
+        print("| %s | %s | %.2f (%.2f to %.2f) | %.2f | %.0f | %s | %s |" % (job, {"peer": "numpy peer", "reading": "C library, reading only"}.get(c, c), statistics.median(w), min(w), max(w),
+              statistics.median(float(r[3]) for r in mine), max(float(r[4]) for r in mine), 
+              "-" if job == "dem" and c == "peer" else "%.2f" % (statistics.median(w) / statistics.median(wall["program"])),
+              "%.3f" % (work(job, c) / statistics.median(w) / 1e9) if work(job, c) else "-"))
 print("\nRaw rows (job, contender, wall s, processor s, peak MB):\n\n\`\`\`")
 print("".join(" ".join(r) + "\n" for r in rows), end="")
 print("\`\`\`")
