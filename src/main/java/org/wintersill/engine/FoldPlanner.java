@@ -87,11 +87,13 @@ public final class FoldPlanner {
         int sourceRows = bands.stream().mapToInt(band -> band.sourceEnd() - band.sourceRow()).max().orElse(0);
         long sourceCells = (long) sourceRows * job.window().columns();
         int batchDays = batches.stream().mapToInt(Batch::count).max().orElse(0);
-        // State models see every night of every cell, and so do nights that are joined.
-        boolean tiled = job.states().isNone() && job.reckoning().nights().isWorst() && TargetTiles.mayGain(job.adjustment());
-        long laneCells = (long) (tiled ? Math.max(laneRows, TargetTiles.mostRows(columns)) : laneRows) * columns;
-        long kept = whole ? (long) threads * laneRows * columns : (long) bandRows * columns;
         long values = FLOAT * job.planes();
+        long tileRowCells = (long) Math.max(laneRows, TargetTiles.mostRows(columns)) * columns;
+        // State models and joined nights see every night of every cell; rows of tiles must not take the memory that days need.
+        boolean tiled = job.states().isNone() && job.reckoning().nights().isWorst() && TargetTiles.mayGain(job.adjustment())
+                && threads * tileRowCells * 2 * values <= budget / 4;
+        long laneCells = tiled ? tileRowCells : (long) laneRows * columns;
+        long kept = whole ? (long) threads * laneRows * columns : (long) bandRows * columns;
         MemoryEstimate memory = new MemoryEstimate()
                 .add(TARGET, positionBytes())
                 .add(SLAB, batchDays * sourceCells * FLOAT)
