@@ -39,6 +39,14 @@ class DamagedTextLaws {
                 curve:
                   - {date: 10-10, lt10: -7.5, lt50: -9, lt90: -11}
                   - {date: 02-29, lt50: -24, spread: 1.2}
+              - {id: r, model: response, source: s, status: invented, mean-days: 5, spread: 1,
+                 autumn: {tender-limit: -3, hardy-limit: -25, steepness: 0.55, midpoint: 6},
+                 spring: {tender-limit: -3, hardy-limit: -25, steepness: 0.7, midpoint: 2}, spring-from: {chilling: [600, 900]}}
+              - {id: t, built-in: grapevine-merlot, variants: [{id: a, offset: 1}, {id: b, offset: -1}],
+                 after-budbreak: {built-in: grapevine-stages, degree-days: {base: 10, at: {bud burst: 0, first leaf: 35}}}}
+              - {id: x, model: relaxation, source: s, status: invented, initial: -8, time-constants: [3, 7], lt10-above: 2,
+                 lt90-below: 3, target: {level: 2, temperature: {slope: 0.6, from: -10, to: 12}, night: {slope: -1, from: 9, to: 15}}}
+              - {id: p, built-in: peach-stages, dates: {first swelling: 03-10, full bloom: 04-12}, before-first: hold}
             """;
     private static final List<String> PIECES = List.of("{", "}", "[", "]", ":", ": ", "- ", "*t", "&t ", "!!int ", "'", "\"", "\n", "\t",
             "#", "|", ">", "%", "---\n", "?", "~", "-1e999", "99999999999", "\0", "\u2028", "\ud83c\udf31", "..", "-", ".", "=");

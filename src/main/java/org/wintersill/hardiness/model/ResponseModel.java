@@ -102,7 +102,7 @@ public record ResponseModel(FourParameterLogistic autumn, FourParameterLogistic 
 
     @Override
     public int bytesPerCell() {
-        return days * Float.BYTES + 6 * Double.BYTES;
+        return days * Float.BYTES + 7 * Double.BYTES;
     }
 
     /** Reads the parameters of an entry; empty after problems. */
@@ -185,6 +185,7 @@ public record ResponseModel(FourParameterLogistic autumn, FourParameterLogistic 
         private final float[][] ring;
         private final double[] sum;
         private final double[] chill;
+        private final double[] mean;
         private final double[] weight;
         private final double[] autumn;
         private final double[] spring;
@@ -201,6 +202,7 @@ public record ResponseModel(FourParameterLogistic autumn, FourParameterLogistic 
             ring = new float[model.days][cells];
             sum = new double[cells];
             chill = new double[cells];
+            mean = new double[cells];
             weight = new double[cells];
             autumn = new double[cells];
             spring = new double[cells];
@@ -224,11 +226,17 @@ public record ResponseModel(FourParameterLogistic autumn, FourParameterLogistic 
 
         /** LT50 of a night in double precision, {@code [cell]}; to be read before the next call. */
         double[] lt50(int day) {
-            mean(sum, model.days > 0 ? model.days : 1, weight, cells);
-            model.autumn.at(weight, autumn, cells);
-            model.spring.at(weight, spring, cells);
+            mean(sum, model.days > 0 ? model.days : 1, mean, cells);
             weights(day);
-            blend(autumn, spring, weight, cells);
+            if (all(weight, 0, cells)) {
+                model.autumn.at(mean, spring, cells);
+            } else if (all(weight, 1, cells)) {
+                model.spring.at(mean, spring, cells);
+            } else {
+                model.autumn.at(mean, autumn, cells);
+                model.spring.at(mean, spring, cells);
+                blend(autumn, spring, weight, cells);
+            }
             return spring;
         }
 
@@ -243,21 +251,21 @@ public record ResponseModel(FourParameterLogistic autumn, FourParameterLogistic 
         }
 
         @Override
-        public void advance(int day, float[] mean) {
+        public void advance(int day, float[] dayMean) {
             if (model.days > 0) {
                 float[] oldest = ring[taken % model.days];
-                replace(sum, oldest, mean, cells);
-                System.arraycopy(mean, 0, oldest, 0, cells);
+                replace(sum, oldest, dayMean, cells);
+                System.arraycopy(dayMean, 0, oldest, 0, cells);
             } else if (taken == 0) {
                 for (int i = 0; i < cells; i++) {
-                    sum[i] = mean[i];
+                    sum[i] = dayMean[i];
                 }
             } else {
-                approach(sum, mean, -Math.expm1(-1 / model.tau), cells);
+                approach(sum, dayMean, -Math.expm1(-1 / model.tau), cells);
             }
             taken++;
             if (model.turn.chilling() != null && day >= chillingDay) {
-                chill(chill, mean, cells);
+                chill(chill, dayMean, cells);
                 noteSwitch(chill, -(model.turn.chilling().get(0) + model.turn.chilling().get(1)) / 2, day + 1, switched, cells);
             }
         }
@@ -269,6 +277,14 @@ public record ResponseModel(FourParameterLogistic autumn, FourParameterLogistic 
                 return turnFrom + (turnTo - turnFrom + 1) / 2;
             }
             return switched[cell] < Integer.MAX_VALUE ? (int) switched[cell] : Integer.MAX_VALUE;
+        }
+
+        private static boolean all(double[] values, double value, int cells) {
+            int i = 0;
+            while (i < cells && values[i] == value) {
+                i++;
+            }
+            return i == cells;
         }
 
         private static void mean(double[] sum, double count, double[] mean, int cells) {

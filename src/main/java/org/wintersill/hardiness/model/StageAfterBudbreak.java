@@ -71,6 +71,9 @@ public record StageAfterBudbreak(StateModel before, HardinessModel stages) imple
         private final HardinessTrajectory timed;
         private final NightTolerance later;
         private final float[] growth;
+        /** {@code [cell]}: whether budbreak has come by the end of the last day that was taken. */
+        private final boolean[] open;
+        private boolean anyOpen;
 
         Trajectory(HardinessTrajectory before, LethalTemperatures dated, HardinessTrajectory timed, int cells) {
             this.before = before;
@@ -78,16 +81,20 @@ public record StageAfterBudbreak(StateModel before, HardinessModel stages) imple
             this.timed = timed;
             later = NightTolerance.of(cells);
             growth = new float[cells];
+            open = new boolean[cells];
         }
 
         @Override
         public void tolerance(int day, NightTolerance out) {
             before.tolerance(day, out);
+            if (!anyOpen) {
+                return;
+            }
             if (timed != null) {
                 timed.tolerance(day, later);
             }
-            for (int i = 0; i < growth.length; i++) {
-                if (before.budbreak(i) < day && !Float.isNaN(out.lt50()[i])) {
+            for (int i = 0; i < open.length; i++) {
+                if (open[i] && !Float.isNaN(out.lt50()[i])) {
                     replace(day, out, i);
                 }
             }
@@ -107,13 +114,17 @@ public record StageAfterBudbreak(StateModel before, HardinessModel stages) imple
 
         @Override
         public void advance(int day, float[] mean) {
-            if (timed != null) {
+            if (timed != null && anyOpen) {
                 for (int i = 0; i < growth.length; i++) {
-                    growth[i] = before.budbreak(i) < day ? mean[i] : NO_GROWTH;
+                    growth[i] = open[i] ? mean[i] : NO_GROWTH;
                 }
                 timed.advance(day, growth);
             }
             before.advance(day, mean);
+            for (int i = 0; i < open.length; i++) {
+                open[i] = before.budbreak(i) <= day;
+                anyOpen |= open[i];
+            }
         }
 
         @Override

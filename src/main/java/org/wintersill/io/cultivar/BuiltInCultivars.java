@@ -5,6 +5,7 @@ import java.io.InputStream;
 import java.io.InputStreamReader;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
+import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -74,8 +75,17 @@ public final class BuiltInCultivars {
         }
     }
 
-    /** The entries as they stand in the files, by id. */
+    /** Read once, when first asked for. */
+    private static final class Loaded {
+        private static final Map<String, YamlValue.Mapping> ENTRIES = Collections.unmodifiableMap(read());
+    }
+
+    /** The entries as they stand in the files, by id, in their order. */
     static Map<String, YamlValue.Mapping> mappings() {
+        return Loaded.ENTRIES;
+    }
+
+    private static Map<String, YamlValue.Mapping> read() {
         Map<String, YamlValue.Mapping> mappings = new LinkedHashMap<>();
         for (String file : FILES) {
             YamlValue.Mapping top = (YamlValue.Mapping) new YamlReader(Problem.Kind.INPUT).parse(content(file), "built-in " + file);
