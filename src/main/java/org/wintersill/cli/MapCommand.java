@@ -2,10 +2,12 @@ package org.wintersill.cli;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.concurrent.Callable;
 import org.wintersill.config.RunConfig;
 import org.wintersill.config.ScenarioConfig;
 import org.wintersill.config.Setting;
+import org.wintersill.problem.Problem;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Option;
@@ -17,6 +19,7 @@ import picocli.CommandLine.Option;
         footerHeading = "%nExamples:%n",
         footer = {"  wintersill map sample-grids/run.yaml",
             "  wintersill map sample-grids/run.yaml --out out-steep --set elevation.lapse-rate=6.5",
+            "  wintersill map sample-grids/run.yaml --winters-from out --set statistics.interval=0.8 --out out-80",
             "  wintersill map --minimum 'sample-grids/tmin-*.nc' --dem sample-grids/dem.tif \\",
             "      --cultivars sample-grids/cultivars.yaml --out out"})
 final class MapCommand implements Callable<Integer>, Manners.Kept {
@@ -27,6 +30,10 @@ final class MapCommand implements Callable<Integer>, Manners.Kept {
 
     @Option(names = "--overwrite", description = "Replace an earlier result in the output folder.")
     private boolean overwrite;
+
+    @Option(names = "--winters-from", paramLabel = "FOLDER", description = "Make tables, classes and statistics anew from the winters that a "
+            + "finished run kept there (outputs.keep-winters: true), without going through the nights again.")
+    private String wintersFrom;
 
     @Option(names = "--dry-run", description = "Check and decide everything, as plan does, and write nothing.")
     private boolean dryRun;
@@ -55,6 +62,10 @@ final class MapCommand implements Callable<Integer>, Manners.Kept {
         return session.call(manners, console -> {
             RunConfig config = run.config();
             if (config.scenario().filter(ScenarioConfig::hasOpenMembers).isPresent() && !printConfig && !dryRun) {
+                if (wintersFrom != null) {
+                    throw Problem.usage("winters can be taken for one member at a time", "--winters-from",
+                            "Name the member: --set scenario.member=NAME").asException();
+                }
                 return members(config, console);
             }
             if (printConfig) {
@@ -64,7 +75,8 @@ final class MapCommand implements Callable<Integer>, Manners.Kept {
             if (dryRun) {
                 return session.commands().plan(config, new PlanOptions(json), console);
             }
-            return session.commands().map(config, new MapOptions(overwrite, json), console);
+            return session.commands().map(config, new MapOptions(overwrite, json, Optional.ofNullable(wintersFrom)
+                    .map(RunArguments::path)), console);
         });
     }
 
@@ -78,7 +90,7 @@ final class MapCommand implements Callable<Integer>, Manners.Kept {
         runs.forEach(member -> session.commands().check(member, overwrite));
         for (RunConfig member : runs) {
             console.message("Member " + member.scenario().orElseThrow().member().orElseThrow());
-            int code = session.commands().map(member, new MapOptions(overwrite, json), console);
+            int code = session.commands().map(member, new MapOptions(overwrite, json, Optional.empty()), console);
             if (code != ExitCode.DONE) {
                 return code;
             }

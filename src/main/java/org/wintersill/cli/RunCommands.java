@@ -61,7 +61,8 @@ final class RunCommands implements Commands {
         console.detail(PlanText.text(plan));
         RunReport report;
         try {
-            report = new MapRun(plan, options.overwrite(), crs, console.progress(), console.notices()).execute(console.cancellation());
+            report = new MapRun(plan, options.overwrite(), crs, console.progress(), console.notices())
+                    .withWintersFrom(options.wintersFrom()).execute(console.cancellation());
         } catch (CancelledException e) {
             console.message("stopped; nothing was left in " + config.outputs().folder());
             return ExitCode.INTERRUPTED;

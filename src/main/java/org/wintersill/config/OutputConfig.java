@@ -13,9 +13,10 @@ import java.util.List;
  * @param geopackage whether {@code layers.gpkg} is written
  * @param parts whether each separate part of a class is a polygon of its own
  * @param cells whether the GeoPackage gets the cells as points
+ * @param keepWinters whether the winters stay in the folder, so that statistics can be made anew without the daily temperatures
  */
 public record OutputConfig(Path folder, List<String> layers, boolean winters, boolean netcdf, boolean geopackage,
-                           boolean parts, boolean cells) {
+                           boolean parts, boolean cells, boolean keepWinters) {
     public OutputConfig {
         layers = List.copyOf(layers);
     }

@@ -53,6 +53,7 @@ final class OutputSections {
         boolean geopackage = section.flag("geopackage").orElse(true);
         boolean parts = section.flag("parts").orElse(false);
         boolean cells = section.flag("cells").orElse(false);
+        boolean keepWinters = section.flag("keep-winters").orElse(false);
         section.finish();
         tree.put("folder", folder);
         tree.put("layers", layers.isEmpty() ? "default" : layers);
@@ -61,7 +62,8 @@ final class OutputSections {
         tree.put("geopackage", geopackage);
         tree.put("parts", parts);
         tree.put("cells", cells);
-        return new OutputConfig(path(section, base, folder), layers, winters, netcdf, geopackage, parts, cells);
+        tree.put("keep-winters", keepWinters);
+        return new OutputConfig(path(section, base, folder), layers, winters, netcdf, geopackage, parts, cells, keepWinters);
     }
 
     private static Path path(YamlSection section, Path base, String folder) {

@@ -137,6 +137,37 @@ public final class WinterStore implements WinterSink, WinterPlanes, AutoCloseabl
         return values;
     }
 
+    /**
+     * Takes the winters of a file that {@link #keep} made.
+     *
+     * @return false where the file has another size than the winters of this store
+     */
+    public boolean fill(Path kept) {
+        long size = position(winterPlanes, 0, 0);
+        try (FileChannel from = FileChannel.open(kept, StandardOpenOption.READ)) {
+            if (from.size() != size) {
+                return false;
+            }
+            for (long done = 0; done < size;) {
+                done += from.transferTo(done, size - done, channel.position(done));
+            }
+            return true;
+        } catch (IOException e) {
+            throw failed(e);
+        }
+    }
+
+    /** Closes the store and leaves its winters, all planes wanted, in a file of that name: 32-bit floats, little-endian. */
+    public void keep(Path kept) {
+        try {
+            channel.truncate(position(winterPlanes, 0, 0));
+            channel.close();
+            Files.move(file, kept);
+        } catch (IOException e) {
+            throw failed(e);
+        }
+    }
+
     /** Removes the file; closing again does nothing. */
     @Override
     public void close() {

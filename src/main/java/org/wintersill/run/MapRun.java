@@ -4,6 +4,7 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import java.util.function.BooleanSupplier;
 import java.util.function.IntPredicate;
@@ -31,6 +32,7 @@ public final class MapRun {
     private final Progress progress;
     private final Notices notices;
     private final CoordinateOperations operations;
+    private Optional<Path> wintersFrom = Optional.empty();
 
     /** @param overwrite whether finished outputs in the folder may be replaced */
     public MapRun(RunPlan plan, boolean overwrite, CoordinateOperations operations, Progress progress, Notices notices) {
@@ -39,6 +41,12 @@ public final class MapRun {
         this.progress = progress;
         this.notices = notices;
         this.operations = operations;
+    }
+
+    /** Takes the winters that a finished run kept in its folder, where one is given, instead of folding nights. */
+    public MapRun withWintersFrom(Optional<Path> folder) {
+        wintersFrom = folder;
+        return this;
     }
 
     /**
@@ -59,7 +67,11 @@ public final class MapRun {
                 WinterStore store = new WinterStore(folder.unfinished("winters.tmp"),
                         plan.job().planes(), wantedPlanes(cultivars), plan.seasons().size(), plan.target().rows(),
                         plan.target().columns())) {
-            fold(folder, store, workers);
+            if (wintersFrom.isPresent()) {
+                KeptWinters.take(wintersFrom.get(), plan, digests.await(), store);
+            } else {
+                fold(folder, store, workers);
+            }
             CountingWinters.require(plan, store);
             Map<String, Object> record = RunRecord.begin(plan, digests.await());
             RasterFormat format = new CogFormat(crs -> {
@@ -74,6 +86,10 @@ public final class MapRun {
             List<ClassAreas> areas = tables(folder, output, summaries, record);
             if (plan.config().outputs().netcdf()) {
                 new NetcdfOutput(plan, store, folder, operations, output.period()).write();
+            }
+            if (plan.config().outputs().keepWinters()) {
+                store.keep(folder.unfinished(KeptWinters.FILE));
+                record.put(KeptWinters.KEY, KeptWinters.fingerprint(plan, digests.await()));
             }
             store.close();
             RunRecord.complete(record, folder, notices, workers);
@@ -101,7 +117,7 @@ public final class MapRun {
 
     /** Worst nights are only read again for layers with a value a winter. */
     private IntPredicate wantedPlanes(int cultivars) {
-        if (plan.config().outputs().winters() || plan.config().outputs().netcdf()) {
+        if (plan.config().outputs().keepWinters() || plan.config().outputs().winters() || plan.config().outputs().netcdf()) {
             return plane -> true;
         }
         Set<Integer> nights = IntStream.range(0, cultivars)

@@ -79,7 +79,7 @@ class ConfigReaderTest {
         assertEquals(new StatisticsConfig(0.90, "jeffreys", List.of(0.10), "frequency", "auto", List.of(10, 50, 100), 200, 1, 0.10), config.statistics());
         assertEquals(List.of(0.05, 0.10, 0.20), config.classes());
         assertEquals(Optional.empty(), config.area());
-        assertEquals(new OutputConfig(folder.resolve("out"), List.of(), true, false, true, false, false), config.outputs());
+        assertEquals(new OutputConfig(folder.resolve("out"), List.of(), true, false, true, false, false, false), config.outputs());
         assertEquals(new LimitConfig(OptionalInt.empty(), OptionalLong.empty()), config.limits());
         RunConfig withDem = read(SMALL + "elevation: {dem: dem.tif}\n");
         assertEquals(Optional.empty(), withDem.elevation().orElseThrow().sourceHeight());
@@ -110,7 +110,7 @@ class ConfigReaderTest {
         assertEquals(List.of(0.1, 0.2, 0.3), config.classes());
         assertEquals(new AreaConfig(Optional.of(new Envelope(2600000, 1100000, 2700000, 1200000)), Optional.of(new PolygonEntry(folder.resolve("zones.gpkg"),
                 new PolygonRequest(Optional.of("inner"), Optional.empty(), Optional.empty(), Optional.of("EPSG:2056"))))), config.area().orElseThrow());
-        assertEquals(new OutputConfig(folder.resolve("my out"), List.of("margin-mean", "suitability"), false, true, false, true, true),
+        assertEquals(new OutputConfig(folder.resolve("my out"), List.of("margin-mean", "suitability"), false, true, false, true, true, false),
                 config.outputs());
         assertEquals(new LimitConfig(OptionalInt.of(2), OptionalLong.of(3L << 29)), config.limits());
     }

@@ -168,6 +168,41 @@ class WinterStatisticsTest {
     }
 
     @Test
+    void statisticsAreMadeAnewFromKeptWintersWithTheSameBytes() {
+        String[] keep = {"--set", "outputs.keep-winters=true", "--set", "outputs.geopackage=true", "--set", "outputs.layers=[default, trends]"};
+        run.map(arguments(keep, "--out", run.path("kept").toString()));
+        run.map(arguments(keep, "--out", run.path("again").toString(), "--winters-from", run.path("kept").toString()));
+        assertEquals(List.of(), RunFolder.differing(RunFolder.files(run.path("kept")), RunFolder.files(run.path("again"))));
+        String[] other = arguments(keep, "--set", "statistics.interval=0.8", "--set", "classes=[0.1, 0.2, 0.3]", "--set", "damage.killing=10");
+        run.map(arguments(other, "--out", run.path("direct").toString()));
+        run.map(arguments(other, "--out", run.path("anew").toString(), "--winters-from", run.path("kept").toString()));
+        assertEquals(List.of(), RunFolder.differing(RunFolder.files(run.path("direct")), RunFolder.files(run.path("anew"))));
+        assertTrue(RunFolder.differing(RunFolder.files(run.path("kept")), RunFolder.files(run.path("anew"))).contains("summary.csv"));
+    }
+
+    @Test
+    void wintersOfAnotherRunAreRefused() throws Exception {
+        String kept = run.path("own").toString();
+        run.map("--set", "outputs.keep-winters=true", "--out", kept);
+        String out = run.path("refused").toString();
+        Program.Ended other = run.end("--winters-from", kept, "--out", out, "--set", "missing-days=none").expect(3);
+        assertTrue(other.err().contains("not those of this run"), other.err());
+        Program.Ended none = run.end("--winters-from", run.path("out").toString(), "--out", out).expect(3);
+        assertTrue(none.err().contains("outputs.keep-winters"), none.err());
+        byte[] bytes = Files.readAllBytes(run.path("own/winters.planes"));
+        bytes[bytes.length / 2] ^= 1;
+        Files.write(run.path("own/winters.planes"), bytes);
+        assertTrue(run.end("--winters-from", kept, "--out", out).expect(3).err().contains("not the one that the run wrote"));
+        assertFalse(Files.exists(run.path("refused")));
+    }
+
+    private static String[] arguments(String[] first, String... more) {
+        List<String> all = new ArrayList<>(List.of(first));
+        all.addAll(List.of(more));
+        return all.toArray(String[]::new);
+    }
+
+    @Test
     void threadsAndMemoryDoNotShow() {
         run.map("--threads", "1", "--out", run.path("one").toString());
         run.map("--threads", "3", "--memory", "64m", "--out", run.path("three").toString());
