@@ -9,7 +9,9 @@ public enum LayerGroup {
     /** Bounds that are drawn or searched for, and tests of fit. */
     BOUNDS("bounds"),
     /** Change over the years. */
-    TRENDS("trends");
+    TRENDS("trends"),
+    /** How cold the winters were, whatever stands in them. */
+    SEVERITY("severity");
 
     private final String word;
 

@@ -32,8 +32,9 @@ public final class WinterRecord {
      * @param levels percent of buds of each level
      * @param expectedDamage {@code [winter][cell]}, expected fraction killed with uncertainty; empty where nothing is uncertain
      * @param damageAt {@code [phase end][winter][cell]}, fraction killed when autumn (0) and midwinter (1) ended; empty where not kept
+     * @param coldNights {@code [0 number, 1 longest run][winter][cell]}; empty where not kept
      */
-    public record Details(DamageReckoning reckoning, int[] levels, float[][] expectedDamage, float[][][] damageAt) {
+    public record Details(DamageReckoning reckoning, int[] levels, float[][] expectedDamage, float[][][] damageAt, float[][][] coldNights) {
     }
 
     /**
@@ -121,6 +122,16 @@ public final class WinterRecord {
     /** Fraction of buds killed when autumn (0) or midwinter (1) ended, {@code [winter][cell]}. */
     public float[][] damageAt(int phaseEnd) {
         return details.damageAt()[phaseEnd];
+    }
+
+    /** Number of cold nights, {@code [winter][cell]}; only where they are counted. */
+    public float[][] coldNights() {
+        return details.coldNights()[0];
+    }
+
+    /** Longest run of cold nights, {@code [winter][cell]}; likewise. */
+    public float[][] coldSpell() {
+        return details.coldNights()[1];
     }
 
     /** Number of winters that count at each cell, by the margins where there are any. */

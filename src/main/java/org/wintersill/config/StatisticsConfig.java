@@ -13,10 +13,12 @@ import java.util.List;
  * @param returnPeriods winters, ascending
  * @param replicates number of bootstrap replicates of a fit
  * @param seed of all random streams
+ * @param coldNight threshold of a cold night, degrees Celsius
  * @param falseDiscovery accepted share of false calls among the cells called significant
  */
 public record StatisticsConfig(double interval, String bounds, List<Double> targets, String rule, String extremes,
-                               List<Integer> returnPeriods, int replicates, int seed, double falseDiscovery) {
+                               List<Integer> returnPeriods, int replicates, int seed, double coldNight,
+                               double falseDiscovery) {
     public StatisticsConfig {
         targets = List.copyOf(targets);
         returnPeriods = List.copyOf(returnPeriods);

@@ -39,6 +39,7 @@ final class StatisticsSection {
         double falseDiscovery = trend.flatMap(inner -> inner.number("false-discovery", 0.001, 0.5, "a share from 0.001 to 0.5"))
                 .orElse(0.10);
         trend.ifPresent(YamlSection::finish);
+        double coldNight = section.number("cold-night", -60, 10, "degrees Celsius from -60 to 10, such as -15").orElse(-15.0);
         section.finish();
         tree.put("interval", interval);
         tree.put("bounds", bounds);
@@ -50,8 +51,9 @@ final class StatisticsSection {
         draws.put("replicates", replicates);
         draws.put("seed", seed);
         tree.put("bootstrap", draws);
+        tree.put("cold-night", coldNight);
         tree.put("trend", Map.of("false-discovery", falseDiscovery));
-        return new StatisticsConfig(interval, bounds, targets, rule, extremes, periods, replicates, seed, falseDiscovery);
+        return new StatisticsConfig(interval, bounds, targets, rule, extremes, periods, replicates, seed, coldNight, falseDiscovery);
     }
 
     /** One value or a list of them, each once; empty where the key is not given or nothing of it is right. */

@@ -89,8 +89,9 @@ public final class FoldPlanner {
         int batchDays = batches.stream().mapToInt(Batch::count).max().orElse(0);
         long values = FLOAT * job.planes();
         long tileRowCells = (long) Math.max(laneRows, TargetTiles.mostRows(columns)) * columns;
-        // State models and joined nights see every night of every cell; rows of tiles must not take the memory that days need.
-        boolean tiled = job.states().isNone() && job.reckoning().nights().isWorst() && TargetTiles.mayGain(job.adjustment())
+        // State models, joined and counted nights see every night of every cell; rows of tiles must not take the memory that days need.
+        boolean tiled = job.states().isNone() && job.reckoning().nights().isWorst() && job.reckoning().coldNight().isEmpty()
+                && TargetTiles.mayGain(job.adjustment())
                 && threads * tileRowCells * 2 * values <= budget / 4;
         long laneCells = tiled ? tileRowCells : (long) laneRows * columns;
         long kept = whole ? (long) threads * laneRows * columns : (long) bandRows * columns;

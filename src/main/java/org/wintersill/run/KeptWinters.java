@@ -47,6 +47,7 @@ final class KeptWinters {
         all.put("grid", plan.target().describe());
         all.put("winters", plan.seasons().stream().map(season -> season.label()).toList());
         all.put("planes", plan.job().planes());
+        all.put("cold-night", plan.job().reckoning().coldNight().map(threshold -> (double) threshold).orElse(null));
         return Digests.ofText(JsonText.of(all));
     }
 

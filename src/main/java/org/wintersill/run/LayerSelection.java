@@ -34,6 +34,18 @@ final class LayerSelection {
                 || words.contains(statistic.group().word())).orElse(statistic.group() == LayerGroup.DEFAULT);
     }
 
+    /** Whether cold nights are to be counted: layers of theirs are named. */
+    boolean countsColdNights() {
+        return wanted.filter(words -> words.contains(ALL) || words.contains(LayerGroup.SEVERITY.word())
+                || words.stream().anyMatch(word -> word.startsWith(WinterLayers.COLD_NIGHTS) || word.startsWith(WinterLayers.COLD_SPELL)))
+                .isPresent();
+    }
+
+    /** Whether a winter layer of the severity group is written. */
+    boolean containsSeverity(String id) {
+        return wanted.filter(words -> words.contains(id) || words.contains(ALL) || words.contains(LayerGroup.SEVERITY.word())).isPresent();
+    }
+
     /** Those statistics that are written, and the default ones, which later steps rely on. */
     List<ClimatologyStatistic> made(List<ClimatologyStatistic> statistics) {
         return statistics.stream().filter(statistic -> statistic.group() == LayerGroup.DEFAULT || contains(statistic)).toList();

@@ -163,7 +163,8 @@ public final class RunPlanner {
         NightJoining.Rule rule = NightJoining.Rule.valueOf(config.damage().nights().toUpperCase(Locale.ROOT));
         return new DamageReckoning(new NightJoining(rule, config.damage().correlation()),
                 new Uncertainty(new TreeMap<>(config.damage().uncertainty())),
-                phases, south);
+                phases, south, new LayerSelection(config.outputs().layers()).countsColdNights()
+                ? Optional.of((float) config.statistics().coldNight()) : Optional.empty());
     }
 
     /** Levels with LT50 first, whatever the order of the run file, since every margin refers to it. */

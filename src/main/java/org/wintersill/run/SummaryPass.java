@@ -224,7 +224,13 @@ final class SummaryPass {
                 damageAt[end][winter] = planes.read(plane, winter, row, count);
             }
         }
-        return new WinterRecord.Details(reckoning, plan.choices().levels(), expected, damageAt);
+        float[][][] cold = new float[cultivar.isEmpty() && reckoning.coldNight().isPresent() ? 2 : 0][winters][];
+        for (int part = 0; part < cold.length; part++) {
+            for (int winter = 0; winter < winters; winter++) {
+                cold[part][winter] = planes.read(WinterValues.coldNightsPlane(cultivars, levels, reckoning) + part, winter, row, count);
+            }
+        }
+        return new WinterRecord.Details(reckoning, plan.choices().levels(), expected, damageAt, cold);
     }
 
     /** Takes full-width rows of all summary layers of a cultivar. */
@@ -326,7 +332,17 @@ final class SummaryPass {
     /** Writes the layers with one band a winter, several files at a time. */
     void winters() {
         int cultivars = plan.cultivars().size();
-        workers.forEach(1 + 3 * cultivars, (worker, task) -> {
+        Optional<Float> coldNight = plan.job().reckoning().coldNight();
+        workers.forEach(1 + 3 * cultivars + (coldNight.isPresent() ? 2 : 0), (worker, task) -> {
+            if (task > 3 * cultivars) {
+                int plane = WinterValues.coldNightsPlane(cultivars, levels, plan.job().reckoning());
+                boolean spell = task == 3 * cultivars + 2;
+                LayerDefinition layer = spell ? WinterLayers.coldSpell(coldNight.get()) : WinterLayers.coldNights(coldNight.get());
+                if (selection.containsSeverity(layer.id())) {
+                    writeWinters(layer, Optional.empty(), spell ? plane + 1 : plane);
+                }
+                return;
+            }
             if (task == 0) {
                 winterLayer(WinterLayers.MINIMUM, Optional.empty(), WinterValues.minimumPlane());
                 return;
@@ -341,9 +357,12 @@ final class SummaryPass {
     }
 
     private void winterLayer(LayerDefinition layer, Optional<Integer> cultivar, int plane) {
-        if (!selection.contains(layer.id())) {
-            return;
+        if (selection.contains(layer.id())) {
+            writeWinters(layer, cultivar, plane);
         }
+    }
+
+    private void writeWinters(LayerDefinition layer, Optional<Integer> cultivar, int plane) {
         try (RasterWriter writer = output.winters(layer, cultivar.map(plan.cultivars()::get))) {
             int stripRows = Math.min(rows, output.rowsAtOnce());
             for (int winter = 0; winter < plan.seasons().size(); winter++) {
@@ -361,7 +380,7 @@ final class SummaryPass {
     /** Size of the whole pass in the unit of its progress. */
     long size(boolean winterLayers) {
         long layers = (long) ofCultivar.size() * plan.cultivars().size() + ofAll.size() + 4;
-        long winters = winterLayers ? plan.seasons().size() * (1L + 3L * plan.cultivars().size()) : 0;
+        long winters = winterLayers ? plan.seasons().size() * (1L + 3L * plan.cultivars().size() + (plan.job().reckoning().coldNight().isPresent() ? 2 : 0)) : 0;
         return rows * (layers + winters);
     }
 }

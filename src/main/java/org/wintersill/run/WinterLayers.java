@@ -20,10 +20,25 @@ final class WinterLayers {
             "Lowest Tmin of the winter at the cell's own elevation", "degC", SampleType.FLOAT32, "time: minimum within years",
             LayerStyles.temperature());
 
+    static final String COLD_NIGHTS = "cold-nights";
+    static final String COLD_SPELL = "cold-spell";
+
     private WinterLayers() {
     }
 
     static List<String> ids() {
-        return List.of(MARGIN.id(), DAMAGE.id(), WORST_NIGHT.id(), MINIMUM.id());
+        return List.of(MARGIN.id(), DAMAGE.id(), WORST_NIGHT.id(), MINIMUM.id(), COLD_NIGHTS, COLD_SPELL);
+    }
+
+    /** Number of nights below a threshold, degrees Celsius. */
+    static LayerDefinition coldNights(float threshold) {
+        return new LayerDefinition(COLD_NIGHTS, "Cold nights of the winter", "Number of nights of the winter with Tmin below " + threshold
+                + " degC", "days", SampleType.INT16, "", LayerStyles.count());
+    }
+
+    /** Longest run of such nights. */
+    static LayerDefinition coldSpell(float threshold) {
+        return new LayerDefinition(COLD_SPELL, "Longest cold spell of the winter", "Longest run of nights with Tmin below " + threshold
+                + " degC; a missing night ends a run", "days", SampleType.INT16, "", LayerStyles.count());
     }
 }

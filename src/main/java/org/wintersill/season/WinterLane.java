@@ -21,6 +21,8 @@ public final class WinterLane {
     private final float[] before;
     private final float[] reached;
     private final WinterAccumulator[] cultivars;
+    /** Null where no cold nights are counted. */
+    private final ColdNights cold;
 
     public WinterLane(int cultivarCount, int levels, DamageReckoning reckoning, int cells) {
         this.cells = cells;
@@ -33,6 +35,7 @@ public final class WinterLane {
         for (int c = 0; c < cultivarCount; c++) {
             cultivars[c] = new WinterAccumulator(levels, reckoning, cells);
         }
+        cold = reckoning.coldNight().map(threshold -> new ColdNights(threshold, cells)).orElse(null);
         begin();
     }
 
@@ -42,7 +45,7 @@ public final class WinterLane {
 
     /** Bytes that a lane takes for each of its cells. */
     public static long bytesPerCell(int cultivarCount, int levels, DamageReckoning reckoning) {
-        return 12 + cultivarCount * (4L * levels + 10 + reckoning.bytesPerCell());
+        return 12 + (reckoning.coldNight().isPresent() ? 12 : 0) + cultivarCount * (4L * levels + 10 + reckoning.bytesPerCell());
     }
 
     /** Makes ready for the next winter. */
@@ -50,6 +53,9 @@ public final class WinterLane {
         Arrays.fill(minimum, Float.POSITIVE_INFINITY);
         for (WinterAccumulator cultivar : cultivars) {
             cultivar.begin();
+        }
+        if (cold != null) {
+            cold.begin();
         }
     }
 
@@ -63,6 +69,9 @@ public final class WinterLane {
      */
     public void accept(NightCurve[] curves, float[][] nights, int count, int[] positions) {
         acceptMinimum(nights, count);
+        if (cold != null) {
+            cold.accept(nights, count, positions);
+        }
         for (int c = 0; c < cultivars.length; c++) {
             if (curves[c] != null) {
                 accept(c, curves[c], nights, count, positions);
@@ -92,6 +101,10 @@ public final class WinterLane {
         for (int i = 0; i < cells; i++) {
             valid[i] = minimum[i] < Float.POSITIVE_INFINITY && counts.test(i);
             values.minimum()[i] = valid[i] ? minimum[i] : Float.NaN;
+            if (cold != null) {
+                values.coldNights()[i] = valid[i] ? cold.below(i) : Float.NaN;
+                values.coldSpell()[i] = valid[i] ? cold.longest(i) : Float.NaN;
+            }
         }
         for (int c = 0; c < cultivars.length; c++) {
             cultivars[c].finish(valid, values, c);

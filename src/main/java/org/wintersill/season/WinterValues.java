@@ -19,10 +19,10 @@ public final class WinterValues {
 
     /**
      * Number of planes: the minimum, for each cultivar a margin a level, the damage and the worst night, and after all of these what
-     * else the reckoning keeps of each cultivar.
+     * else the reckoning keeps of each cultivar; last what it keeps of the winter itself.
      */
     public static int planes(int cultivars, int levels, DamageReckoning reckoning) {
-        return 1 + cultivars * (levels + 2 + reckoning.extraPlanes());
+        return 1 + cultivars * (levels + 2 + reckoning.extraPlanes()) + (reckoning.coldNight().isPresent() ? 2 : 0);
     }
 
     /** Plane of the lowest minimum. */
@@ -63,6 +63,11 @@ public final class WinterValues {
         }
     }
 
+    /** Plane of the number of cold nights; only where the reckoning counts them. The next one is that of the longest run. */
+    public static int coldNightsPlane(int cultivars, int levels, DamageReckoning reckoning) {
+        return 1 + cultivars * (levels + 2 + reckoning.extraPlanes());
+    }
+
     /** Plane of a cultivar's expected damage with uncertainty; only where the reckoning keeps it. */
     public static int expectedDamagePlane(int cultivar, int cultivars, int levels, DamageReckoning reckoning) {
         return 1 + cultivars * (levels + 2) + cultivar * reckoning.extraPlanes();
@@ -99,6 +104,16 @@ public final class WinterValues {
     /** Position in the window of the earliest night of the lowest margin, a whole number. */
     public float[] worstNight(int cultivar) {
         return planes[worstNightPlane(cultivar, levels)];
+    }
+
+    /** Number of cold nights; only where the reckoning counts them. */
+    public float[] coldNights() {
+        return planes[coldNightsPlane(cultivars, levels, reckoning)];
+    }
+
+    /** Longest run of cold nights; likewise. */
+    public float[] coldSpell() {
+        return planes[coldNightsPlane(cultivars, levels, reckoning) + 1];
     }
 
     /** Expected fraction of buds killed with uncertainty, 0..1; only where the reckoning keeps it. */

@@ -47,7 +47,7 @@ class ConfigReaderTest {
             cultivars: {files: [c.yaml], use: [slate, amber]}
             damage: {nights: worst, levels: [90, 20, 50], killing: 20, uncertainty: {model: 1.0, site: 0.8}, neighbourhood-km: 2.5}
             statistics: {interval: 0.95, bounds: wilson, target: [0.2, 0.05], rule: quantile, extremes: l-moments,
-              return-periods: [30, 20], bootstrap: {replicates: 99, seed: 7}, trend: {false-discovery: 0.05}}
+              return-periods: [30, 20], bootstrap: {replicates: 99, seed: 7}, cold-night: -12.5, trend: {false-discovery: 0.05}}
             classes: [0.1, 0.2, 0.3]
             area: {bbox: [2600000, 1100000, 2700000, 1200000], polygons: {file: zones.gpkg, layer: inner, crs: EPSG:2056}}
             outputs: {folder: my out, layers: [margin-mean, suitability], winters: false, netcdf: true, geopackage: false, parts: true,
@@ -76,7 +76,7 @@ class ConfigReaderTest {
         assertEquals("month-10-5", config.missingDays());
         assertEquals(new CultivarConfig(List.of(folder.resolve("c.yaml")), List.of()), config.cultivars());
         assertEquals(new DamageConfig("worst", 0, List.of(10, 50, 90), 50, Map.of(), 5), config.damage());
-        assertEquals(new StatisticsConfig(0.90, "jeffreys", List.of(0.10), "frequency", "auto", List.of(10, 50, 100), 200, 1, 0.10), config.statistics());
+        assertEquals(new StatisticsConfig(0.90, "jeffreys", List.of(0.10), "frequency", "auto", List.of(10, 50, 100), 200, 1, -15, 0.10), config.statistics());
         assertEquals(List.of(0.05, 0.10, 0.20), config.classes());
         assertEquals(Optional.empty(), config.area());
         assertEquals(new OutputConfig(folder.resolve("out"), List.of(), true, false, true, false, false, false), config.outputs());
@@ -106,7 +106,7 @@ class ConfigReaderTest {
         assertEquals("month-5-3", config.missingDays());
         assertEquals(List.of("slate", "amber"), config.cultivars().use());
         assertEquals(new DamageConfig("worst", 0, List.of(20, 50, 90), 20, Map.of("model", 1.0, "site", 0.8), 2.5), config.damage());
-        assertEquals(new StatisticsConfig(0.95, "wilson", List.of(0.2, 0.05), "quantile", "l-moments", List.of(20, 30), 99, 7, 0.05), config.statistics());
+        assertEquals(new StatisticsConfig(0.95, "wilson", List.of(0.2, 0.05), "quantile", "l-moments", List.of(20, 30), 99, 7, -12.5, 0.05), config.statistics());
         assertEquals(List.of(0.1, 0.2, 0.3), config.classes());
         assertEquals(new AreaConfig(Optional.of(new Envelope(2600000, 1100000, 2700000, 1200000)), Optional.of(new PolygonEntry(folder.resolve("zones.gpkg"),
                 new PolygonRequest(Optional.of("inner"), Optional.empty(), Optional.empty(), Optional.of("EPSG:2056"))))), config.area().orElseThrow());

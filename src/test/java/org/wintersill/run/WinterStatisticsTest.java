@@ -26,15 +26,16 @@ import org.wintersill.time.CfDate;
 /** Layers of fits, bounds and trends over 30 invented winters, against the estimators on the winters that the same run wrote. */
 class WinterStatisticsTest {
     private static final String RUN = "temperature: {minimum: daily}\ncultivars: {files: cultivars.yaml, use: [oat]}\n"
-            + "statistics: {target: [0.1, 0.05], bootstrap: {replicates: 40, seed: 9}, return-periods: [20]}\n"
+            + "statistics: {target: [0.1, 0.05], bootstrap: {replicates: 40, seed: 9}, return-periods: [20], cold-night: -7.5}\n"
             + "outputs: {layers: [%s], geopackage: false}\n";
     @TempDir
     static Path shared;
     private static RunFolder run;
+    private static ColdRecord record;
 
     @BeforeAll
     static void mapOnce() {
-        ColdRecord record = ColdRecord.made(3, 5, CfCalendar.STANDARD, new CfDate(1970, 8, 20), new CfDate(2000, 6, 10), false, 3)
+        record = ColdRecord.made(3, 5, CfCalendar.STANDARD, new CfDate(1970, 8, 20), new CfDate(2000, 6, 10), false, 3)
                 .changed((day, cell, tenths) -> cell == 7 && day < 400 ? ColdRecord.MISSING : tenths + (cell % 5 == 0 ? day / 150 : 0));
         run = RunFolder.of(shared, new RecordFile(record)).text("run.yaml", RUN.formatted("all")).map();
     }
@@ -200,6 +201,27 @@ class WinterStatisticsTest {
         List<String> all = new ArrayList<>(List.of(first));
         all.addAll(List.of(more));
         return all.toArray(String[]::new);
+    }
+
+    /** Counted from the record itself: tenths of a degree on the source grid, winter 1980-81, no elevation. */
+    @Test
+    void coldNightsAndSpellsAreCountedFromTheRecord() {
+        for (int cell : new int[] {0, 4, 7, 14}) {
+            int below = 0;
+            int streak = 0;
+            int longest = 0;
+            for (int day = record.day(new CfDate(1980, 9, 1)); day <= record.day(new CfDate(1981, 5, 31)); day++) {
+                boolean cold = record.tenths()[day][cell] < -75;
+                below += cold ? 1 : 0;
+                streak = cold ? streak + 1 : 0;
+                longest = Math.max(longest, streak);
+            }
+            assertTrue(below > 3);
+            assertEquals(below, run.raster("shared/winters/cold-nights").value(10, cell / 5, cell % 5));
+            assertEquals(longest, run.raster("shared/winters/cold-spell").value(10, cell / 5, cell % 5));
+            assertEquals(Arrays.stream(lows("shared/winters/cold-nights", cell)).average().orElseThrow(), value("shared/cold-nights-mean", cell), 1e-4);
+            assertEquals(Arrays.stream(lows("shared/winters/cold-spell", cell)).average().orElseThrow(), value("shared/cold-spell-mean", cell), 1e-4);
+        }
     }
 
     @Test

@@ -53,6 +53,10 @@ final class RequestedStatistics {
             list.addAll(fits(WinterField.minimum(), List.of()));
         }
         list.addAll(trends(WinterField.minimum()));
+        choices.reckoning().coldNight().ifPresent(threshold -> {
+            list.add(new ColdNightsMean(threshold, false));
+            list.add(new ColdNightsMean(threshold, true));
+        });
         return list;
     }
 
