@@ -100,7 +100,6 @@ final class SummaryPass {
                     int firstRow = row;
                     layer.writer().ifPresent(writer -> writer.write(0, firstRow, count, values));
                 }
-                progress.advance((long) count * layers.size());
                 workers.checkCancelled();
             }
             workers.forEach(layers.size(), (worker, layer) -> layers.get(layer).writer().ifPresent(RasterWriter::finish));
@@ -159,6 +158,8 @@ final class SummaryPass {
                     store.writeExtra(trendPlane(cultivar), row, out);
                 }
             }
+            // Rows of replicates take minutes: told here, not when a strip is written.
+            progress.advance((long) taskRows * layers.size());
         });
     }
 

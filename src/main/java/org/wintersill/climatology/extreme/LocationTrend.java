@@ -1,6 +1,6 @@
 package org.wintersill.climatology.extreme;
 
-import org.apache.commons.math3.distribution.ChiSquaredDistribution;
+import org.apache.commons.math3.special.Gamma;
 import org.apache.commons.math3.stat.regression.SimpleRegression;
 
 /**
@@ -57,6 +57,6 @@ public record LocationTrend(Gev gev, double slope, double logLikelihood, double 
         double likelihood = -loss.value(best);
         double ratio = Math.max(0, 2 * (likelihood - still.logLikelihood(maxima, n)));
         return new LocationTrend(new Gev(best[0], Math.exp(best[1]), best[2]), best[3] / unit, likelihood, ratio,
-                1 - new ChiSquaredDistribution(null, 1).cumulativeProbability(ratio));
+                Gamma.regularizedGammaQ(0.5, ratio / 2));
     }
 }
