@@ -30,7 +30,8 @@ public final class RunFileText {
             Map.entry("cultivars", "Cultivar files, and the ids to use."),
             Map.entry("damage", "Percents of organs killed, the one that makes a killing winter, and how nights are joined (worst, independent,\n"
                     + "# correlated with rho). Uncertainty: standard deviations in K by component, such as {model: 1.0, site: 0.8}."),
-            Map.entry("statistics", "Interval of the bounds, and the frequency of killing winters that is still accepted."),
+            Map.entry("statistics", "Interval of the bounds; the frequency of killing winters that is still accepted, or several of them;\n"
+                    + "# fits of extremes to 20 winters or more, replicates with their seed, trends, cold nights."),
             Map.entry("classes", "Highest frequency of killing winters that is secure, workable, marginal."),
             Map.entry("area", "The part of the target grid to work on: bbox: [west, south, east, north] in its reference system, polygons: a file."),
             Map.entry("scenario", "A climate model's future in place of the minima: method, pool and the model's files."),
