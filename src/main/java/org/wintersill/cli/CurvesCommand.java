@@ -6,6 +6,7 @@ import java.util.Optional;
 import java.util.concurrent.Callable;
 import org.wintersill.io.chart.ChartFile;
 import org.wintersill.problem.Problem;
+import org.wintersill.run.curve.FitRequest;
 import org.wintersill.time.MonthDay;
 import org.wintersill.time.SeasonWindow;
 import org.wintersill.time.SeasonWindow.Hemisphere;
@@ -17,11 +18,14 @@ import picocli.CommandLine.Parameters;
 /** {@code curves}: cultivar files by themselves. */
 @Command(name = "curves", header = "Check cultivar files, and show their curves as table or chart.",
         description = {"Tells all problems of the files at once. Of what is sound it shows LT10, LT50 and LT90 by date, on the first and "
-                + "the fifteenth of each month; --csv and --json give every day."},
+                + "the fifteenth of each month; --csv and --json give every day.", "",
+            "With --fit it estimates the parameters of a model from measured lethal temperatures, for each cultivar by itself: plain least "
+                + "squares, bootstrap intervals, residuals, and a cultivar file with --out. What the samples do not tell is said."},
         footerHeading = "%nExamples:%n",
         footer = {"  wintersill curves sample-grids/cultivars.yaml",
             "  wintersill curves sample-grids/cultivars.yaml --cultivar slate --csv > slate.csv",
-            "  wintersill curves sample-grids/cultivars.yaml --chart curves.svg"})
+            "  wintersill curves sample-grids/cultivars.yaml --chart curves.svg",
+            "  wintersill curves --fit sample-grids/field.csv --model dated --out fitted.yaml"})
 final class CurvesCommand implements Callable<Integer>, Manners.Kept {
     private final Session session;
 
@@ -37,6 +41,9 @@ final class CurvesCommand implements Callable<Integer>, Manners.Kept {
 
     @Option(names = "--south", description = "The winter of the southern hemisphere.")
     private boolean south;
+
+    @Mixin
+    private FitArguments fit;
 
     @Option(names = "--csv", description = "Answer with a table of comma-separated values, a row a day.")
     private boolean csv;
@@ -68,13 +75,18 @@ final class CurvesCommand implements Callable<Integer>, Manners.Kept {
     }
 
     private CurvesOptions options() {
-        if (files.isEmpty()) {
+        SeasonWindow winter = window();
+        Optional<FitRequest> request = fit.request(winter);
+        if (request.isPresent() && !files.isEmpty()) {
+            throw Problem.usage("--fit and cultivar files are both given", "", "Fit first, then look at the file of --out").asException();
+        }
+        if (request.isEmpty() && files.isEmpty()) {
             throw Problem.usage("no cultivar file is given", "", "Name at least one, such as sample-grids/cultivars.yaml").asException();
         }
         Optional<java.nio.file.Path> picture = Optional.ofNullable(chart).map(RunArguments::path);
         picture.ifPresent(file -> ChartFile.check(file, overwrite));
-        return new CurvesOptions(files.stream().map(RunArguments::path).toList(), cultivars, window(),
-                ExplainOptions.Format.of(json, csv), picture, overwrite);
+        return new CurvesOptions(files.stream().map(RunArguments::path).toList(), cultivars, winter,
+                ExplainOptions.Format.of(json, csv), picture, request, fit.out(overwrite), overwrite);
     }
 
     private SeasonWindow window() {

@@ -3,6 +3,7 @@ package org.wintersill.cli;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
+import org.wintersill.run.curve.FitRequest;
 import org.wintersill.time.SeasonWindow;
 
 /**
@@ -13,10 +14,13 @@ import org.wintersill.time.SeasonWindow;
  * @param window the winter
  * @param format how to answer
  * @param chart where to draw; empty for nowhere
+ * @param fit a trial fit in place of cultivar files
+ * @param out where its cultivar file goes; empty for nowhere
  * @param overwrite whether files of the same names may be replaced
  */
 public record CurvesOptions(List<Path> files, List<String> cultivars, SeasonWindow window, ExplainOptions.Format format,
-                            Optional<Path> chart, boolean overwrite) {
+                            Optional<Path> chart, Optional<FitRequest> fit,
+                            Optional<Path> out, boolean overwrite) {
 
     public CurvesOptions {
         files = List.copyOf(files);

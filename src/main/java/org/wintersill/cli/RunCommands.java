@@ -1,5 +1,6 @@
 package org.wintersill.cli;
 
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -10,6 +11,7 @@ import org.wintersill.config.Setting;
 import org.wintersill.engine.CancelledException;
 import org.wintersill.io.chart.ChartFile;
 import org.wintersill.io.crs.GeoToolsCrs;
+import org.wintersill.io.file.NewFile;
 import org.wintersill.io.json.JsonText;
 import org.wintersill.problem.Notices;
 import org.wintersill.problem.ProblemException;
@@ -33,6 +35,9 @@ import org.wintersill.run.RunPlan;
 import org.wintersill.run.RunPlanner;
 import org.wintersill.run.RunReport;
 import org.wintersill.run.curve.CurveSet;
+import org.wintersill.run.curve.FieldFit;
+import org.wintersill.run.curve.FieldFitChart;
+import org.wintersill.run.curve.FieldFitText;
 
 /** The commands on the rooms behind them. */
 final class RunCommands implements Commands {
@@ -179,6 +184,9 @@ final class RunCommands implements Commands {
 
     @Override
     public int curves(CurvesOptions options, Console console) {
+        if (options.fit().isPresent()) {
+            return fit(options, console);
+        }
         CurveSet curves = CurveSet.read(options.files(), options.cultivars(), options.window(), console.notices());
         options.chart().ifPresent(file -> {
             ChartFile.write(curves.chart(), file, options.overwrite());
@@ -188,6 +196,28 @@ final class RunCommands implements Commands {
             case JSON -> curves.json();
             case CSV -> curves.csv();
             case TEXT -> Console.clean(curves.table());
+        });
+        return ExitCode.DONE;
+    }
+
+    private static int fit(CurvesOptions options, Console console) {
+        FieldFit fit = FieldFit.of(options.fit().orElseThrow(), console.notices(), () -> {
+            if (console.cancellation().getAsBoolean()) {
+                throw new CancelledException();
+            }
+        });
+        options.out().ifPresent(file -> {
+            NewFile.write(file, FieldFitText.cultivarFile(fit).getBytes(StandardCharsets.UTF_8), options.overwrite());
+            console.message("The cultivar file is " + file);
+        });
+        options.chart().ifPresent(file -> {
+            ChartFile.write(FieldFitChart.of(fit), file, options.overwrite());
+            console.message("The chart is " + file);
+        });
+        console.result(switch (options.format()) {
+            case JSON -> FieldFitText.json(fit);
+            case CSV -> FieldFitText.csv(fit);
+            case TEXT -> Console.clean(FieldFitText.report(fit));
         });
         return ExitCode.DONE;
     }

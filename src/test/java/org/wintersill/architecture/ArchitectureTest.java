@@ -38,14 +38,15 @@ class ArchitectureTest {
         MAY_USE.put("damage", Set.of());
         MAY_USE.put("layer", Set.of("grid", "time", "problem"));
         MAY_USE.put("parcel", Set.of("grid", "problem"));
-        MAY_USE.put("season", Set.of("grid", "time", "hardiness", "damage", "layer", "problem"));
+        MAY_USE.put("season", Set.of("grid", "time", "temperature", "hardiness", "damage", "layer", "problem"));
         MAY_USE.put("climatology", Set.of("grid", "time", "layer", "season", "damage", "problem"));
+        MAY_USE.put("estimation", Set.of("time", "temperature", "hardiness", "season", "damage", "climatology", "problem"));
         MAY_USE.put("engine", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "season",
                 "climatology"));
         MAY_USE.put("io", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "parcel"));
         MAY_USE.put("config", Set.of("problem", "grid", "time", "temperature", "elevation", "parcel", "scenario", "io"));
         MAY_USE.put("scenario", Set.of("grid", "time", "temperature", "elevation", "engine", "problem"));
-        MAY_USE.put("run", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "season",
+        MAY_USE.put("run", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "season", "estimation",
                 "climatology", "engine", "parcel", "scenario", "io", "config"));
         MAY_USE.put("cli", Set.of("config", "run", "engine", "problem", "io", "temperature", "time"));
     }
@@ -107,7 +108,8 @@ class ArchitectureTest {
             String name = to.getPackageName();
             boolean ours = name.startsWith("org.wintersill");
             boolean jdk = name.startsWith("java.") || name.startsWith("javax.xml") || name.startsWith("org.w3c") || name.isEmpty();
-            boolean statistics = name.startsWith("org.apache.commons.math3") && room(from.getPackageName()).equals("climatology");
+            boolean statistics = name.startsWith("org.apache.commons.math3") 
+                    && Set.of("climatology", "estimation").contains(room(from.getPackageName()));
             if (!ours && !jdk && !statistics && !THIRD_PARTY_ROOMS.contains(room(from.getPackageName()))) {
                 violations.add(from.getName() + " uses " + to.getName());
             }
