@@ -31,7 +31,7 @@ public final class PointCourse {
         double[] lt50 = missing(season.days());
         double[] lt90 = missing(season.days());
         StateCultivar cultivar = new StateCultivar(0, (StateModel) model, ToleranceCurve.SPLIT_LOGISTIC, LEVELS);
-        StateLane lane = new StateLane(List.of(cultivar), 1, (c, night, tolerance, mean, state) -> {
+        StateLane lane = new StateLane(List.of(cultivar), DamageReckoning.PLAIN, 1, (c, night, tolerance, mean, state) -> {
             lt50[night] = tolerance.lt50()[0];
             lt10[night] = lt50[night] + tolerance.toLt10()[0];
             lt90[night] = lt50[night] - tolerance.toLt90()[0];
@@ -43,7 +43,7 @@ public final class PointCourse {
             lane.means()[0] = present(series.mean(number));
             lane.accept();
         }
-        lane.finish(cell -> true, new WinterValues(1, 1, 1));
+        lane.finish(cell -> true, new WinterValues(1, 1, DamageReckoning.PLAIN, 1));
         return new LethalTemperatures(lt10, lt50, lt90);
     }
 
