@@ -6,13 +6,16 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.function.Supplier;
 import org.wintersill.config.RunConfig;
 import org.wintersill.config.Setting;
 import org.wintersill.engine.CancelledException;
+import org.wintersill.io.chart.Chart;
 import org.wintersill.io.chart.ChartFile;
 import org.wintersill.io.crs.GeoToolsCrs;
 import org.wintersill.io.file.NewFile;
 import org.wintersill.io.json.JsonText;
+import org.wintersill.io.table.SeriesFile;
 import org.wintersill.problem.Notices;
 import org.wintersill.problem.ProblemException;
 import org.wintersill.problem.Problems;
@@ -34,10 +37,13 @@ import org.wintersill.run.ReturnPeriodChart;
 import org.wintersill.run.RunPlan;
 import org.wintersill.run.RunPlanner;
 import org.wintersill.run.RunReport;
+import org.wintersill.run.curve.BuiltInText;
 import org.wintersill.run.curve.CurveSet;
 import org.wintersill.run.curve.FieldFit;
 import org.wintersill.run.curve.FieldFitChart;
 import org.wintersill.run.curve.FieldFitText;
+import org.wintersill.run.curve.SeriesCourse;
+import org.wintersill.run.curve.SeriesText;
 
 /** The commands on the rooms behind them. */
 final class RunCommands implements Commands {
@@ -187,17 +193,38 @@ final class RunCommands implements Commands {
         if (options.fit().isPresent()) {
             return fit(options, console);
         }
+        if (options.builtIn()) {
+            answer(options.format(), console, BuiltInText::json, BuiltInText::csv, BuiltInText::table);
+            return ExitCode.DONE;
+        }
         CurveSet curves = CurveSet.read(options.files(), options.cultivars(), options.window(), console.notices());
+        if (options.series().isPresent()) {
+            CurvesOptions.SeriesOptions asked = options.series().get();
+            SeriesCourse course = curves.over(SeriesFile.read(asked.file(), asked.dailyRange(), console.notices()), asked.latitude(),
+                    asked.winter());
+            draw(options, console, () -> course.chart(asked.file().getFileName().toString()));
+            answer(options.format(), console, () -> SeriesText.json(course), () -> SeriesText.csv(course), () -> SeriesText.table(course));
+        } else {
+            draw(options, console, curves::chart);
+            answer(options.format(), console, curves::json, curves::csv, curves::table);
+        }
+        return ExitCode.DONE;
+    }
+
+    private static void draw(CurvesOptions options, Console console, Supplier<Chart> chart) {
         options.chart().ifPresent(file -> {
-            ChartFile.write(curves.chart(), file, options.overwrite());
+            ChartFile.write(chart.get(), file, options.overwrite());
             console.message("The chart is " + file);
         });
-        console.result(switch (options.format()) {
-            case JSON -> curves.json();
-            case CSV -> curves.csv();
-            case TEXT -> Console.clean(curves.table());
+    }
+
+    private static void answer(ExplainOptions.Format format, Console console, Supplier<String> json, Supplier<String> csv,
+                               Supplier<String> text) {
+        console.result(switch (format) {
+            case JSON -> json.get();
+            case CSV -> csv.get();
+            case TEXT -> Console.clean(text.get());
         });
-        return ExitCode.DONE;
     }
 
     private static int fit(CurvesOptions options, Console console) {
@@ -210,15 +237,8 @@ final class RunCommands implements Commands {
             NewFile.write(file, FieldFitText.cultivarFile(fit).getBytes(StandardCharsets.UTF_8), options.overwrite());
             console.message("The cultivar file is " + file);
         });
-        options.chart().ifPresent(file -> {
-            ChartFile.write(FieldFitChart.of(fit), file, options.overwrite());
-            console.message("The chart is " + file);
-        });
-        console.result(switch (options.format()) {
-            case JSON -> FieldFitText.json(fit);
-            case CSV -> FieldFitText.csv(fit);
-            case TEXT -> Console.clean(FieldFitText.report(fit));
-        });
+        draw(options, console, () -> FieldFitChart.of(fit));
+        answer(options.format(), console, () -> FieldFitText.json(fit), () -> FieldFitText.csv(fit), () -> FieldFitText.report(fit));
         return ExitCode.DONE;
     }
 }

@@ -32,17 +32,26 @@ public final class MarginChart {
      * @throws org.wintersill.problem.ProblemException when the cell has several cultivars
      */
     public static Chart of(RunPlan plan, CellExplanation cell) {
-        if (cell.cultivars().size() != 1) {
-            throw Problem.usage("a chart shows one cultivar, and the run has " + cell.cultivars().size(), "--chart", "Choose with "
-                    + "--cultivar one of " + String.join(", ", cell.cultivars().stream().map(course -> course.cultivar().id()).toList()))
-                    .asException();
-        }
+        checkOne(cell.cultivars());
         CellExplanation.CultivarCourse course = cell.cultivars().get(0);
         Winter winter = course.winters().get(0);
         Season season = plan.seasons().stream().filter(candidate -> candidate.label().equals(winter.label())).findFirst().orElseThrow();
         String place = String.format(Locale.ROOT, "Cell at %.6f, %.6f (%s)%s", cell.x(), cell.y(), cell.crs(),
                 Float.isNaN(cell.elevation()) ? "" : String.format(Locale.ROOT, ", elevation %.0f m", cell.elevation()));
         return of(place, course.cultivar(), winter, season);
+    }
+
+    /**
+     * Refuses a picture of several cultivars.
+     *
+     * @throws org.wintersill.problem.ProblemException when there is not exactly one
+     */
+    public static void checkOne(List<CellExplanation.CultivarCourse> courses) {
+        if (courses.size() != 1) {
+            throw Problem.usage("a chart shows one cultivar, and there are " + courses.size(), "--chart", "Choose with "
+                    + "--cultivar one of " + String.join(", ", courses.stream().map(course -> course.cultivar().id()).toList()))
+                    .asException();
+        }
     }
 
     /**

@@ -43,7 +43,7 @@ class CurvesTest {
         assertTrue(table.contains("no substitute for on-site loggers") && table.contains("fern (invented)"), table);
         String csv = Program.run("curves", SAMPLE, "--csv").expect(0).out();
         assertEquals(1 + 3 * 273, csv.lines().count());
-        assertTrue(csv.contains("slate,dated,invented,01-15,-15.0,-18.0,-20.2\n"), csv);
+        assertTrue(csv.contains("slate,dated,invented,01-15,,,-15.0,-18.0,-20.2\n"), csv);
     }
 
     @Test
@@ -115,5 +115,87 @@ class CurvesTest {
         assertTrue(Program.run("explain", "sample-grids/run.yaml", "--at", "-37.30,50.02", "--chart", explain[7]).expect(2).err()
                 .contains("--winter"));
         assertFalse(Files.exists(Path.of(explain[7])));
+    }
+
+    /** The trace of science 3.1: LT50 of a night is the state at the end of the day before, 7 September being day 1. */
+    @Test
+    void theTraceOfTheCheckTableThroughASeries() throws Exception {
+        StringBuilder series = new StringBuilder("date,tmin,tmean\n");
+        java.time.LocalDate first = java.time.LocalDate.of(2019, 9, 7);
+        var trace = org.wintersill.checks.CheckTables.csv("dynamic_trace.csv");
+        for (var row : trace) {
+            double mean = Double.parseDouble(row.get("tmean_C"));
+            series.append(first.plusDays(Integer.parseInt(row.get("day")) - 1)).append(',').append(mean - 4).append(',')
+                    .append(mean).append('\n');
+        }
+        Path yaml = file("demo.yaml", "cultivars:\n  - id: demo-a\n    model: thermal-time\n    source: Demo-A of the check table\n"
+                + "    status: invented\n    initial: -10\n    tender-limit: -2\n    hardy-limit: -24\n"
+                + "    endodormancy: {threshold: 12, acclimation: 0.1, deacclimation: 0.06}\n"
+                + "    ecodormancy: {threshold: 4, acclimation: 0.05, deacclimation: 0.12, power: 5}\n"
+                + "    chilling: -60\n    budbreak: -2.2\n    spread: 1\n");
+        String json = Program.run("curves", yaml.toString(), "--series", file("s.csv", series.toString()).toString(), "--json",
+                "--winter", "2019-20").expect(0).out();
+        JsonNode nights = new ObjectMapper().readTree(json).get("cultivars").get(0).get("winters").get(0).get("nights");
+        assertTrue(nights.get(5).get("lt50").isNull(), "before the start");
+        assertEquals(-10, nights.get(6).get("lt50").asDouble(), 1e-6);
+        for (int day = 1; day < 37; day++) {
+            assertEquals(Double.parseDouble(trace.get(day - 1).get("H_end_of_day_C")), nights.get(6 + day).get("lt50").asDouble(), 2e-6,
+                    "night after day " + day);
+        }
+    }
+
+    @Test
+    void aSeriesDrivesEveryModel() throws Exception {
+        String series = "sample-grids/series.csv";
+        String csv = Program.run("curves", SAMPLE, "built-in:grapevine-concord", "--series", series, "--csv", "--winter", "2009-10")
+                .expect(0).out();
+        assertEquals(1 + 4 * 273, csv.lines().count());
+        String table = Program.run("curves", SAMPLE, "built-in:grapevine-concord", "--series", series).expect(0).out();
+        assertTrue(table.contains("grapevine-concord") && table.contains("from memory") && table.contains("2013-14"), table);
+        Path svg = folder.resolve("s.svg");
+        Program.run("curves", SAMPLE, "--cultivar", "slate", "--series", series, "--winter", "2009-10", "--chart", svg.toString()).expect(0);
+        assertTrue(Files.readString(svg).contains("Temperatures of series.csv"));
+        assertTrue(Program.run("curves", SAMPLE, "--series", series, "--winter", "1999-00").expect(2).err().contains("2013-14"));
+        assertTrue(Program.run("curves", SAMPLE, "--series", series, "--chart", svg.toString(), "--overwrite").expect(2).err()
+                .contains("--winter"));
+        assertTrue(Program.run("curves", SAMPLE, "--winter", "2009-10").expect(2).err().contains("--series"));
+    }
+
+    @Test
+    void aResponseIsShownAgainstTheMeanAsTheCheckTableHasIt() throws Exception {
+        Path yaml = file("r.yaml", "cultivars:\n  - id: limb\n    model: response\n    source: invented limbs\n    status: invented\n"
+                + "    autumn: {tender-limit: -3, hardy-limit: -25, steepness: 0.55, midpoint: 6}\n"
+                + "    spring: {tender-limit: -3, hardy-limit: -25, steepness: 0.75, midpoint: 2}\n"
+                + "    spring-from: {chilling: [600, 900]}\n    spread: 1\n");
+        Path svg = folder.resolve("r.svg");
+        JsonNode curve = new ObjectMapper().readTree(Program.run("curves", yaml.toString(), "--json", "--chart", svg.toString()).expect(0)
+                .out()).get("cultivars").get(0).get("curve");
+        JsonNode known = org.wintersill.checks.CheckTables.json("dose_response.json").get("hardiness_limbs_invented").get("values");
+        int found = 0;
+        for (JsonNode row : curve) {
+            for (JsonNode value : known) {
+                if (value.get("trailing_mean").asDouble() == row.get("mean").asDouble()) {
+                    assertEquals(value.get("LT50_" + row.get("limb").asText()).asDouble(), row.get("lt50").asDouble(), 1e-8);
+                    found++;
+                }
+            }
+        }
+        assertEquals(2 * known.size(), found);
+        assertTrue(Files.readString(svg).contains("LT50, spring"));
+        assertTrue(Program.run("curves", yaml.toString()).expect(0).out().contains("autumn limb"));
+        assertTrue(Program.run("curves", yaml.toString(), SAMPLE, "--chart", svg.toString(), "--overwrite").expect(2).err()
+                .contains("share no axis"));
+    }
+
+    @Test
+    void whatComesWithTheProgramHasSourceAndStatus() throws Exception {
+        JsonNode document = new ObjectMapper().readTree(Program.run("curves", "--built-in", "--json").expect(0).out());
+        assertTrue(document.get("cultivars").size() >= 8 && document.get("published-values").size() >= 8);
+        document.get("cultivars").forEach(entry -> assertTrue(!entry.get("source").asText().isEmpty() && !entry.get("status").asText()
+                .isEmpty(), entry.toString()));
+        assertTrue(Program.run("curves", "--built-in").expect(0).out().contains("from memory"));
+        assertTrue(Program.run("curves", "--built-in", "--csv").expect(0).out().startsWith("id,name,"));
+        assertEquals(2, Program.run("curves", "--built-in", SAMPLE).code());
+        assertTrue(Program.run("curves", "built-in:grapevine-concrd").expect(2).err().contains("grapevine-concord"));
     }
 }

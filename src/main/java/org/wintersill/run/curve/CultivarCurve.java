@@ -5,6 +5,7 @@ import java.util.List;
 import org.wintersill.hardiness.CalendarModel;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.hardiness.LethalTemperatures;
+import org.wintersill.hardiness.model.ResponseModel;
 import org.wintersill.time.CfCalendar;
 import org.wintersill.time.CfDate;
 import org.wintersill.time.MonthDay;
@@ -20,18 +21,26 @@ import org.wintersill.time.SeasonWindow;
 public record CultivarCurve(Cultivar cultivar, Kind kind, List<Row> rows) {
     /** A year of 365 days that belongs to no winter in particular. */
     private static final int ANY_YEAR = 2001;
+    /** Limbs of a response. */
+    static final String AUTUMN = "autumn";
+    static final String SPRING = "spring";
+    /** Trailing means that a response is shown for, degC. */
+    static final int COLDEST_MEAN = -20;
+    static final int WARMEST_MEAN = 20;
 
     /** What lethal temperatures are listed against. */
     public enum Kind {
         /** Every day of the winter's window. */
         DATE,
+        /** The trailing mean temperature, for each limb of a response. */
+        MEAN,
         /** Nothing: the model needs a temperature series. */
         STATE
     }
 
     /**
-     * @param at month and day
-     * @param position day of the window from 0
+     * @param at month and day; limb of a response
+     * @param position day of the window from 0; trailing mean, degC
      * @param lt10 degC; NaN where the model says nothing
      */
     public record Row(String at, double position, double lt10, double lt50, double lt90) {
@@ -43,6 +52,9 @@ public record CultivarCurve(Cultivar cultivar, Kind kind, List<Row> rows) {
 
     /** The curve through a window of a year without leap day. */
     public static CultivarCurve of(Cultivar cultivar, SeasonWindow window) {
+        if (cultivar.model() instanceof ResponseModel response) {
+            return new CultivarCurve(cultivar, Kind.MEAN, limbs(response));
+        }
         if (!(cultivar.model() instanceof CalendarModel model)) {
             return new CultivarCurve(cultivar, Kind.STATE, List.of());
         }
@@ -55,6 +67,22 @@ public record CultivarCurve(Cultivar cultivar, Kind kind, List<Row> rows) {
                     course.lt90()[day]));
         }
         return new CultivarCurve(cultivar, Kind.DATE, rows);
+    }
+
+    private static List<Row> limbs(ResponseModel response) {
+        List<Row> rows = new ArrayList<>();
+        for (String limb : List.of(AUTUMN, SPRING)) {
+            for (int mean = COLDEST_MEAN; mean <= WARMEST_MEAN; mean++) {
+                double lt50 = (limb.equals(AUTUMN) ? response.autumn() : response.spring()).at(mean);
+                rows.add(new Row(limb, mean, lt50 + response.toLt10(), lt50, lt50 - response.toLt90()));
+            }
+        }
+        return rows;
+    }
+
+    /** The rows of one limb of a response. */
+    List<Row> limb(String name) {
+        return rows.stream().filter(row -> row.at().equals(name)).toList();
     }
 
     /** The winter that stands for all winters of a window. */

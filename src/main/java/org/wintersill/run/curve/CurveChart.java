@@ -22,20 +22,28 @@ import org.wintersill.time.SeasonWindow;
 public final class CurveChart {
     /** More panels than this nobody reads. */
     private static final int MOST_PANELS = 8;
-    private static final double ALONE = 360;
-    private static final double AMONG_OTHERS = 150;
+    static final double ALONE = 360;
+    static final double AMONG_OTHERS = 150;
 
     private CurveChart() {
     }
 
     /**
-     * Lethal temperatures through a winter.
+     * Lethal temperatures through a winter, or against the trailing mean.
      *
      * @throws org.wintersill.problem.ProblemException when there is nothing to draw, or too much
      */
-    public static Chart throughWinter(List<CultivarCurve> curves, SeasonWindow window) {
-        List<CultivarCurve> shown = curves.stream().filter(curve -> curve.kind() == Kind.DATE).toList();
+    public static Chart of(List<CultivarCurve> curves, SeasonWindow window) {
+        List<CultivarCurve> shown = curves.stream().filter(curve -> curve.kind() != Kind.STATE).toList();
         checkCount(shown.size(), curves.size());
+        long responses = shown.stream().filter(curve -> curve.kind() == Kind.MEAN).count();
+        if (responses == shown.size()) {
+            return ResponseChart.of(shown);
+        }
+        if (responses > 0) {
+            throw Problem.usage("curves by date and responses to temperature share no axis", "--chart", "Choose with --cultivar")
+                    .asException();
+        }
         Axis vertical = Axis.around("\u00b0C", shown.stream().flatMap(curve -> java.util.stream.Stream.of(
                 values(curve, Row::lt10), values(curve, Row::lt90))).toArray(double[][]::new));
         List<Panel> panels = new ArrayList<>();
@@ -49,10 +57,10 @@ public final class CurveChart {
                 Axis.winter(CultivarCurve.season(window)), panels, List.of(sources(cultivars), Caution.of(cultivars)));
     }
 
-    static void checkCount(int shown, int given) {
+    private static void checkCount(int shown, int given) {
         if (shown == 0) {
             throw Problem.usage("none of the " + given + " cultivars has a curve that stands without weather", "--chart",
-                    "Give --series SERIES.csv, one --cultivar and one --winter").asException();
+                    "Give --series SERIES.csv, one --winter and one --cultivar").asException();
         }
         if (shown > MOST_PANELS) {
             throw Problem.usage("a chart holds up to " + MOST_PANELS + " cultivars, and there are " + shown, "--chart",
@@ -60,7 +68,7 @@ public final class CurveChart {
         }
     }
 
-    private static String label(Cultivar cultivar) {
+    static String label(Cultivar cultivar) {
         List<String> parts = new ArrayList<>(List.of(cultivar.name(), cultivar.species(), cultivar.organ()));
         parts.removeIf(String::isEmpty);
         return String.join(", ", parts);

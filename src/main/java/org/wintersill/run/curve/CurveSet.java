@@ -3,12 +3,16 @@ package org.wintersill.run.curve;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.io.chart.Chart;
+import org.wintersill.io.cultivar.BuiltInCultivars;
 import org.wintersill.io.cultivar.CultivarFile;
 import org.wintersill.problem.NearestName;
 import org.wintersill.problem.Notices;
 import org.wintersill.problem.Problem;
+import org.wintersill.problem.Problems;
+import org.wintersill.temperature.DailySeries;
 import org.wintersill.time.SeasonWindow;
 
 /**
@@ -26,11 +30,18 @@ public record CurveSet(List<Cultivar> cultivars, SeasonWindow window) {
     /**
      * Reads and checks.
      *
+     * @param names cultivar files, and built-in cultivars with their prefix
      * @param ids of the cultivars that are wanted; empty for all
      * @throws org.wintersill.problem.ProblemException with all problems of all files, or for an id that none has
      */
-    public static CurveSet read(List<Path> files, List<String> ids, SeasonWindow window, Notices notices) {
-        List<Cultivar> all = CultivarFile.readAll(files, notices);
+    public static CurveSet read(List<String> names, List<String> ids, SeasonWindow window, Notices notices) {
+        Problems problems = new Problems();
+        List<Cultivar> all = new ArrayList<>();
+        List<Path> files = names.stream().filter(name -> !name.startsWith(BuiltInCultivars.PREFIX)).map(Path::of).toList();
+        problems.attempt(() -> all.addAll(CultivarFile.readAll(files, notices)));
+        names.stream().filter(name -> name.startsWith(BuiltInCultivars.PREFIX)).forEach(name -> problems.attempt(() ->
+                all.add(CultivarFile.builtIn(name.substring(BuiltInCultivars.PREFIX.length()), name, notices))));
+        problems.throwIfAny();
         List<Cultivar> wanted = new ArrayList<>(all);
         if (!ids.isEmpty()) {
             List<String> known = all.stream().map(Cultivar::id).toList();
@@ -65,7 +76,12 @@ public record CurveSet(List<Cultivar> cultivars, SeasonWindow window) {
         return CurveText.json(curves());
     }
 
+    /** The cultivars driven by temperatures; {@code winter} is the label of one, or empty for all. */
+    public SeriesCourse over(DailySeries series, double latitude, Optional<String> winter) {
+        return SeriesCourse.of(cultivars, window, series, latitude, winter);
+    }
+
     public Chart chart() {
-        return CurveChart.throughWinter(curves(), window);
+        return CurveChart.of(curves(), window);
     }
 }

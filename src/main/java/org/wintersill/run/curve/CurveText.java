@@ -24,6 +24,15 @@ public final class CurveText {
             text.append(heading(curve.cultivar()));
             if (curve.kind() == Kind.STATE) {
                 line(text, "  follows the weather: give --series SERIES.csv to see its course");
+            } else if (curve.kind() == Kind.MEAN) {
+                line(text, "  trailing   autumn limb               spring limb");
+                line(text, "  mean          LT10    LT50    LT90      LT10    LT50    LT90   degC");
+                List<Row> spring = curve.limb(CultivarCurve.SPRING);
+                curve.limb(CultivarCurve.AUTUMN).stream().filter(row -> row.position() % 2 == 0).forEach(row -> {
+                    Row other = spring.get((int) row.position() - CultivarCurve.COLDEST_MEAN);
+                    line(text, "  %8.0f   %s %s %s   %s %s %s", row.position(), cell(row.lt10()), cell(row.lt50()), cell(row.lt90()),
+                            cell(other.lt10()), cell(other.lt50()), cell(other.lt90()));
+                });
             } else {
                 line(text, "  date     LT10    LT50    LT90   degC");
                 curve.rows().stream().filter(row -> row.at().endsWith("-01") || row.at().endsWith("-15"))
@@ -57,22 +66,23 @@ public final class CurveText {
 
     /** One row a cultivar and day. */
     public static String csv(List<CultivarCurve> curves) {
-        CsvText csv = new CsvText("cultivar", "model", "status", "date", "lt10_degc", "lt50_degc", "lt90_degc");
+        CsvText csv = new CsvText("cultivar", "model", "status", "date", "limb", "mean_degc", "lt10_degc", "lt50_degc", "lt90_degc");
         for (CultivarCurve curve : curves) {
             for (Row row : curve.rows()) {
-                csv.row(curve.cultivar().id(), curve.cultivar().model().id(), curve.cultivar().status().word(), row.at(), row.lt10(),
-                        row.lt50(), row.lt90());
+                boolean dated = curve.kind() == Kind.DATE;
+                csv.row(curve.cultivar().id(), curve.cultivar().model().id(), curve.cultivar().status().word(), dated ? row.at() : "",
+                        dated ? "" : row.at(), dated ? "" : row.position(), row.lt10(), row.lt50(), row.lt90());
             }
         }
         return csv.toString();
     }
 
-    /** One document, version 1, null for missing; {@code curve} is empty for models that follow the weather. */
+    /** One document, version 1, null for missing; {@code curve} is empty for models that have none without weather. */
     public static String json(List<CultivarCurve> curves) {
         List<Map<String, Object>> entries = new ArrayList<>();
         for (CultivarCurve curve : curves) {
             Map<String, Object> entry = identity(curve.cultivar());
-            entry.put("curve", curve.rows().stream().map(CurveText::row).toList());
+            entry.put("curve", curve.rows().stream().map(row -> row(curve.kind(), row)).toList());
             entries.add(entry);
         }
         return document(entries, cultivars(curves));
@@ -100,9 +110,14 @@ public final class CurveText {
         return entry;
     }
 
-    private static Map<String, Object> row(Row row) {
+    private static Map<String, Object> row(Kind kind, Row row) {
         Map<String, Object> cells = new LinkedHashMap<>();
-        cells.put("date", row.at());
+        if (kind == Kind.DATE) {
+            cells.put("date", row.at());
+        } else {
+            cells.put("limb", row.at());
+            cells.put("mean", row.position());
+        }
         cells.put("lt10", JsonText.number(row.lt10()));
         cells.put("lt50", JsonText.number(row.lt50()));
         cells.put("lt90", JsonText.number(row.lt90()));

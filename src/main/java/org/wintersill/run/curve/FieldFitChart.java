@@ -45,8 +45,8 @@ public final class FieldFitChart {
         points.add(0, new Mark.Line(ends, ends, ChartColours.FAINT, Mark.Stroke.STRONG, "measured = fitted"));
         return new Chart("Trial fit of " + field.request().model(), List.copyOf(field.fits().values().stream().map(field::source).toList()),
                 "Measured LT50 against fitted LT50 of " + field.fits().size() + " cultivars, with the residuals.", fitted,
-                List.of(new Panel("Measured against fitted LT50", Axis.around("measured LT50 (\u00b0C)", all.toArray(double[][]::new)), SCATTER,
-                        points), new Panel("Residuals: measured minus fitted", Axis.around("K", residuals.toArray(double[][]::new)),
+                List.of(new Panel("Measured against fitted LT50", Axis.around("measured LT50 (\u00b0C)", all.toArray(double[][]::new)),
+                        SCATTER, points), new Panel("Residuals: measured minus fitted", Axis.around("K", residuals.toArray(double[][]::new)),
                         RESIDUALS, remains)), List.of(Caution.SHORT));
     }
 }
