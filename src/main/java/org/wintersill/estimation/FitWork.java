@@ -90,7 +90,7 @@ final class FitWork {
         for (int i = 0; i < predicted.length; i++) {
             Season winter = winters.get(i);
             double[] course = courses.computeIfAbsent(winter.year(), year ->
-                    PointCourse.of(model, winter, task.series(), task.latitude()).lt50());
+                    PointCourse.of(model, winter, task.window(), task.series(), task.latitude()).lt50());
             predicted[i] = course[winter.position(samples.get(i).date())];
         }
         return predicted;

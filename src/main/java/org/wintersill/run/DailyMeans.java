@@ -157,28 +157,8 @@ record DailyMeans(List<Cultivar> cultivars, SeasonWindow window, DayAxis minimum
         problems.throwIfAny();
     }
 
-    /**
-     * First day that a model is told of in a winter: its own first day, or one of the days before that it can use, as far as the
-     * record reaches back after the winter before without a gap too long to be filled.
-     */
     private int firstDay(StateModel model, Season season) {
-        int first = model.firstDay(season);
-        Season before = window.beginningIn(season.first().year() - 1, season.calendar());
-        int bound = Math.max(model.earliestDay(season), (int) (before.firstDay() + before.days() - season.firstDay()));
-        int absent = 0;
-        while (absent <= StateLane.LONGEST_GAP && !isKnown(season, first + absent)) {
-            absent++;
-        }
-        int start = first;
-        for (int day = first - 1; day >= bound && absent <= StateLane.LONGEST_GAP; day--) {
-            if (isKnown(season, day)) {
-                start = day;
-                absent = 0;
-            } else {
-                absent++;
-            }
-        }
-        return start;
+        return StateLane.firstTold(model, season, window, day -> isKnown(season, day));
     }
 
     private boolean isKnown(Season season, int day) {

@@ -9,6 +9,7 @@ import org.wintersill.hardiness.LethalTemperatures;
 import org.wintersill.hardiness.StateModel;
 import org.wintersill.temperature.DailySeries;
 import org.wintersill.time.Season;
+import org.wintersill.time.SeasonWindow;
 
 /** The lethal temperatures of a model at one place through one winter, by the lane that a run uses, gaps included. */
 public final class PointCourse {
@@ -20,10 +21,12 @@ public final class PointCourse {
     /**
      * Follows a winter.
      *
+     * @param window of the winters; means of the winter before are not looked at
      * @param latitude degrees north
      * @return NaN where the model says nothing, or where its state is lost in a long gap
      */
-    public static LethalTemperatures of(HardinessModel model, Season season, DailySeries series, double latitude) {
+    public static LethalTemperatures of(HardinessModel model, Season season, SeasonWindow window, DailySeries series,
+                                        double latitude) {
         if (model instanceof CalendarModel calendarModel) {
             return calendarModel.overSeason(season);
         }
@@ -36,7 +39,9 @@ public final class PointCourse {
             lt10[night] = lt50[night] + tolerance.toLt10()[0];
             lt90[night] = lt50[night] - tolerance.toLt90()[0];
         });
-        lane.begin(season, new double[] {latitude});
+        int first = StateLane.firstTold((StateModel) model, season, window, day ->
+                !Float.isNaN(series.mean(season.firstDay() + day)));
+        lane.begin(season, new int[] {first}, new double[] {latitude});
         for (int day = lane.firstDay(); day < season.days(); day++) {
             long number = season.firstDay() + day;
             lane.minima()[0] = present(series.minimum(number));

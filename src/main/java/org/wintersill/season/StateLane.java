@@ -5,7 +5,9 @@ import java.util.List;
 import java.util.function.IntPredicate;
 import org.wintersill.hardiness.HardinessTrajectory;
 import org.wintersill.hardiness.NightTolerance;
+import org.wintersill.hardiness.StateModel;
 import org.wintersill.time.Season;
+import org.wintersill.time.SeasonWindow;
 
 /**
  * The cultivars with state models in a lane of cells through one winter: days in, the same winter values out that
@@ -84,6 +86,33 @@ public final class StateLane {
             bytes += StateAccumulator.bytesPerCell(cultivar.levels().length, reckoning) + Float.BYTES + 1 + cultivar.model().bytesPerCell();
         }
         return bytes;
+    }
+
+    /**
+     * First day that a model is told of in a winter: its own first day, or one of the days before that it can use, as far as the
+     * record reaches back after the winter before without a gap too long to be filled.
+     *
+     * @param window of the winters
+     * @param isKnown whether the record has a mean on a day, by position in the season's window
+     */
+    public static int firstTold(StateModel model, Season season, SeasonWindow window, IntPredicate isKnown) {
+        int first = model.firstDay(season);
+        Season before = window.beginningIn(season.first().year() - 1, season.calendar());
+        int bound = Math.max(model.earliestDay(season), (int) (before.firstDay() + before.days() - season.firstDay()));
+        int absent = 0;
+        while (absent <= LONGEST_GAP && !isKnown.test(first + absent)) {
+            absent++;
+        }
+        int start = first;
+        for (int day = first - 1; day >= bound && absent <= LONGEST_GAP; day--) {
+            if (isKnown.test(day)) {
+                start = day;
+                absent = 0;
+            } else {
+                absent++;
+            }
+        }
+        return start;
     }
 
     /**

@@ -52,7 +52,7 @@ class CultivarFitTest {
         List<MeasuredTolerance> samples = new ArrayList<>();
         for (int year = FIRST_YEAR; year < FIRST_YEAR + WINTERS; year++) {
             Season season = NORTH.beginningIn(year, CfCalendar.STANDARD);
-            double[] lt50 = PointCourse.of(truth, season, SERIES, 46).lt50();
+            double[] lt50 = PointCourse.of(truth, season, NORTH, SERIES, 46).lt50();
             for (int night = 20; night < 235; night += every) {
                 double value = lt50[night] + error * 2 * (random.nextDouble() + random.nextDouble() + random.nextDouble() - 1.5);
                 samples.add(new MeasuredTolerance("Demo", season.date(night), value + 2.1, value, value - 1.7, Double.NaN));

@@ -48,7 +48,7 @@ public record SeriesCourse(List<CultivarCourse> courses, List<Season> seasons, D
                     all.stream().map(Season::label).toList())).asException();
         }
         List<CultivarCourse> courses = cultivars.stream().map(cultivar -> new CultivarCourse(cultivar,
-                seasons.stream().map(season -> winter(cultivar, season, series, latitude)).toList())).toList();
+                seasons.stream().map(season -> winter(cultivar, season, window, series, latitude)).toList())).toList();
         return new SeriesCourse(courses, seasons, series);
     }
 
@@ -63,8 +63,8 @@ public record SeriesCourse(List<CultivarCourse> courses, List<Season> seasons, D
         return MarginChart.of("Temperatures of " + name, courses.get(0).cultivar(), courses.get(0).winters().get(0), seasons.get(0));
     }
 
-    private static Winter winter(Cultivar cultivar, Season season, DailySeries series, double latitude) {
-        LethalTemperatures lethal = PointCourse.of(cultivar.model(), season, series, latitude);
+    private static Winter winter(Cultivar cultivar, Season season, SeasonWindow window, DailySeries series, double latitude) {
+        LethalTemperatures lethal = PointCourse.of(cultivar.model(), season, window, series, latitude);
         CompletenessTally tally = new CompletenessTally(season, MissingDayPolicy.MONTH_10_5, 1);
         List<Night> nights = new ArrayList<>();
         float margin = Float.NaN;
@@ -74,7 +74,8 @@ public record SeriesCourse(List<CultivarCourse> courses, List<Season> seasons, D
             float tmin = series.minimum(season.firstDay() + n);
             tally.accept(n, new float[] {tmin}, 0, 0, 1);
             double lt50 = lethal.lt50()[n];
-            Night night = new Night(season.date(n).toString(), tmin, tmin, 0, tmin, lethal.lt10()[n], lt50, lethal.lt90()[n],
+            Night night = new Night(season.date(n).toString(), tmin, tmin, 0, tmin,
+                    series.mean(season.firstDay() + n), "", lethal.lt10()[n], lt50, lethal.lt90()[n],
                     tmin - (float) lt50, cultivar.tolerance().killedFraction(tmin, lethal.lt10()[n], lt50, lethal.lt90()[n]));
             nights.add(night);
             if (night.margin() < margin || Float.isNaN(margin) && !Float.isNaN(night.margin())) {
