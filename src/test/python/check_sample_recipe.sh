@@ -7,6 +7,7 @@ committed=$(cd "$here/../../../sample-grids" && pwd)
 made=$(mktemp -d)
 trap 'rm -rf "$made"' EXIT
 /usr/bin/python3 "$here/make_sample_grids.py" "$made"
+(cd "$here/../../.." && /usr/bin/python3 "$here/make_sample_field.py" "$made")
 /usr/bin/python3 - "$committed" "$made" <<'PY'
 import os
 import sys
@@ -55,7 +56,12 @@ def parcels(a, b):
     return None if rows(x) == rows(y) else "other rows"
 
 
-kinds = {".nc": netcdf, ".tif": tiff, ".gpkg": parcels}
+def table(a, b):
+    with open(a) as x, open(b) as y:
+        return None if x.read() == y.read() else "other text"
+
+
+kinds = {".nc": netcdf, ".tif": tiff, ".gpkg": parcels, ".csv": table}
 for name in sorted(os.listdir(new)):
     ending = os.path.splitext(name)[1]
     path = os.path.join(old, name)
