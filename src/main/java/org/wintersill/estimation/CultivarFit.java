@@ -3,7 +3,6 @@ package org.wintersill.estimation;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import org.wintersill.damage.ToleranceCurve;
 import org.wintersill.estimation.FitModel.Role;
 import org.wintersill.estimation.FitModel.Setting;
@@ -234,11 +233,5 @@ public record CultivarFit(String word, List<MeasuredTolerance> samples, List<Sea
             }
         }
         return kept;
-    }
-
-    /** The first estimate or kept value of a name. */
-    public Optional<Double> value(String name) {
-        return java.util.stream.Stream.concat(fit.estimates().stream().filter(e -> e.parameter().name().equals(name))
-                .map(TrialFit.Estimate::value), kept.stream().filter(k -> k.parameter().name().equals(name)).map(Kept::value)).findFirst();
     }
 }

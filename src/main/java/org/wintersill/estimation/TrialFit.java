@@ -45,7 +45,7 @@ public record TrialFit(List<Estimate> estimates, double[] fitted, double[] resid
     }
 
     /**
-     * @param lower bound of the interval
+     * @param lower bound of the interval; NaN without replicates
      * @param upper likewise
      */
     public record Estimate(Parameter parameter, double value, double lower, double upper, Standing standing) {
@@ -98,8 +98,8 @@ public record TrialFit(List<Estimate> estimates, double[] fitted, double[] resid
 
     private static Estimate estimate(Parameter parameter, double value, double[] replicates, double[][] slopes, int j, double confidence) {
         double range = parameter.high() - parameter.low();
-        double lower = value;
-        double upper = value;
+        double lower = Double.NaN;
+        double upper = Double.NaN;
         if (replicates.length > 0) {
             Arrays.sort(replicates);
             lower = Percentiles.type7(replicates, replicates.length, (1 - confidence) / 2);

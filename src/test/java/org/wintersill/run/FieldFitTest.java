@@ -60,6 +60,7 @@ class FieldFitTest {
             JsonNode estimate = fit.get("estimates").get(i);
             assertEquals(truth[i], estimate.get("value").asDouble(), near[i], estimate.get("name").asText());
         }
+        assertTrue(fit.get("estimates").get(0).get("lower").isNull(), "no interval without replicates");
         assertEquals(0.5, fit.get("rmse").asDouble(), 0.06, "the error that was added");
     }
 

@@ -32,8 +32,10 @@ public final class FieldFitText {
             line(text, "%s: %s", id, field.source(fit));
             line(text, "  %-30s %10s   %s interval", fit.word(), "estimate", percent(field.request().confidence()));
             for (Estimate estimate : fit.fit().estimates()) {
-                line(text, "  %-30s %10.4f   %10.4f to %10.4f  %s%s", estimate.parameter().name(), estimate.value(), estimate.lower(),
-                        estimate.upper(), estimate.parameter().unit(), estimate.standing().words().isEmpty() ? ""
+                String interval = Double.isNaN(estimate.lower()) ? "none"
+                        : String.format(Locale.ROOT, "%.4f to %.4f", estimate.lower(), estimate.upper());
+                line(text, "  %-30s %10.4f   %24s  %s%s", estimate.parameter().name(), estimate.value(), interval,
+                        estimate.parameter().unit(), estimate.standing().words().isEmpty() ? ""
                                 : "  (" + estimate.standing().words() + ")");
             }
             fit.kept().forEach(kept -> line(text, "  %-30s %10.4f   %s", kept.parameter().name(), kept.value(), kept.reason()));
@@ -118,8 +120,8 @@ public final class FieldFitText {
         entry.put("name", estimate.parameter().name());
         entry.put("unit", estimate.parameter().unit());
         entry.put("value", estimate.value());
-        entry.put("lower", estimate.lower());
-        entry.put("upper", estimate.upper());
+        entry.put("lower", JsonText.number(estimate.lower()));
+        entry.put("upper", JsonText.number(estimate.upper()));
         entry.put("standing", estimate.standing().name().toLowerCase(Locale.ROOT).replace('_', '-'));
         return entry;
     }
