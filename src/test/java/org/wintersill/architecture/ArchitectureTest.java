@@ -46,8 +46,9 @@ class ArchitectureTest {
         MAY_USE.put("io", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "parcel"));
         MAY_USE.put("config", Set.of("problem", "grid", "time", "temperature", "elevation", "parcel", "scenario", "io"));
         MAY_USE.put("scenario", Set.of("grid", "time", "temperature", "elevation", "engine", "problem"));
+        MAY_USE.put("comparison", Set.of("grid", "climatology", "problem"));
         MAY_USE.put("run", Set.of("problem", "grid", "time", "temperature", "elevation", "hardiness", "damage", "layer", "season", "estimation",
-                "climatology", "engine", "parcel", "scenario", "io", "config"));
+                "climatology", "engine", "parcel", "scenario", "comparison", "io", "config"));
         MAY_USE.put("cli", Set.of("config", "run", "engine", "problem", "io", "temperature", "time"));
     }
 

@@ -7,6 +7,7 @@ import com.fasterxml.jackson.databind.ObjectMapper;
 import java.util.stream.StreamSupport;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
+import org.wintersill.comparison.ChangeSignal;
 
 /** Against {@code checks/scenario.json}: computed with numpy's quantiles of type 7 on invented data. */
 class ScenarioTablesTest {

@@ -1,4 +1,4 @@
-package org.wintersill.scenario;
+package org.wintersill.comparison;
 
 /**
  * What the changes of several members say together: the classes of the advanced approach of IPCC AR6 (science 8).
