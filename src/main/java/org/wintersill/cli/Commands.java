@@ -24,6 +24,9 @@ public interface Commands {
     /** The settings of a run on whatever a folder of inputs holds; each file is told of. */
     List<Setting> settings(Path folder, Console console);
 
+    /** What changed between finished outputs. */
+    int compare(CompareOptions options, Console console);
+
     /** How input files are understood. */
     int inspect(InspectOptions options, Console console);
 

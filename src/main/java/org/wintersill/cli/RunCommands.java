@@ -10,6 +10,7 @@ import java.util.function.Supplier;
 import org.wintersill.config.RunConfig;
 import org.wintersill.config.Setting;
 import org.wintersill.engine.CancelledException;
+import org.wintersill.engine.Workers;
 import org.wintersill.io.chart.Chart;
 import org.wintersill.io.chart.ChartFile;
 import org.wintersill.io.crs.GeoToolsCrs;
@@ -21,10 +22,12 @@ import org.wintersill.problem.ProblemException;
 import org.wintersill.problem.Problems;
 import org.wintersill.run.Caution;
 import org.wintersill.run.CellExplanation;
+import org.wintersill.run.ComparisonRun;
 import org.wintersill.run.CellStatistics;
 import org.wintersill.run.CellStatisticsText;
 import org.wintersill.run.ElevationInspection;
 import org.wintersill.run.ExplanationText;
+import org.wintersill.run.FinishedFolder;
 import org.wintersill.run.FolderContents;
 import org.wintersill.run.InputFormats;
 import org.wintersill.run.Inspection;
@@ -116,6 +119,32 @@ final class RunCommands implements Commands {
     @Override
     public List<Setting> settings(Path folder, Console console) {
         return FolderContents.settings(folder, formats(), console.notices());
+    }
+
+    @Override
+    public int compare(CompareOptions options, Console console) {
+        formats();
+        OutputFolder.check(options.out(), options.overwrite());
+        ComparisonRun comparison = ComparisonRun.of(FinishedFolder.open(options.base(), crs),
+                options.others().stream().map(other -> FinishedFolder.open(other, crs)).toList(), options.cultivars());
+        int files;
+        int threads = options.threads() > 0 ? options.threads() : Runtime.getRuntime().availableProcessors();
+        try (Workers workers = new Workers(threads, console.cancellation())) {
+            files = comparison.execute(options.out(), options.overwrite(), crs, workers, console.progress());
+        }
+        if (options.json()) {
+            Map<String, Object> document = new LinkedHashMap<>();
+            document.put("version", 1);
+            document.put("folder", options.out().toString());
+            document.put("files", files);
+            document.put("changes", options.out().resolve("changes.json").toString());
+            document.put("caution", Caution.SHORT);
+            console.result(JsonText.of(document));
+        } else {
+            console.message(files + " files in " + options.out());
+            console.message(Caution.SHORT);
+        }
+        return ExitCode.DONE;
     }
 
     @Override

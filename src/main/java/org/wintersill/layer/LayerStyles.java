@@ -125,6 +125,50 @@ public final class LayerStyles {
                 v -> (v > 0 ? "+" : "") + (v == Math.rint(v) ? whole(v) : Double.toString(v)) + " K");
     }
 
+    /** Change of a margin between two periods in K: smaller margins are warm, as danger is everywhere. */
+    public static LayerStyle.Ramp marginChange() {
+        return ramp("margin-change", "Change of the margin (K)", new double[] {-6, -4, -2, -1, 0, 1, 2, 4, 6}, DANGER_TO_SAFETY,
+                v -> signed(v) + " K");
+    }
+
+    /** Change of a frequency or of a killed fraction between two periods: more is warm. */
+    public static LayerStyle.Ramp shareChange() {
+        return ramp("share-change", "Change of the share", new double[] {-0.6, -0.3, -0.15, -0.05, 0, 0.05, 0.15, 0.3, 0.6},
+                reversed(DANGER_TO_SAFETY), v -> (v > 0 ? "+" : "") + Math.round(100 * v) + " %");
+    }
+
+    /** What became of a range: 1 {@code kept}, 2 {@code gained}, 3 {@code lost}, 4 {@code never-suitable}. */
+    public static LayerStyle.Classes rangeChange() {
+        return new LayerStyle.Classes("range-change", "Range", List.of(
+                new LayerStyle.Entry(1, "kept", "kept", Colour.hex("#7fb6d6")),
+                new LayerStyle.Entry(2, "gained", "gained", Colour.hex("#1d4e89")),
+                new LayerStyle.Entry(3, "lost", "lost", Colour.hex("#7a2018")),
+                new LayerStyle.Entry(4, "never-suitable", "never suitable", Colour.hex("#e6dfc8"))));
+    }
+
+    /** Changes of a frequency beyond chance: 1 {@code fewer}, 2 {@code unclear}, 3 {@code more} killing winters. */
+    public static LayerStyle.Classes frequencySignificance() {
+        return new LayerStyle.Classes("frequency-significance", "Killing winters beyond chance", List.of(
+                new LayerStyle.Entry(1, "fewer", "fewer", Colour.hex("#1d4e89")),
+                new LayerStyle.Entry(2, "unclear", "no clear change", Colour.hex("#e6dfc8")),
+                new LayerStyle.Entry(3, "more", "more", Colour.hex("#7a2018"))));
+    }
+
+    /** What the members of an ensemble say together: 1 {@code robust}, 2 {@code none}, 3 {@code conflicting}. */
+    public static LayerStyle.Classes changeSignal() {
+        return new LayerStyle.Classes("change-signal", "Signal of the members", List.of(
+                new LayerStyle.Entry(1, "robust", "robust signal", Colour.hex("#1d4e89")),
+                new LayerStyle.Entry(2, "none", "no change or no robust signal", Colour.hex("#e6dfc8")),
+                new LayerStyle.Entry(3, "conflicting", "conflicting signals", Colour.hex("#f0a94a"))));
+    }
+
+    /** Limit lines of a comparison: 1 {@code base}, 2 {@code other}. */
+    public static LayerStyle.Classes limitLines() {
+        return new LayerStyle.Classes("limit-lines", "Limit of the range", List.of(
+                new LayerStyle.Entry(1, "base", "base", Colour.hex("#1d4e89")),
+                new LayerStyle.Entry(2, "other", "other", Colour.hex("#7a2018"))));
+    }
+
     /** Shape of an extreme value distribution: negative is bounded, positive has a heavy tail. */
     public static LayerStyle.Ramp shape() {
         return ramp("shape", "Shape of the extremes", new double[] {-0.5, -0.3, -0.15, 0, 0.15, 0.3, 0.5}, LOWER_TO_HIGHER,
@@ -191,7 +235,8 @@ public final class LayerStyles {
     /** One style of each kind, in a fixed order; styles made to measure stand here in their usual size. */
     public static List<LayerStyle> all() {
         return List.of(margin(), requiredHardiness(), probability(), damage(), share(), temperature(), night(), year(),
-                count(), returnPeriod(), elevation(), heightChange(), trend(), shape(), spread(), fitCorrelation(), fitFlag(), trendSignificance(),
+                count(), returnPeriod(), elevation(), heightChange(), trend(), shape(), spread(), fitCorrelation(), fitFlag(), trendSignificance(), marginChange(),
+                shareChange(), rangeChange(), frequencySignificance(), changeSignal(),
                 suitability(), choice(6));
     }
 

@@ -36,6 +36,11 @@ final class FakeCommands implements Commands {
     }
 
     @Override
+    public int compare(CompareOptions options, Console console) {
+        return done("compare", null, console);
+    }
+
+    @Override
     public int inspect(InspectOptions options, Console console) {
         inspectOptions = options;
         return done("inspect", null, console);

@@ -79,6 +79,15 @@ public final class QmlWriter {
      * @param column name of the text column
      */
     public static String polygons(LayerStyle.Classes classes, String column) {
+        return categorized(classes, column, Shape.FILL);
+    }
+
+    /** Style of lines by the name of their class; as {@link #polygons}. */
+    public static String lines(LayerStyle.Classes classes, String column) {
+        return categorized(classes, column, Shape.LINE);
+    }
+
+    private static String categorized(LayerStyle.Classes classes, String column, Shape shape) {
         XmlText xml = root("Symbology");
         xml.open("renderer-v2", "type", "categorizedSymbol", "attr", attribute(column), "symbollevels", "0",
                 "enableorderby", "0", "forceraster", "0");
@@ -89,8 +98,8 @@ public final class QmlWriter {
                     "label", entries.get(i).label(), "render", "true");
         }
         xml.close();
-        symbols(xml, entries.stream().map(LayerStyle.Entry::colour).toList(), Shape.FILL);
-        return end(xml, Shape.FILL);
+        symbols(xml, entries.stream().map(LayerStyle.Entry::colour).toList(), shape);
+        return end(xml, shape);
     }
 
     /**
@@ -127,7 +136,7 @@ public final class QmlWriter {
 
     /** What a symbol is drawn with, in the words of QGIS. */
     private enum Shape {
-        FILL("fill", "SimpleFill", "2"), MARKER("marker", "SimpleMarker", "0");
+        FILL("fill", "SimpleFill", "2"), LINE("line", "SimpleLine", "1"), MARKER("marker", "SimpleMarker", "0");
 
         private final String symbol;
         private final String layer;
@@ -155,6 +164,14 @@ public final class QmlWriter {
             xml.open("symbol", "type", shape.symbol, "name", Integer.toString(i), "alpha", "1", "clip_to_extent", "1",
                     "force_rhr", "0");
             xml.open("layer", "class", shape.layer, "enabled", "1", "locked", "0", "pass", "0");
+            if (shape == Shape.LINE) {
+                property(xml, "line_color", rgba(colours.get(i)));
+                property(xml, "line_width", "0.6");
+                property(xml, "line_width_unit", "MM");
+                property(xml, "joinstyle", "round");
+                xml.close().close();
+                continue;
+            }
             property(xml, "color", rgba(colours.get(i)));
             if (shape == Shape.FILL) {
                 property(xml, "style", "solid");

@@ -50,13 +50,22 @@ public final class SldWriter {
      * @param column name of the text column
      */
     public static String polygons(LayerStyle.Classes classes, String column) {
+        return categorized(classes, column, SldWriter::fill);
+    }
+
+    /** Style of lines by the name of their class; as {@link #polygons}. */
+    public static String lines(LayerStyle.Classes classes, String column) {
+        return categorized(classes, column, SldWriter::stroke);
+    }
+
+    private static String categorized(LayerStyle.Classes classes, String column, BiConsumer<XmlText, Colour> symbol) {
         XmlText xml = begin(classes);
         for (LayerStyle.Entry entry : classes.entries()) {
             xml.open("Rule").element("Name", entry.name()).element("Title", entry.label());
             xml.open("ogc:Filter");
             comparison(xml, "ogc:PropertyIsEqualTo", column, entry.name());
             xml.close();
-            fill(xml, entry.colour());
+            symbol.accept(xml, entry.colour());
             xml.close();
         }
         return end(xml);
@@ -102,6 +111,11 @@ public final class SldWriter {
         xml.open("Stroke").element("CssParameter", OUTLINE, "name", "stroke")
                 .element("CssParameter", "0.3", "name", "stroke-width").close();
         xml.close();
+    }
+
+    private static void stroke(XmlText xml, Colour colour) {
+        xml.open("LineSymbolizer").open("Stroke").element("CssParameter", colour.hex(), "name", "stroke")
+                .element("CssParameter", "2", "name", "stroke-width").close().close();
     }
 
     private static void mark(XmlText xml, Colour colour) {
