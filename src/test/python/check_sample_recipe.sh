@@ -8,6 +8,7 @@ made=$(mktemp -d)
 trap 'rm -rf "$made"' EXIT
 /usr/bin/python3 "$here/make_sample_grids.py" "$made"
 (cd "$here/../../.." && /usr/bin/python3 "$here/make_sample_field.py" "$made")
+/usr/bin/python3 "$here/make_scenario_grids.py" "$made/scenario"
 /usr/bin/python3 - "$committed" "$made" <<'PY'
 import os
 import sys
@@ -62,12 +63,18 @@ def table(a, b):
 
 
 kinds = {".nc": netcdf, ".tif": tiff, ".gpkg": parcels, ".csv": table}
-for name in sorted(os.listdir(new)):
+
+
+def data(folder):
+    found = (os.path.relpath(os.path.join(at, n), folder) for at, _, names in os.walk(folder) for n in names)
+    return {n for n in found if os.path.splitext(n)[1] in kinds and not n.startswith(("out", os.path.join("scenario", "out")))}
+
+
+for name in sorted(data(new)):
     ending = os.path.splitext(name)[1]
     path = os.path.join(old, name)
     say(name, "not committed" if not os.path.exists(path) else kinds[ending](path, os.path.join(new, name)))
-made_here = {n for n in os.listdir(old) if os.path.splitext(n)[1] in kinds}
-say("no other data file", ", ".join(sorted(made_here - set(os.listdir(new)))))
+say("no other data file", ", ".join(sorted(data(old) - data(new))))
 print("%d passed, %d failed" % tuple(tally))
 sys.exit(1 if tally[1] else 0)
 PY

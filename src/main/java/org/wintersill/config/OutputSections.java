@@ -68,7 +68,7 @@ final class OutputSections {
 
     private static Path path(YamlSection section, Path base, String folder) {
         try {
-            return base.resolve(folder);
+            return base.resolve(folder).normalize();
         } catch (InvalidPathException e) {
             section.problem("folder", "'" + folder + "' cannot be a folder: " + e.getReason(), "");
             return base;

@@ -104,7 +104,8 @@ final class ComparisonTables {
                     line.add(place == null ? "" : place.get(0));
                     line.add(place == null ? "" : place.get(1));
                 } else {
-                    line.add(value instanceof Double number ? BigDecimal.valueOf(number).setScale(6, RoundingMode.HALF_EVEN).toPlainString()
+                    int places = key.endsWith("-km2") || key.endsWith("-km") ? 3 : key.startsWith("elevation") || key.endsWith("bearing") ? 1 : 6;
+                    line.add(value instanceof Double number ? BigDecimal.valueOf(number).setScale(places, RoundingMode.HALF_EVEN)
                             : value == null ? "" : value);
                 }
                 if (lines.isEmpty()) {

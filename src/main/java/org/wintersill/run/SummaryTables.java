@@ -34,8 +34,8 @@ final class SummaryTables {
     }
 
     /** A number with so many decimals and no exponent; empty where there is none. */
-    private static String decimals(double value, int places) {
-        return Double.isFinite(value) ? BigDecimal.valueOf(value).setScale(places, RoundingMode.HALF_EVEN).toPlainString() : "";
+    private static BigDecimal decimals(double value, int places) {
+        return Double.isFinite(value) ? BigDecimal.valueOf(value).setScale(places, RoundingMode.HALF_EVEN) : null;
     }
 
     static String json(RunPlan plan, List<ClassAreas> areas) {
