@@ -1,13 +1,7 @@
 package org.wintersill.run;
 
 import java.nio.file.Path;
-import java.util.Collection;
 import java.util.List;
-import org.locationtech.jts.geom.Coordinate;
-import org.locationtech.jts.geom.GeometryFactory;
-import org.locationtech.jts.geom.LineString;
-import org.locationtech.jts.geom.MultiLineString;
-import org.locationtech.jts.operation.linemerge.LineMerger;
 import org.wintersill.comparison.LimitLine;
 import org.wintersill.grid.Block;
 import org.wintersill.grid.GridGeometry;
@@ -16,6 +10,7 @@ import org.wintersill.io.geopackage.Column;
 import org.wintersill.io.geopackage.CrsRow;
 import org.wintersill.io.geopackage.FeatureTable;
 import org.wintersill.io.geopackage.GeoPackageWriter;
+import org.wintersill.io.geopackage.MergedLines;
 import org.wintersill.io.geopackage.TableDefinition;
 import org.wintersill.io.geotiff.read.PlainRaster;
 import org.wintersill.io.style.QmlWriter;
@@ -60,11 +55,9 @@ final class LimitLines {
     }
 
     private void add(FinishedFolder folder, String side, String name, String cultivar) {
-        GeometryFactory factory = new GeometryFactory();
-        LineMerger merger = new LineMerger();
+        MergedLines lines = new MergedLines();
         GridGeometry grid = folder.grid();
-        LimitLine line = new LimitLine(grid, run.target(), (x1, y1, x2, y2) ->
-                merger.add(factory.createLineString(new Coordinate[] {new Coordinate(x1, y1), new Coordinate(x2, y2)})));
+        LimitLine line = new LimitLine(grid, run.target(), lines::add);
         try (PlainRaster raster = folder.required(cultivar, "damage-probability-" + run.killing())) {
             for (int row = 0; row < grid.rows(); row += ROWS_AT_ONCE) {
                 Block block = new Block(0, row, grid.columns(), Math.min(ROWS_AT_ONCE, grid.rows() - row));
@@ -75,11 +68,8 @@ final class LimitLines {
                 }
             }
         }
-        @SuppressWarnings("unchecked")
-        Collection<LineString> merged = merger.getMergedLineStrings();
-        MultiLineString geometry = factory.createMultiLineString(merged.stream().sorted(LineString::compareTo).toArray(LineString[]::new));
         List<String> winters = folder.winters();
-        table.add(geometry.isEmpty() ? null : geometry, cultivar, side, name, winters.get(0) + " to " + winters.get(winters.size() - 1),
+        table.addLines(lines, cultivar, side, name, winters.get(0) + " to " + winters.get(winters.size() - 1),
                 run.target());
     }
 }

@@ -151,6 +151,9 @@ final class SummaryPass {
             WinterRecord record = record(cultivar, row, taskRows);
             float[] out = new float[taskRows * columns];
             for (OpenLayer layer : layers) {
+                if (!isNeeded(layer.statistic())) {
+                    continue;
+                }
                 layer.statistic().summarise(record, out, 0, out.length);
                 System.arraycopy(out, 0, layer.strip(), (row - firstRow) * columns, out.length);
                 cultivar.ifPresent(number -> keep(number, layer.statistic(), row, out));
@@ -161,6 +164,12 @@ final class SummaryPass {
             // Rows of replicates take minutes: told here, not when a strip is written.
             progress.advance((long) taskRows * layers.size());
         });
+    }
+
+    /** Fits of extremes cost more than all else, so what is neither written nor used later is not worked out. */
+    private boolean isNeeded(ClimatologyStatistic statistic) {
+        return selection.contains(statistic) || statistic instanceof Suitability || statistic instanceof MarginLow
+                || statistic instanceof DamageProbability probability && probability.isFrequencyOf(plan.choices().killingLevel());
     }
 
     /** Keeps what later steps need: classes in memory, frequency and low margin in the store. */

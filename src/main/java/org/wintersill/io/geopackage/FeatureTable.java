@@ -67,6 +67,11 @@ public final class FeatureTable {
         }
     }
 
+    /** Adds a row with lines; see {@link #add}. */
+    public void addLines(MergedLines lines, Object... values) {
+        add(lines.geometry(), values);
+    }
+
     /** Adds a row with a point; see {@link #add}. */
     public void addPoint(double x, double y, Object... values) {
         if (!definition.geometryType().equals("POINT")) {

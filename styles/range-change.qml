@@ -1,0 +1,21 @@
+<?xml version="1.0" encoding="UTF-8"?>
+<qgis version="3.22.0" styleCategories="Symbology">
+  <pipe>
+    <provider>
+      <resampling enabled="false" zoomedInResamplingMethod="nearestNeighbour" zoomedOutResamplingMethod="nearestNeighbour" maxOversampling="2"/>
+    </provider>
+    <rasterrenderer type="paletted" band="1" opacity="1" alphaBand="-1" nodataColor="">
+      <rasterTransparency/>
+      <colorPalette>
+        <paletteEntry value="1" color="#7fb6d6" alpha="255" label="kept"/>
+        <paletteEntry value="2" color="#1d4e89" alpha="255" label="gained"/>
+        <paletteEntry value="3" color="#7a2018" alpha="255" label="lost"/>
+        <paletteEntry value="4" color="#e6dfc8" alpha="255" label="never suitable"/>
+      </colorPalette>
+    </rasterrenderer>
+    <brightnesscontrast brightness="0" contrast="0" gamma="1"/>
+    <huesaturation saturation="0" grayscaleMode="0" colorizeOn="0"/>
+    <rasterresampler maxOversampling="2"/>
+  </pipe>
+  <blendMode>0</blendMode>
+</qgis>
