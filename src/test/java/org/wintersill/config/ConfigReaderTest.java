@@ -269,7 +269,7 @@ class ConfigReaderTest {
         "{minimum: {files: tmax.nc, scale: 0}}              | a scale of 0",
         "{minimum: {files: tmax.nc, first-day: 2019-12-32}} | a date such as 2019-12-01",
         "{minimum: {files: tmax.nc, first-day: 2019-12-01, dates: yyyyMMdd}} | both given",
-        "{minimum: tmax.nc, daily-range: 10}                | not known to this version",
+        "{minimum: tmax.nc, maximum: tmax.nc, daily-range: 10} | daily-range and maximum are both given",
         "{minimum: tmax.nc, maximum: tmax.nc, mean: tmax.nc} | maximum and mean are both given"})
     void mistakesAboutTemperaturesAreNamed(String temperature, String words) throws Exception {
         ProblemException refused = refused("temperature: " + temperature + "\ncultivars: c.yaml\n");
