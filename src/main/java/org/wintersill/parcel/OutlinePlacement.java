@@ -18,7 +18,7 @@ import org.wintersill.grid.GridGeometry;
  */
 public final class OutlinePlacement {
     /** Largest departure of an edge from its straight pieces, in cells. */
-    public static final double TOLERANCE = 1e-4;
+    public static final double TOLERANCE = 1e-5;
     /** Each round cuts an edge in four. */
     private static final int MOST_ROUNDS = 7;
     private static final double[] QUARTERS = {0.25, 0.5, 0.75};
@@ -86,14 +86,18 @@ public final class OutlinePlacement {
         return new Placed(rings, area);
     }
 
-    /** Signed area by the trapezoid rule, positive for shells. */
+    /**
+     * Signed area, positive for shells: the sum of -S dx over the edges, with Simpson's rule for the mean of the area S between the
+     * equator and the edge.
+     */
     private double area(double[] xy) {
         double area = 0;
-        double before = areaNorthward.applyAsDouble(xy[1]);
-        double origin = xy[0];
+        double origin = areaNorthward.applyAsDouble(xy[1]);
+        double before = 0;
         for (int i = 2; i < xy.length; i += 2) {
-            double here = areaNorthward.applyAsDouble(xy[i + 1]);
-            area += ((xy[i - 2] - origin) + (xy[i] - origin)) / 2 * (here - before);
+            double middle = areaNorthward.applyAsDouble((xy[i - 1] + xy[i + 1]) / 2) - origin;
+            double here = areaNorthward.applyAsDouble(xy[i + 1]) - origin;
+            area -= (xy[i] - xy[i - 2]) * (before + 4 * middle + here) / 6;
             before = here;
         }
         return area;
