@@ -35,4 +35,7 @@ public interface Commands {
 
     /** Cultivar files by themselves. */
     int curves(CurvesOptions options, Console console);
+
+    /** Parcels or zones by the layers of a finished run. */
+    int parcels(ParcelsOptions options, Console console);
 }

@@ -47,6 +47,7 @@ import org.wintersill.run.curve.FieldFitChart;
 import org.wintersill.run.curve.FieldFitText;
 import org.wintersill.run.curve.SeriesCourse;
 import org.wintersill.run.curve.SeriesText;
+import org.wintersill.run.parcels.ParcelsJob;
 
 /** The commands on the rooms behind them. */
 final class RunCommands implements Commands {
@@ -75,7 +76,7 @@ final class RunCommands implements Commands {
         console.detail(PlanText.text(plan));
         RunReport report;
         try {
-            report = new MapRun(plan, options.overwrite(), crs, console.progress(), console.notices())
+            report = new MapRun(plan, options.overwrite(), formats(), crs, console.progress(), console.notices())
                     .withWintersFrom(options.wintersFrom()).execute(console.cancellation());
         } catch (CancelledException e) {
             console.message("stopped; nothing was left in " + config.outputs().folder());
@@ -268,6 +269,35 @@ final class RunCommands implements Commands {
         });
         draw(options, console, () -> FieldFitChart.of(fit));
         answer(options.format(), console, () -> FieldFitText.json(fit), () -> FieldFitText.csv(fit), () -> FieldFitText.report(fit));
+        return ExitCode.DONE;
+    }
+
+    @Override
+    public int parcels(ParcelsOptions options, Console console) {
+        ParcelsJob.Report report;
+        try {
+            report = ParcelsJob.execute(new ParcelsJob.Request(options.run(), options.out(), options.overwrite(), options.parcels(),
+                    options.threads().orElse(Runtime.getRuntime().availableProcessors())), formats(), crs, console.progress(), console.notices(),
+                    console.cancellation());
+        } catch (CancelledException e) {
+            console.message("stopped; nothing was left in " + options.out());
+            return ExitCode.INTERRUPTED;
+        }
+        if (options.json()) {
+            Map<String, Object> document = new LinkedHashMap<>();
+            document.put("version", 1);
+            document.put("folder", options.out().toString());
+            document.put("files", report.files());
+            document.put("parcels", report.parcels());
+            document.put("outside", report.outside());
+            document.put("geopackage", options.out().resolve(ParcelsJob.PACKAGE).toString());
+            document.put("caution", Caution.SHORT);
+            console.result(JsonText.of(document));
+        } else {
+            console.message(report.files() + " files in " + options.out() + "; " + report.parcels() + " parcels"
+                    + (report.outside() > 0 ? ", " + report.outside() + " outside of the grid" : ""));
+            console.message(Caution.SHORT);
+        }
         return ExitCode.DONE;
     }
 }

@@ -54,7 +54,8 @@ final class Shell {
         line.addSubcommand(new MapCommand(session)).addSubcommand(new PlanCommand(session))
                 .addSubcommand(new InspectCommand(session)).addSubcommand(new ExplainCommand(session))
                 .addSubcommand(new CurvesCommand(session))
-                .addSubcommand(new CompareCommand(session)).addSubcommand(new ManualCommand(session));
+                .addSubcommand(new CompareCommand(session)).addSubcommand(new ParcelsCommand(session))
+                .addSubcommand(new ManualCommand(session));
         line.setExpandAtFiles(false).setAbbreviatedOptionsAllowed(false).setAbbreviatedSubcommandsAllowed(false)
                 .setInterpolateVariables(false).setColorScheme(CommandLine.Help.defaultColorScheme(Ansi.OFF))
                 .setOut(new PrintWriter(session.out(), true, StandardCharsets.UTF_8))

@@ -28,6 +28,6 @@ final class WintersillCommand implements Runnable, Manners.Kept {
 
     @Override
     public void run() {
-        throw Problem.usage("no command is given", "", "Choose map, plan, inspect, explain or curves; --help tells more").asException();
+        throw Problem.usage("no command is given", "", "Choose map, plan, inspect, explain, parcels or curves; --help tells more").asException();
     }
 }

@@ -93,11 +93,14 @@ public final class ConfigReader {
         LimitConfig limits = OutputSections.limits(section(top, "limits"), tree("limits"));
         Optional<ScenarioConfig> scenario = top.section("scenario")
                 .flatMap(section -> new ScenarioSection(base, finder, checks).read(section, tree("scenario")));
-        top.later("parcels");
+        Optional<ParcelsConfig> parcels = top.value("parcels").flatMap(value -> ParcelsSection.read(value, finder, checks, tree("parcels")));
+        if (parcels.isPresent() && !outputs.winters()) {
+            top.problem("parcels", "parcels are described by the winter layers, and outputs.winters is false", "Set outputs.winters: true");
+        }
         top.finish();
         throwInOrder();
         return new RunConfig(runFile, base, title, temperature.orElseThrow(), elevation, winter, missingDays, cultivars, damage,
-                statistics, classes, area, scenario, outputs, limits, effective);
+                statistics, classes, area, scenario, parcels, outputs, limits, effective);
     }
 
     /** All problems, those of the run file by line. */

@@ -24,6 +24,7 @@ import org.wintersill.io.yaml.YamlText;
  * @param classes limits of killing-winter frequency, three, ascending
  * @param area part of the target grid
  * @param scenario a climate model's future in place of the minima
+ * @param parcels polygons to describe at the end
  * @param outputs what is written
  * @param limits how much of the machine may be used
  * @param effective the whole configuration as a tree of maps, lists, texts, numbers and truth values in the order and the words
@@ -32,8 +33,8 @@ import org.wintersill.io.yaml.YamlText;
 public record RunConfig(Path runFile, Path baseFolder, String title, TemperatureConfig temperature,
                         Optional<ElevationConfig> elevation, WinterConfig winter, String missingDays,
                         CultivarConfig cultivars, DamageConfig damage, StatisticsConfig statistics, List<Double> classes,
-                        Optional<AreaConfig> area, Optional<ScenarioConfig> scenario, OutputConfig outputs, LimitConfig limits,
-                        Map<String, Object> effective) {
+                        Optional<AreaConfig> area, Optional<ScenarioConfig> scenario, Optional<ParcelsConfig> parcels, OutputConfig outputs,
+                        LimitConfig limits, Map<String, Object> effective) {
     public RunConfig {
         classes = List.copyOf(classes);
         effective = Collections.unmodifiableMap(new LinkedHashMap<>(effective));

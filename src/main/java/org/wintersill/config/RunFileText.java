@@ -35,6 +35,7 @@ public final class RunFileText {
             Map.entry("classes", "Highest frequency of killing winters that is secure, workable, marginal."),
             Map.entry("area", "The part of the target grid to work on: bbox: [west, south, east, north] in its reference system, polygons: a file."),
             Map.entry("scenario", "A climate model's future in place of the minima: method, pool and the model's files."),
+            Map.entry("parcels", "Polygons to describe at the end: file, layer, columns id and name, and which get a page (sheets: auto, all, none or ids)."),
             Map.entry("outputs", "What is written, and where."),
             Map.entry("limits", "How much of the machine is used; results do not depend on it."));
 

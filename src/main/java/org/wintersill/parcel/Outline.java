@@ -7,7 +7,7 @@ import java.util.List;
  * not overlap.
  *
  * @param rings each {@code x0, y0, x1, y1, ...}, its last point equal to its first, at least four points; shells
- *              counter-clockwise, holes clockwise; the arrays are shared, not copied
+ *              counter-clockwise, each followed by its holes, clockwise; the arrays are shared, not copied
  */
 public record Outline(List<double[]> rings) {
     /** No area at all. */

@@ -11,13 +11,13 @@ import java.util.HexFormat;
 import org.wintersill.problem.Problem;
 
 /** SHA-256 fingerprints for the record. */
-final class Digests {
+public final class Digests {
     private static final int BUFFER = 1 << 18;
 
     private Digests() {
     }
 
-    static String ofFile(Path file) {
+    public static String ofFile(Path file) {
         MessageDigest digest = sha256();
         byte[] buffer = new byte[BUFFER];
         try (InputStream in = Files.newInputStream(file)) {
@@ -30,7 +30,7 @@ final class Digests {
         return HexFormat.of().formatHex(digest.digest());
     }
 
-    static String ofText(String text) {
+    public static String ofText(String text) {
         return HexFormat.of().formatHex(sha256().digest(text.getBytes(StandardCharsets.UTF_8)));
     }
 

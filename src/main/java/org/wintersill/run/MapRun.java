@@ -2,26 +2,30 @@ package org.wintersill.run;
 
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.function.BooleanSupplier;
+import java.util.function.Function;
 import java.util.function.IntPredicate;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
+import org.wintersill.config.ParcelsConfig;
 import org.wintersill.engine.LocalEngine;
 import org.wintersill.engine.Progress;
 import org.wintersill.engine.WinterStore;
 import org.wintersill.engine.Workers;
-import org.wintersill.grid.CoordinateOperations;
 import org.wintersill.io.crs.CellAreas;
+import org.wintersill.io.crs.GeoToolsCrs;
 import org.wintersill.io.crs.GeoKeys;
 import org.wintersill.io.geotiff.write.CogFormat;
 import org.wintersill.io.geotiff.write.GeoKeyTags;
 import org.wintersill.io.json.JsonText;
 import org.wintersill.layer.RasterFormat;
 import org.wintersill.problem.Notices;
+import org.wintersill.run.parcels.ParcelsOutput;
 import org.wintersill.scenario.ScenarioSource;
 import org.wintersill.season.WinterValues;
 
@@ -31,16 +35,18 @@ public final class MapRun {
     private final boolean overwrite;
     private final Progress progress;
     private final Notices notices;
-    private final CoordinateOperations operations;
+    private final InputFormats formats;
+    private final GeoToolsCrs systems;
     private Optional<Path> wintersFrom = Optional.empty();
 
     /** @param overwrite whether finished outputs in the folder may be replaced */
-    public MapRun(RunPlan plan, boolean overwrite, CoordinateOperations operations, Progress progress, Notices notices) {
+    public MapRun(RunPlan plan, boolean overwrite, InputFormats formats, GeoToolsCrs systems, Progress progress, Notices notices) {
         this.plan = plan;
         this.overwrite = overwrite;
         this.progress = progress;
         this.notices = notices;
-        this.operations = operations;
+        this.formats = formats;
+        this.systems = systems;
     }
 
     /** Takes the winters that a finished run kept in its folder, where one is given, instead of folding nights. */
@@ -83,9 +89,9 @@ public final class MapRun {
             SummaryPass summaries = new SummaryPass(plan, store, output, new LayerSelection(plan.config().outputs().layers()),
                     workers, progress);
             writeLayers(summaries, cultivars);
-            List<ClassAreas> areas = tables(folder, output, summaries, record);
+            List<ClassAreas> areas = tables(folder, output, summaries, record, workers);
             if (plan.config().outputs().netcdf()) {
-                new NetcdfOutput(plan, store, folder, operations, output.period()).write();
+                new NetcdfOutput(plan, store, folder, systems, output.period()).write();
             }
             if (plan.config().outputs().keepWinters()) {
                 store.keep(folder.unfinished(KeptWinters.FILE));
@@ -140,7 +146,8 @@ public final class MapRun {
         progress.end();
     }
 
-    private List<ClassAreas> tables(OutputFolder folder, LayerOutput output, SummaryPass summaries, Map<String, Object> record) {
+    private List<ClassAreas> tables(OutputFolder folder, LayerOutput output, SummaryPass summaries, Map<String, Object> record,
+                                    Workers workers) {
         double[] rowAreas = CellAreas.rowAreasKm2(plan.target());
         List<ClassAreas> areas = new ArrayList<>();
         for (byte[] classes : summaries.classes()) {
@@ -148,10 +155,23 @@ public final class MapRun {
         }
         LayerOutput.write(folder.unfinished("summary.csv"), SummaryTables.csv(plan, areas));
         LayerOutput.write(folder.unfinished("summary.json"), SummaryTables.json(plan, areas));
+        Optional<ParcelsOutput> parcels = plan.config().parcels().map(config -> parcels(config, folder, record, workers));
+        Function<String, Path> place = name -> folder.unfinished("parcels/" + name);
         if (plan.config().outputs().geopackage()) {
-            new PackageOutput(plan, summaries, rowAreas, output.period())
-                    .write(folder.unfinished("layers.gpkg"), areas, JsonText.of(record));
+            new PackageOutput(plan, summaries, rowAreas, output.period()).write(folder.unfinished("layers.gpkg"), areas, JsonText.of(record),
+                    writer -> parcels.ifPresent(step -> step.write(place, Optional.of(writer))));
+        } else {
+            parcels.ifPresent(step -> step.write(place, Optional.empty()));
         }
         return areas;
+    }
+
+    /** Parcels read the layers back as they would from a finished folder, so the record stands there for the while, without fingerprints. */
+    private ParcelsOutput parcels(ParcelsConfig config, OutputFolder folder, Map<String, Object> record, Workers workers) {
+        Map<String, Object> sofar = new LinkedHashMap<>(record);
+        sofar.put("outputs", folder.names().stream().map(name -> Map.of("path", name)).toList());
+        Path file = folder.unfinished(OutputFolder.RECORD);
+        LayerOutput.write(file, JsonText.of(sofar));
+        return new ParcelsOutput(FinishedFolder.open(file.getParent(), systems), config, formats, systems, workers, progress, notices);
     }
 }

@@ -2,6 +2,7 @@ package org.wintersill.run;
 
 import java.nio.file.Path;
 import java.util.List;
+import java.util.function.Consumer;
 import org.wintersill.grid.GridGeometry;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.io.crs.CrsDefinitions;
@@ -38,8 +39,9 @@ final class PackageOutput {
      *
      * @param areas by class, one a cultivar
      * @param record provenance, JSON
+     * @param more adds further tables
      */
-    void write(Path file, List<ClassAreas> areas, String record) {
+    void write(Path file, List<ClassAreas> areas, String record, Consumer<GeoPackageWriter> more) {
         GridGeometry grid = plan.target();
         try (GeoPackageWriter writer = GeoPackageWriter.create(file, PeriodEnd.of(plan.seasons()) + "T00:00:00.000Z")) {
             int srs = writer.addCrs(CrsRow.of(grid.crs(), CrsDefinitions.wkt2(grid.crs()), CrsRow.FIRST_OWN_ID));
@@ -56,6 +58,7 @@ final class PackageOutput {
                     addCells(writer, srs, c);
                 }
             }
+            more.accept(writer);
             writer.metadata(VOCABULARY, record);
             writer.finish();
         }

@@ -15,6 +15,7 @@ import org.wintersill.climatology.statistic.ExtremeChoices;
 import org.wintersill.climatology.statistic.HardinessRule;
 import org.wintersill.climatology.statistic.PhaseShare;
 import org.wintersill.climatology.statistic.Suitability;
+import org.wintersill.config.ParcelsConfig;
 import org.wintersill.config.RunConfig;
 import org.wintersill.config.StatisticsConfig;
 import org.wintersill.config.WinterConfig;
@@ -65,6 +66,7 @@ public final class RunPlanner {
         problems.attempt(() -> cultivars.addAll(new CultivarSelection(config.cultivars()).read(notices)));
         problems.attempt(() -> opened.add(formats.open(config.temperature().minimum(), notices)));
         problems.attempt(() -> DailyMeans.require(cultivars, config));
+        config.parcels().ifPresent(parcels -> problems.attempt(() -> checkParcels(parcels, config.outputs().layers())));
         problems.attempt(() -> LayerSelection.check(config.outputs().layers(),
                 choices(config, new int[ExtremeFit.FEWEST_WINTERS], reckoning(config, true, false))));
         problems.throwIfAny();
@@ -109,6 +111,18 @@ public final class RunPlanner {
         }
         return new RunPlan(config, source, target, targetPlan.adjustment(), window, winters.dropped(), cultivars, choices, job,
                 foldPlan, Estimates.of(job, foldPlan, writers, config.outputs()));
+    }
+
+    /** What would refuse the parcels after the fold is found before it. */
+    private void checkParcels(ParcelsConfig parcels, List<String> layers) {
+        formats.polygons(parcels.polygons()).close();
+        LayerSelection selection = new LayerSelection(layers);
+        for (String needed : List.of(WinterLayers.MARGIN.id(), WinterLayers.DAMAGE.id())) {
+            if (!selection.contains(needed)) {
+                throw Problem.usage("parcels are described by the layer " + needed + ", which outputs.layers leaves out", "parcels",
+                        "Add " + needed + " to outputs.layers").asException();
+            }
+        }
     }
 
     private static void checkWinters(WinterSelection winters, DailyTemperatureSource source, String sourceName) {

@@ -18,7 +18,7 @@ import org.wintersill.temperature.SourceFile;
  * {@code record.json}: what made the outputs. No clock, user, host or absolute path, so that the same input gives the same
  * bytes; the number of threads and the memory limit stay out for the same reason, since no result depends on them.
  */
-final class RunRecord {
+public final class RunRecord {
     private RunRecord() {
     }
 
@@ -36,7 +36,9 @@ final class RunRecord {
         record.put("temperature-grid", plan.source().grid().describe());
         record.put("winter-window", plan.window().from() + " to " + plan.window().to() + ", complete part "
                 + plan.window().completeFrom() + " to " + plan.window().completeTo());
+        record.put("calendar", plan.seasons().get(0).calendar().cfName());
         record.put("winters", plan.seasons().stream().map(season -> season.label()).toList());
+        record.put("winter-starts", plan.seasons().stream().map(season -> season.first().toString()).toList());
         Map<String, Object> dropped = new LinkedHashMap<>();
         plan.dropped().forEach(winter -> dropped.put(winter.label(), winter.reason()));
         record.put("winters-not-used", dropped);
@@ -71,6 +73,7 @@ final class RunRecord {
         });
         plan.config().cultivars().files().forEach(file -> inputs.add(entry(base, file, "cultivars", digests)));
         areaPolygons(plan).ifPresent(file -> inputs.add(entry(base, file, "area polygons", digests)));
+        plan.config().parcels().ifPresent(parcels -> inputs.add(entry(base, parcels.polygons().file(), "parcels", digests)));
         return inputs;
     }
 
@@ -100,6 +103,7 @@ final class RunRecord {
         });
         files.addAll(plan.config().cultivars().files());
         areaPolygons(plan).ifPresent(files::add);
+        plan.config().parcels().ifPresent(parcels -> files.add(parcels.polygons().file()));
         return files;
     }
 
@@ -120,7 +124,7 @@ final class RunRecord {
     }
 
     /** Adds what is known at the end: outputs with their fingerprints, notices with their counts. */
-    static void complete(Map<String, Object> record, OutputFolder folder, Notices notices, Workers workers) {
+    public static void complete(Map<String, Object> record, OutputFolder folder, Notices notices, Workers workers) {
         List<String> names = folder.names();
         String[] digests = new String[names.size()];
         long[] sizes = new long[names.size()];

@@ -311,7 +311,8 @@ final class SummaryPass {
 
     /** Writes the ground heights, and what the elevation adjustment bridged. */
     void heights() {
-        heights(SharedLayers.elevation(), (row, column) -> plan.adjustment().targetHeight(row * columns + column));
+        heights(SharedLayers.elevation(), (row, column) -> plan.adjustment().covers(row, column)
+                ? plan.adjustment().targetHeight(row * columns + column) : Float.NaN);
         heights(SharedLayers.heightChange(), plan.adjustment()::heightChange);
     }
 

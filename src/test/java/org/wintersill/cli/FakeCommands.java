@@ -10,6 +10,7 @@ final class FakeCommands implements Commands {
     MapOptions mapOptions;
     ExplainOptions explainOptions;
     CurvesOptions curvesOptions;
+    ParcelsOptions parcelsOptions;
     InspectOptions inspectOptions;
     int answer;
     Consumer<Console> work = console -> { };
@@ -56,6 +57,12 @@ final class FakeCommands implements Commands {
     public int curves(CurvesOptions options, Console console) {
         curvesOptions = options;
         return done("curves", null, console);
+    }
+
+    @Override
+    public int parcels(ParcelsOptions options, Console console) {
+        parcelsOptions = options;
+        return done("parcels", null, console);
     }
 
     private int done(String name, RunConfig given, Console console) {

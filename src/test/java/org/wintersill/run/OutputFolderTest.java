@@ -40,7 +40,7 @@ class OutputFolderTest {
         GeoToolsCrs crs = new GeoToolsCrs();
         Notices notices = new Notices();
         RunPlan plan = new RunPlanner(new InputFormats(crs), crs).plan(ConfigReader.read(run.path("run.yaml"), Map.of()), notices);
-        return new MapRun(plan, overwrite, crs, Progress.silent(), notices);
+        return new MapRun(plan, overwrite, new InputFormats(crs), crs, Progress.silent(), notices);
     }
 
     @ParameterizedTest

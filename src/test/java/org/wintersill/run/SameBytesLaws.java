@@ -91,7 +91,7 @@ class SameBytesLaws {
         for (FoldPlan cut : List.of(cuts.get(0), cuts.get(cuts.size() / 2), cuts.get(cuts.size() - 1))) {
             RunPlan other = new RunPlan(config, whole.source(), whole.target(), whole.adjustment(), whole.window(), whole.dropped(),
                     whole.cultivars(), whole.choices(), whole.job(), cut, whole.estimate());
-            new MapRun(other, true, crs, Progress.silent(), planNotices(config)).execute(() -> false);
+            new MapRun(other, true, new InputFormats(crs), crs, Progress.silent(), planNotices(config)).execute(() -> false);
             assertSameBytes("bands");
         }
     }

@@ -35,6 +35,7 @@ public final class CultivarFile {
             "com6", "com7", "com8", "com9", "lpt1", "lpt2", "lpt3", "lpt4", "lpt5", "lpt6", "lpt7", "lpt8", "lpt9");
     /** The folder of the outputs that belong to no cultivar. */
     private static final String SHARED = "shared";
+    private static final String PARCELS = "parcels";
 
     private final String file;
     private final Notices notices;
@@ -172,9 +173,9 @@ public final class CultivarFile {
                     + "in between, at most " + Cultivar.LONGEST_ID, remedy);
             return false;
         }
-        if (DEVICE_NAMES.contains(id) || id.equals(SHARED)) {
+        if (DEVICE_NAMES.contains(id) || id.equals(SHARED) || id.equals(PARCELS)) {
             entry.problem("id", "'" + id + "' cannot be an id, since the outputs of a cultivar go into a folder of that name and "
-                    + (id.equals(SHARED) ? "this one holds the layers of no cultivar" : "Windows keeps it for a device"),
+                    + (id.equals(SHARED) ? "this one holds the layers of no cultivar" : id.equals(PARCELS) ? "this one holds tables of parcels" : "Windows keeps it for a device"),
                     "Choose another id, such as " + id + "-1");
             return false;
         }

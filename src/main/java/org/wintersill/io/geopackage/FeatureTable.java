@@ -6,6 +6,7 @@ import java.sql.SQLException;
 import java.util.List;
 import org.locationtech.jts.geom.Envelope;
 import org.locationtech.jts.geom.Geometry;
+import org.wintersill.parcel.Outline;
 
 /** A table that is being filled, in the one transaction of its {@link GeoPackageWriter}. Used by one thread. */
 public final class FeatureTable {
@@ -70,6 +71,11 @@ public final class FeatureTable {
     /** Adds a row with lines; see {@link #add}. */
     public void addLines(MergedLines lines, Object... values) {
         add(lines.geometry(), values);
+    }
+
+    /** Adds a row with an outline as a multipolygon, none where it is empty; see {@link #add}. */
+    public void addOutline(Outline outline, Object... values) {
+        add(OutlineGeometry.of(outline), values);
     }
 
     /** Adds a row with a point; see {@link #add}. */

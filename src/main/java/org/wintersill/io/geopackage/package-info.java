@@ -2,7 +2,7 @@
  * <b>Purpose.</b> Writes GeoPackage files: tables with their titles, units and legal values, spatial indexes, styles and
  * provenance; and turns rasters of classes into polygons for them.
  *
- * <p><b>May depend on.</b> {@code grid}, {@code layer}, {@code problem}; the SQLite driver and JTS.
+ * <p><b>May depend on.</b> {@code grid}, {@code layer}, {@code parcel}, {@code problem}; the SQLite driver and JTS.
  *
  * <p><b>Conventions.</b> Version 1.3 of the standard (OGC 12-128r17). x is easting or longitude and comes first, whatever
  * the reference system says. NaN and null become NULL. Nothing in a file comes from the clock, so the same calls give the

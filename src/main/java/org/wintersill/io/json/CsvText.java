@@ -8,7 +8,7 @@ import org.apache.commons.csv.CSVPrinter;
 
 /** Builds a CSV text (RFC 4180 quoting, line feeds): UTF-8, comma, decimal point in every locale. */
 public final class CsvText {
-    private static final CSVFormat FORMAT = CSVFormat.RFC4180.builder().setRecordSeparator('\n').get();
+    static final CSVFormat FORMAT = CSVFormat.RFC4180.builder().setRecordSeparator('\n').get();
     private static final String FORMULA_STARTS = "=+-@\t\r";
 
     private final StringBuilder text = new StringBuilder();
@@ -37,7 +37,7 @@ public final class CsvText {
         return this;
     }
 
-    private static Object cell(Object value) {
+    static Object cell(Object value) {
         if (value == null || value instanceof Double d && !Double.isFinite(d) || value instanceof Float f && !Float.isFinite(f)) {
             return "";
         }

@@ -15,6 +15,7 @@ final class TiffDirectory {
     static final int COMPRESSION = 259;
     static final int PHOTOMETRIC = 262;
     static final int FILL_ORDER = 266;
+    static final int DESCRIPTION = 270;
     static final int STRIP_OFFSETS = 273;
     static final int SAMPLES = 277;
     static final int ROWS_PER_STRIP = 278;
