@@ -21,7 +21,9 @@ have() { command -v "$1" > /dev/null || { echo "skipped: $1 is not installed"; r
 python() { /usr/bin/python3 "$@"; }
 
 # GeoTIFF
-python "$here/check_rasters.py" "$out" 2>&1 | tee -a "$lines"
+if [ -n "$(find "$out" -name '*.tif' -print -quit)" ]; then
+  python "$here/check_rasters.py" "$out" 2>&1 | tee -a "$lines"
+fi
 
 # XML beside them
 if have xmllint; then

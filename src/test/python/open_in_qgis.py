@@ -21,7 +21,7 @@ from qgis.PyQt.QtCore import QSize
 from qgis.PyQt.QtGui import QColor, QImage
 
 PLAIN = {"singlebandgray", "multibandcolor", "singleSymbol", "nullSymbol"}
-UNDRAWN = {"layer_styles", "parcel_cultivars"}          # tables that come without geometry
+UNDRAWN = {"layer_styles", "parcel_winters"}          # tables that come without geometry
 WIDTH, HEIGHT = 480, 360
 
 
