@@ -5,9 +5,11 @@ import java.math.RoundingMode;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 import java.util.function.Function;
 import java.util.stream.Stream;
 import org.wintersill.io.json.CsvFile;
@@ -29,6 +31,7 @@ final class ParcelFiles implements AutoCloseable {
     private final List<TableField<WinterRow>> winterFields;
     private final String caution;
     private final List<AutoCloseable> open = new ArrayList<>();
+    private final Set<CsvFile> cautioned = new HashSet<>();
     private final CsvFile parcels;
     private final CsvFile cultivars;
     private final CsvFile winters;
@@ -104,9 +107,11 @@ final class ParcelFiles implements AutoCloseable {
         json.add(entry);
     }
 
+    /** Short tables say the caution in every row, so that no part of one is without; the long ones only in their first. */
     private void row(CsvFile file, Object[] values) {
         Object[] row = Arrays.copyOf(values, values.length + 1);
-        row[values.length] = caution;
+        boolean everyRow = file == parcels || file == cultivars;
+        row[values.length] = everyRow || cautioned.add(file) ? caution : null;
         file.row(row);
     }
 

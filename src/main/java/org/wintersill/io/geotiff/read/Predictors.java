@@ -85,11 +85,30 @@ final class Predictors {
     }
 
     private static void planes(byte[] raw, int start, int length, int stride, int bytes, ByteOrder order, byte[] spare) {
-        for (int i = start + stride; i < start + length; i++) {
-            raw[i] += raw[i - stride];
+        if (stride == 1) {
+            // The sum stays in a register: through the array each byte would wait for the one before to be stored.
+            byte sum = 0;
+            for (int i = 0; i < length; i++) {
+                sum += raw[start + i];
+                spare[i] = sum;
+            }
+        } else {
+            for (int i = start + stride; i < start + length; i++) {
+                raw[i] += raw[i - stride];
+            }
+            System.arraycopy(raw, start, spare, 0, length);
         }
-        System.arraycopy(raw, start, spare, 0, length);
         int count = length / bytes;
+        if (bytes == 4 && order == ByteOrder.LITTLE_ENDIAN) {
+            for (int i = 0; i < count; i++) {
+                int at = start + 4 * i;
+                raw[at] = spare[3 * count + i];
+                raw[at + 1] = spare[2 * count + i];
+                raw[at + 2] = spare[count + i];
+                raw[at + 3] = spare[i];
+            }
+            return;
+        }
         for (int i = 0; i < count; i++) {
             for (int plane = 0; plane < bytes; plane++) {
                 int place = order == ByteOrder.BIG_ENDIAN ? plane : bytes - 1 - plane;
