@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import org.wintersill.elevation.LapseRates;
+import org.wintersill.elevation.LocalLapse;
 import org.wintersill.io.yaml.YamlChecks;
 import org.wintersill.io.yaml.YamlSection;
 import org.wintersill.io.yaml.YamlValue;
@@ -13,6 +14,8 @@ import org.wintersill.io.yaml.YamlValue;
 /** Reads {@code elevation}. */
 final class ElevationSection {
     private static final String DEM_MEAN = "dem-mean";
+    private static final String DAILY_LOCAL = "daily-local";
+    private static final String STANDARD = "standard-atmosphere";
     private static final String ACCEPTED = "K per km from -8 to 9.8, positive where higher is colder";
 
     private final InputFinder finder;
@@ -31,12 +34,15 @@ final class ElevationSection {
         tree.put("dem", InputFinder.shortest(demTree, "file"));
         Optional<FileEntry> sourceHeight = section.value("source-height").flatMap(value -> sourceHeight(value, section, tree));
         tree.putIfAbsent("source-height", DEM_MEAN);
-        Optional<double[]> rates = section.value("lapse-rate").map(value -> lapseRates(value, section.path("lapse-rate")))
-                .orElse(Optional.of(everyMonth(LapseRates.DEFAULT)));
-        rates.ifPresent(values -> tree.put("lapse-rate", tree(values)));
-        section.later("cold-pool", "water");
+        Optional<Lapse> lapse = section.value("lapse-rate").map(value -> lapse(value, section.path("lapse-rate"), tree))
+                .orElseGet(() -> constant(Optional.of(everyMonth(LapseRates.DEFAULT)), tree));
+        NightTermsSection terms = new NightTermsSection(finder);
+        Optional<ColdPoolConfig> coldPool = section.section("cold-pool").flatMap(part -> terms.coldPool(part, tree(tree, "cold-pool")));
+        Optional<WaterConfig> water = section.section("water").flatMap(part -> terms.water(part, tree(tree, "water")));
+        double offset = terms.offsets(section.section("offsets"), tree(tree, "offsets"));
         section.finish();
-        return dem.flatMap(file -> rates.map(values -> new ElevationConfig(file, sourceHeight, values)));
+        return dem.flatMap(file -> lapse.map(rates -> new ElevationConfig(file, sourceHeight, rates.byMonth(), rates.local(), coldPool, water,
+                offset)));
     }
 
     private Optional<FileEntry> sourceHeight(YamlValue value, YamlSection section, Map<String, Object> tree) {
@@ -49,14 +55,48 @@ final class ElevationSection {
         return file;
     }
 
+    /** Rates by month, and how they are fitted to each night where they are. */
+    private record Lapse(double[] byMonth, Optional<LocalLapseConfig> local) {
+    }
+
+    private static Map<String, Object> tree(Map<String, Object> tree, String key) {
+        Map<String, Object> part = new LinkedHashMap<>();
+        tree.put(key, part);
+        return part;
+    }
+
+    private static Optional<Lapse> constant(Optional<double[]> rates, Map<String, Object> tree) {
+        rates.ifPresent(values -> tree.put("lapse-rate", tree(values)));
+        return rates.map(values -> new Lapse(values, Optional.empty()));
+    }
+
+    private Optional<Lapse> lapse(YamlValue value, String key, Map<String, Object> tree) {
+        if (value instanceof YamlValue.Text text && text.text().equals(STANDARD)) {
+            tree.put("lapse-rate", STANDARD);
+            return Optional.of(new Lapse(everyMonth(LapseRates.STANDARD_ATMOSPHERE), Optional.empty()));
+        }
+        return value instanceof YamlValue.Mapping mapping ? local(new YamlSection(mapping, key, checks), tree(tree, "lapse-rate"))
+                : constant(lapseRates(value, key), tree);
+    }
+
+    private Optional<Lapse> local(YamlSection section, Map<String, Object> tree) {
+        section.required("method", "Write method: " + DAILY_LOCAL + ", or one lapse rate instead of the map");
+        section.word("method", List.of(DAILY_LOCAL), List.of());
+        double radius = section.number("radius-km", 1, 2000, "km from 1 to 2000").orElse(LocalLapse.DEFAULT_RADIUS / 1000);
+        Optional<double[]> prior = section.value("prior").map(value -> lapseRates(value, section.path("prior")))
+                .orElse(Optional.of(everyMonth(LapseRates.DEFAULT)));
+        double sd = section.number("prior-sd", 0.01, 100, "K per km from 0.01 to 100").orElse(LocalLapse.DEFAULT_PRIOR_SD);
+        section.finish();
+        tree.put("method", DAILY_LOCAL);
+        tree.put("radius-km", radius);
+        prior.ifPresent(values -> tree.put("prior", tree(values)));
+        tree.put("prior-sd", sd);
+        return prior.map(values -> new Lapse(values, Optional.of(new LocalLapseConfig(1000 * radius, sd))));
+    }
+
     private Optional<double[]> lapseRates(YamlValue value, String key) {
         double lowest = LapseRates.LOWEST;
         double highest = LapseRates.HIGHEST;
-        if (value instanceof YamlValue.Mapping) {
-            checks.problem(value, key, "a method of lapse rates is not known to this version", "Give one number or twelve, in "
-                    + ACCEPTED);
-            return Optional.empty();
-        }
         if (value instanceof YamlValue.Sequence sequence) {
             if (sequence.items().size() != 12) {
                 checks.problem(value, key, "one lapse rate or twelve (January to December) are needed, found "

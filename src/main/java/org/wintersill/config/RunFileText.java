@@ -20,11 +20,11 @@ import org.wintersill.problem.Problem;
 public final class RunFileText {
     /** Keys whose texts are paths, in the tree of {@link RunConfig#effective()}. */
     private static final Set<String> PATH_KEYS = Set.of("minimum", "maximum", "mean", "files", "file", "dem", "source-height", "folder",
-            "polygons", "parcels", "historical", "future");
+            "polygons", "parcels", "historical", "future", "mask");
     private static final Map<String, String> COMMENTS = Map.ofEntries(
             Map.entry("title", "A few words that stand in every output."),
             Map.entry("temperature", "Daily minima in netCDF or GeoTIFF: a file, a list, a folder or a pattern."),
-            Map.entry("elevation", "Terrain model, and lapse rate in K per km, positive where higher is colder."),
+            Map.entry("elevation", "Terrain model; lapse rate in K per km, positive where higher is colder; pools of cold air, water, offsets in K."),
             Map.entry("winter", "First and last day, and the part that must be complete; auto: by hemisphere."),
             Map.entry("missing-days", "When a month with missing days still counts: month-10-5, month-5-3 or none."),
             Map.entry("cultivars", "Cultivar files, and the ids to use."),

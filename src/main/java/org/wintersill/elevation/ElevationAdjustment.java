@@ -1,6 +1,7 @@
 package org.wintersill.elevation;
 
 import java.util.BitSet;
+import java.util.Optional;
 import java.util.function.IntPredicate;
 import java.util.stream.IntStream;
 import org.wintersill.grid.CoordinateOperation;
@@ -22,6 +23,8 @@ public final class ElevationAdjustment {
     private final float[][] heightGain;
     private final int[][] missingColumns;
     private final int[][] unevenColumns;
+    private final Optional<LocalLapse> localLapse;
+    private final TargetTerms terms;
 
     private ElevationAdjustment(SourcePositions positions, float[] sourceHeights, float[] targetHeights, LapseRates lapseRates) {
         this.positions = positions;
@@ -38,6 +41,30 @@ public final class ElevationAdjustment {
             unevenColumns[row] = heightGain == null ? new int[0]
                     : columns(row, column -> containing(row, column) >= 0 && Float.isNaN(heightGain[row][column]));
         }
+        localLapse = Optional.empty();
+        terms = TargetTerms.none();
+    }
+
+    private ElevationAdjustment(ElevationAdjustment plain, Optional<LocalLapse> localLapse, TargetTerms terms) {
+        positions = plain.positions;
+        sourceHeights = plain.sourceHeights;
+        targetHeights = plain.targetHeights;
+        lapseRates = plain.lapseRates;
+        heightGain = plain.heightGain;
+        missingColumns = plain.missingColumns;
+        unevenColumns = plain.unevenColumns;
+        this.localLapse = localLapse;
+        this.terms = terms;
+    }
+
+    /**
+     * The same adjustment with lapse rates of each night and source cell, where they are given, and with what is added to the minimum of
+     * a cell beside the height.
+     *
+     * @param localLapse its rows are those of the positions' source; the rates by month are then its prior
+     */
+    public ElevationAdjustment with(Optional<LocalLapse> localLapse, TargetTerms terms) {
+        return new ElevationAdjustment(this, localLapse, terms);
     }
 
     /** The target is the source's own grid: temperatures are passed on. */
@@ -73,7 +100,7 @@ public final class ElevationAdjustment {
      * @param cells {@code row * columns + column}; not copied, must not change afterwards
      */
     public ElevationAdjustment only(BitSet cells) {
-        return new ElevationAdjustment(positions.only(cells), sourceHeights, targetHeights, lapseRates);
+        return new ElevationAdjustment(positions.only(cells), sourceHeights, targetHeights, lapseRates).with(localLapse, terms);
     }
 
     /**
@@ -130,6 +157,24 @@ public final class ElevationAdjustment {
         return lapseRates;
     }
 
+    /** Lapse rates fitted to each night; empty where they follow from the month alone. */
+    public Optional<LocalLapse> localLapse() {
+        return localLapse;
+    }
+
+    /** What is added to the minimum beside the height. */
+    public TargetTerms terms() {
+        return terms;
+    }
+
+    /**
+     * Whether a cell's temperature is a weighted mean of source temperatures plus a lapse rate of the month times a height gain, and
+     * nothing else.
+     */
+    public boolean isPlain() {
+        return localLapse.isEmpty() && terms.isNone();
+    }
+
     public boolean hasHeights() {
         return targetHeights != null;
     }
@@ -167,7 +212,8 @@ public final class ElevationAdjustment {
         return unevenColumns[row];
     }
 
-    float[] sourceHeights() {
+    /** Heights of the source cells, m, NaN for none; shared, null where no heights are used. */
+    public float[] sourceHeights() {
         return sourceHeights;
     }
 

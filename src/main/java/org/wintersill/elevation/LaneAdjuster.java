@@ -135,14 +135,14 @@ public final class LaneAdjuster {
     }
 
     /** The source row at the target row's northing. */
-    private static void mix(float[] above, float[] below, float south, float[] blended, int columns) {
+    static void mix(float[] above, float[] below, float south, float[] blended, int columns) {
         for (int i = 0; i < columns; i++) {
             blended[i] = above[i] + south * (below[i] - above[i]);
         }
     }
 
     /** Values of the western and eastern neighbour of every target column; of the first column beyond the source, mended later. */
-    private static void gather(float[] blended, int[] west, int east, float[] left, float[] right, int cells) {
+    static void gather(float[] blended, int[] west, int east, float[] left, float[] right, int cells) {
         for (int i = 0; i < cells; i++) {
             int at = west[i];
             left[i] = blended[at];
@@ -150,7 +150,7 @@ public final class LaneAdjuster {
         }
     }
 
-    private static void alongRow(float[] left, float[] right, float[] weight, float[] row, int cells) {
+    static void alongRow(float[] left, float[] right, float[] weight, float[] row, int cells) {
         for (int i = 0; i < cells; i++) {
             row[i] = left[i] + weight[i] * (right[i] - left[i]);
         }

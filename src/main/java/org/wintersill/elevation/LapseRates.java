@@ -14,6 +14,8 @@ public final class LapseRates implements Serializable {
 
     /** Default, K/km (science 7.2, project choice). */
     public static final double DEFAULT = 4.5;
+    /** Lapse rate of the standard atmosphere up to 11 km, K/km of geopotential height: ISO 2533:1975 (constants from memory). */
+    public static final double STANDARD_ATMOSPHERE = 6.5;
     /** Bounds of what is accepted, K/km: a strong inversion and the dry adiabat (science 7.2). */
     public static final double LOWEST = -8;
     public static final double HIGHEST = 9.8;

@@ -63,9 +63,9 @@ public final class TargetTiles {
         return cells >= FEWEST_CELLS_A_NODE * nodes ? Optional.of(tiles) : Optional.empty();
     }
 
-    /** Whether the target's cells are small enough against the source's for tiles to be tried. */
+    /** Whether the adjustment is of the kind that tiles bound, and the target large enough for them to be tried. */
     public static boolean mayGain(ElevationAdjustment adjustment) {
-        return !adjustment.isPassThrough() && adjustment.positions().target().rows() > SHORTEST_SIDE;
+        return adjustment.isPlain() && !adjustment.isPassThrough() && adjustment.positions().target().rows() > SHORTEST_SIDE;
     }
 
     /** Most target rows of a row of tiles, for a number of target columns. */

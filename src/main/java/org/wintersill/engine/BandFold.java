@@ -1,7 +1,8 @@
 package org.wintersill.engine;
 
 import java.util.BitSet;
-import org.wintersill.elevation.LaneAdjuster;
+import org.wintersill.elevation.AdjustedTemperature;
+import org.wintersill.elevation.NightAdjuster;
 import org.wintersill.elevation.TargetTiles;
 import org.wintersill.engine.FoldPlan.Band;
 import org.wintersill.engine.FoldPlan.Batch;
@@ -31,7 +32,8 @@ final class BandFold implements AutoCloseable {
     /** Null where the plain loop does the work. */
     private final TiledFold tiled;
     private final WinterLane[] lanes;
-    private final LaneAdjuster[] adjusters;
+    private final NightSlabs fields;
+    private final NightAdjuster[] adjusters;
     private final float[][][] nights;
     /** Of the nights of a stretch in the winter's window, {@code [worker][night]}. */
     private final int[][] positions;
@@ -41,8 +43,12 @@ final class BandFold implements AutoCloseable {
     /** Position in the window of the last night that the tally has seen. */
     private int lastNight;
 
-    /** @param countedRows source rows that other bands have looked at */
-    BandFold(FoldJob job, FoldPlan plan, Band band, Workers workers, WinterSink sink, Progress progress, BitSet countedRows) {
+    /**
+     * @param countedRows source rows that other bands have looked at
+     * @param means told of every night
+     */
+    BandFold(FoldJob job, FoldPlan plan, Band band, Workers workers, WinterSink sink, Progress progress, BitSet countedRows,
+             NightMeans means) {
         this.job = job;
         this.band = band;
         this.workers = workers;
@@ -56,7 +62,8 @@ final class BandFold implements AutoCloseable {
         tiled = plan.tiled() ? TargetTiles.of(job.adjustment(), band.row(), band.rowEnd())
                 .map(tiles -> new TiledFold(job, tiles, workers.threads(), wholeWinters)).orElse(null) : null;
         lanes = new WinterLane[wholeWinters ? workers.threads() : laneCount];
-        adjusters = new LaneAdjuster[workers.threads()];
+        fields = new NightSlabs(job, plan, band, workers, means);
+        adjusters = new NightAdjuster[workers.threads()];
         nights = new float[workers.threads()][][];
         positions = new int[workers.threads()][WinterLane.STRETCH];
         states = job.states().isNone() ? null : new StateFold(job, plan, band, workers, lanes.length, countedRows);
@@ -64,6 +71,7 @@ final class BandFold implements AutoCloseable {
 
     void accept(Batch batch) {
         reader.read(batch, slab);
+        fields.read(batch);
         if (states != null) {
             states.read(batch, slab);
         }
@@ -73,6 +81,7 @@ final class BandFold implements AutoCloseable {
                 lastNight = -1;
             }
             count(batch, piece);
+            fields.take(batch, piece, slab);
             if (tiled != null) {
                 foldTiles(batch, piece);
             } else {
@@ -156,16 +165,16 @@ final class BandFold implements AutoCloseable {
             int first = (int) (axis.day(position) - season.firstDay());
             int count = 0;
             while (position < end && count < WinterLane.STRETCH && axis.day(position) - season.firstDay() == first + count) {
-                double lapse = job.adjustment().lapseRates().ofMonth(season.date(first + count).month());
                 positions[worker][count] = first + count;
-                adjusters[worker].adjust(slab, offset(batch, position), lapse, firstRow, rows, nights[worker][count]);
+                adjusters[worker].adjust(slab, offset(batch, position), fields.of(worker, season.date(first + count)),
+                        AdjustedTemperature.MINIMUM, firstRow, rows, nights[worker][count]);
                 position++;
                 count++;
             }
             lane.accept(curves, nights[worker], count, positions[worker]);
         }
         if (states != null) {
-            states.fold(batch, piece, worker, slot(worker, laneNumber), firstRow, rows, slab);
+            states.fold(batch, piece, worker, slot(worker, laneNumber), firstRow, rows, slab, fields);
         }
         if (piece.closes()) {
             WinterValues values = lane.finish(cell -> counts(firstRow, cell));
@@ -183,7 +192,7 @@ final class BandFold implements AutoCloseable {
     private WinterLane lane(int worker, int laneNumber, int rows) {
         int columns = job.targetColumns();
         if (adjusters[worker] == null) {
-            adjusters[worker] = new LaneAdjuster(job.adjustment());
+            adjusters[worker] = new NightAdjuster(job.adjustment());
             nights[worker] = new float[WinterLane.STRETCH][laneRows * columns];
         }
         int slot = slot(worker, laneNumber);
@@ -202,7 +211,7 @@ final class BandFold implements AutoCloseable {
     }
 
     long valuesSetAside() {
-        return reader.valuesSetAside() + (states == null ? 0 : states.valuesSetAside());
+        return reader.valuesSetAside() + fields.valuesSetAside() + (states == null ? 0 : states.valuesSetAside());
     }
 
     /** Values of source cells with a maximum below the minimum of its day. */
@@ -213,6 +222,7 @@ final class BandFold implements AutoCloseable {
     @Override
     public void close() {
         reader.close();
+        fields.close();
         if (states != null) {
             states.close();
         }

@@ -1,7 +1,9 @@
 package org.wintersill.engine;
 
 import java.util.List;
+import java.util.Optional;
 import org.wintersill.elevation.ElevationAdjustment;
+import org.wintersill.elevation.StableNights;
 import org.wintersill.grid.Block;
 import org.wintersill.season.DamageReckoning;
 import org.wintersill.season.MissingDayPolicy;
@@ -22,20 +24,33 @@ import org.wintersill.time.Season;
  * @param levels number of levels of damage that margins are kept for; the first is LT50
  * @param reckoning how damage is reckoned and what of it is kept
  * @param states cultivars with state models, and what they need beside the minima
+ * @param poolMaxima daily maxima that tell nights with pools of cold air, on the grid and the days of the minima; empty where they are not
+ *                   needed
  */
 public record FoldJob(DailyTemperatureSource source, Block window, ElevationAdjustment adjustment, List<Season> seasons,
                       MissingDayPolicy policy, List<NightCurve[]> curves, int levels, DamageReckoning reckoning,
-                      StateForcing states) {
+                      StateForcing states, Optional<DailyTemperatureSource> poolMaxima) {
 
     public FoldJob {
         seasons = List.copyOf(seasons);
         curves = List.copyOf(curves);
     }
 
+    /** A job without maxima for pools. */
+    public FoldJob(DailyTemperatureSource source, Block window, ElevationAdjustment adjustment, List<Season> seasons,
+                   MissingDayPolicy policy, List<NightCurve[]> curves, int levels, DamageReckoning reckoning, StateForcing states) {
+        this(source, window, adjustment, seasons, policy, curves, levels, reckoning, states, Optional.empty());
+    }
+
     /** A job whose curves all depend on the date alone. */
     public FoldJob(DailyTemperatureSource source, Block window, ElevationAdjustment adjustment, List<Season> seasons,
                    MissingDayPolicy policy, List<NightCurve[]> curves, int levels, DamageReckoning reckoning) {
         this(source, window, adjustment, seasons, policy, curves, levels, reckoning, StateForcing.none());
+    }
+
+    /** Whether pools of cold air count differently from night to night. */
+    public boolean weighsNights() {
+        return adjustment.terms().hasPools() && !(adjustment.terms().nights() instanceof StableNights.All);
     }
 
     public int cultivars() {

@@ -3,6 +3,8 @@ package org.wintersill.engine;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.stream.IntStream;
+import org.wintersill.elevation.LapseField;
+import org.wintersill.elevation.LocalLapse;
 import org.wintersill.elevation.SourcePositions;
 import org.wintersill.elevation.TargetTiles;
 import org.wintersill.engine.FoldPlan.Band;
@@ -104,6 +106,10 @@ public final class FoldPlanner {
         if (job.states().hasSecond()) {
             memory.add("days of maxima or means in memory", batchDays * sourceCells * FLOAT);
         }
+        if (NightSlabs.slabs(job) > 0) {
+            memory.add("lapse rates and stability of the nights", NightSlabs.slabs(job) * batchDays * sourceCells * FLOAT + NightMeans.bytes(job)
+                    + threads * sourceCells * LapseField.BYTES_PER_CELL);
+        }
         if (!job.states().isNone()) {
             memory.add("states of the cultivars", kept * StateLane.bytesPerCell(job.states().cultivars(), job.reckoning()));
         }
@@ -117,6 +123,7 @@ public final class FoldPlanner {
         long cells = (long) job.targetRows() * job.targetColumns();
         long heights = job.adjustment().hasHeights() ? 2 * FLOAT * cells : 0;
         heights += job.adjustment().isPassThrough() ? 0 : FLOAT * cells;
+        heights += job.adjustment().terms().bytes();
         return heights + (job.adjustment().positions().isSeparable() ? 0 : 6 * FLOAT * cells);
     }
 
@@ -131,11 +138,18 @@ public final class FoldPlanner {
         int row = 0;
         while (row < rows) {
             int end = Math.min(rows, row + bandRows - (row == 0 && shift > 0 && count > 1 ? bandRows - shift : 0));
-            int[] source = positions.sourceRows(row, end);
+            int[] source = withHalo(positions.sourceRows(row, end));
             bands.add(new Band(row, end, source[0], source[1]));
             row = end;
         }
         return bands;
+    }
+
+    /** Source rows with those around them that their lapse rates are fitted to. */
+    private int[] withHalo(int[] rows) {
+        int halo = job.adjustment().localLapse().map(LocalLapse::haloRows).orElse(0);
+        boolean none = rows[0] == rows[1];
+        return none ? rows : new int[] {Math.max(0, rows[0] - halo), Math.min(job.window().rows(), rows[1] + halo)};
     }
 
     private int longestSeason() {

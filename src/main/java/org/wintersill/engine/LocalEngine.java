@@ -14,10 +14,17 @@ import org.wintersill.problem.Notices;
 public final class LocalEngine {
     private final FoldJob job;
     private final FoldPlan plan;
+    private final NightMeans means;
 
     public LocalEngine(FoldJob job, FoldPlan plan) {
         this.job = job;
         this.plan = plan;
+        means = new NightMeans(job);
+    }
+
+    /** Means over the nights; complete after {@link #run}. */
+    public NightMeans nightMeans() {
+        return means;
     }
 
     /**
@@ -33,7 +40,7 @@ public final class LocalEngine {
         progress.begin("Winters", nights * job.targetRows());
         BitSet countedRows = new BitSet();
         for (Band band : plan.bands()) {
-            try (BandFold fold = new BandFold(job, plan, band, workers, sink, progress, countedRows)) {
+            try (BandFold fold = new BandFold(job, plan, band, workers, sink, progress, countedRows, means)) {
                 for (Batch batch : plan.batches()) {
                     fold.accept(batch);
                 }

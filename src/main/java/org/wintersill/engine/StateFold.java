@@ -3,7 +3,9 @@ package org.wintersill.engine;
 import java.util.BitSet;
 import java.util.concurrent.atomic.LongAdder;
 import java.util.function.IntPredicate;
-import org.wintersill.elevation.LaneAdjuster;
+import org.wintersill.elevation.AdjustedTemperature;
+import org.wintersill.elevation.NightAdjuster;
+import org.wintersill.elevation.NightFields;
 import org.wintersill.engine.FoldPlan.Band;
 import org.wintersill.engine.FoldPlan.Batch;
 import org.wintersill.engine.FoldPlan.Piece;
@@ -25,7 +27,7 @@ final class StateFold implements AutoCloseable {
     private final float[] slab;
     private final BitSet countedRows;
     private final StateLane[] lanes;
-    private final LaneAdjuster[] adjusters;
+    private final NightAdjuster[] adjusters;
     private final LongAdder swapped = new LongAdder();
 
     /**
@@ -40,7 +42,7 @@ final class StateFold implements AutoCloseable {
         reader = forcing.hasSecond() ? new SlabReader(forcing.second(), job.window(), band, workers) : null;
         slab = reader == null ? null : new float[Math.multiplyExact(plan.batchDays(), reader.dayCells())];
         this.lanes = new StateLane[lanes];
-        adjusters = new LaneAdjuster[workers.threads()];
+        adjusters = new NightAdjuster[workers.threads()];
         this.countedRows = new BitSet();
         this.countedRows.set(band.sourceRow(), band.sourceEnd());
         this.countedRows.andNot(countedRows);
@@ -78,7 +80,8 @@ final class StateFold implements AutoCloseable {
     }
 
     /** Takes the days of a piece into a lane. */
-    void fold(Batch batch, Piece piece, int worker, int slot, int firstRow, int rows, float[] minima) {
+    void fold(Batch batch, Piece piece, int worker, int slot, int firstRow, int rows, float[] minima,
+              NightSlabs fields) {
         StateLane lane = lane(slot, rows * job.targetColumns());
         Season season = job.seasons().get(piece.season());
         if (piece.opens()) {
@@ -86,20 +89,20 @@ final class StateFold implements AutoCloseable {
                     forcing.latitudes(job.adjustment().positions().target(), firstRow, 0, rows, job.targetColumns()));
         }
         if (adjusters[worker] == null) {
-            adjusters[worker] = new LaneAdjuster(job.adjustment());
+            adjusters[worker] = new NightAdjuster(job.adjustment());
         }
-        LaneAdjuster adjuster = adjusters[worker];
+        NightAdjuster adjuster = adjusters[worker];
         DayAxis axis = job.source().days();
         for (int position = piece.first(); position < piece.first() + piece.count(); position++) {
             int day = (int) (axis.day(position) - season.firstDay());
             while (lane.nextDay() < day) {
                 lane.absent();
             }
-            double lapse = job.adjustment().lapseRates().ofMonth(season.date(day).month());
+            NightFields night = fields.of(worker, season.date(day));
             int offset = (position - batch.first()) * dayCells() - band.sourceRow() * job.window().columns();
-            adjuster.adjust(minima, offset, lapse, firstRow, rows, lane.minima());
+            adjuster.adjust(minima, offset, night, AdjustedTemperature.AIR_MINIMUM, firstRow, rows, lane.minima());
             if (reader != null) {
-                adjuster.adjust(slab, offset, lapse, firstRow, rows, lane.means());
+                adjuster.adjust(slab, offset, night, forcing.kindOfSecond(), firstRow, rows, lane.means());
             }
             forcing.toMeans(lane.minima(), lane.means(), lane.cells());
             lane.accept();

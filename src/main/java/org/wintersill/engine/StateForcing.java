@@ -2,6 +2,7 @@ package org.wintersill.engine;
 
 import java.util.Arrays;
 import java.util.List;
+import org.wintersill.elevation.AdjustedTemperature;
 import org.wintersill.grid.CoordinateOperation;
 import org.wintersill.grid.GridGeometry;
 import org.wintersill.season.StateCultivar;
@@ -41,6 +42,11 @@ public record StateForcing(List<StateCultivar> cultivars, List<int[]> firstDays,
     /** Whether a second record is decoded. */
     public boolean hasSecond() {
         return second != null;
+    }
+
+    /** How the second record is brought to the cells. */
+    public AdjustedTemperature kindOfSecond() {
+        return hasMaxima() ? AdjustedTemperature.MAXIMUM : AdjustedTemperature.MEAN;
     }
 
     boolean hasMaxima() {

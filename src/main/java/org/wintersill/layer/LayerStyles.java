@@ -203,6 +203,31 @@ public final class LayerStyles {
                 new LayerStyle.Entry(3, "milder", "milder", Colour.hex("#1d4e89"))));
     }
 
+    /** Change of a temperature in K: colder, where it is dangerous, is warm in colour. */
+    public static LayerStyle.Ramp temperatureChange() {
+        return ramp("temperature-change", "Change of the minimum temperature (K)", new double[] {-8, -4, -2, -1, 0, 1, 2, 4, 8},
+                DANGER_TO_SAFETY, v -> signed(v) + " K");
+    }
+
+    /** Lapse rate in K per km; negative is an inversion. */
+    public static LayerStyle.Ramp lapseRate() {
+        return ramp("lapse-rate", "Lapse rate (K/km)", new double[] {-8, -5, -2, 0, 3, 6, 9}, LOWER_TO_HIGHER, v -> signed(v) + " K/km");
+    }
+
+    /** Standard deviation of lapse rates in K per km. */
+    public static LayerStyle.Ramp lapseRateSpread() {
+        return ramp("lapse-rate-spread", "Spread of lapse rates (K/km)", new double[] {0, 1, 2, 3, 4, 5, 6}, FEW_TO_MANY,
+                v -> whole(v) + " K/km");
+    }
+
+    /** Cold-air class from 1 {@code prone} to 3 {@code not-prone}. */
+    public static LayerStyle.Classes coldAir() {
+        return new LayerStyle.Classes("cold-air", "Cold air", List.of(
+                new LayerStyle.Entry(1, "prone", "prone to cold air", Colour.hex("#3b3f8f")),
+                new LayerStyle.Entry(2, "neutral", "neutral", Colour.hex("#a9b7a6")),
+                new LayerStyle.Entry(3, "not-prone", "not prone", Colour.hex("#e9c46a"))));
+    }
+
     /** Suitability from 1 {@code secure} to 4 {@code unfit}. */
     public static LayerStyle.Classes suitability() {
         return new LayerStyle.Classes("suitability", "Suitability", List.of(
@@ -237,6 +262,7 @@ public final class LayerStyles {
         return List.of(margin(), requiredHardiness(), probability(), damage(), share(), temperature(), night(), year(),
                 count(), returnPeriod(), elevation(), heightChange(), trend(), shape(), spread(), fitCorrelation(), fitFlag(), trendSignificance(), marginChange(),
                 shareChange(), rangeChange(), frequencySignificance(), changeSignal(),
+                temperatureChange(), lapseRate(), lapseRateSpread(), coldAir(),
                 suitability(), choice(6));
     }
 

@@ -1,10 +1,9 @@
 package org.wintersill.run;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
-import org.wintersill.elevation.LaneAdjuster;
-import org.wintersill.grid.Block;
 import org.wintersill.grid.CoordinateOperations;
 import org.wintersill.hardiness.CalendarModel;
 import org.wintersill.hardiness.Cultivar;
@@ -16,7 +15,6 @@ import org.wintersill.season.NightCurve;
 import org.wintersill.season.Phases;
 import org.wintersill.season.WinterLane;
 import org.wintersill.season.WinterValues;
-import org.wintersill.temperature.DailyTemperatureReader;
 import org.wintersill.time.DayAxis;
 import org.wintersill.time.Season;
 
@@ -49,21 +47,41 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
     }
 
     /**
-     * @param source value of the source cell, degC; NaN for missing
-     * @param interpolated value between source cells, before the change of height
-     * @param lapseRate K/km of the night
-     * @param tmin value at the cell's own height
+     * @param steps from the source cell's value to the cell's own
      * @param tmean daily mean of the date as a state model is told it, degC; NaN for curves by date and where it is missing
      * @param phase {@code autumn}, {@code midwinter} or {@code spring}, which begins with the state of the cultivar (science 16.12); null for
      *     curves by date
      * @param margin with the fold's own arithmetic, so that the lowest of a winter's nights is the winter's margin to the bit
      */
-    public record Night(String date, float source, float interpolated, double lapseRate, float tmin, float tmean, String phase,
-                        double lt10, double lt50, double lt90, float margin, double damage) {
+    public record Night(String date, Steps steps, float tmean, String phase, double lt10, double lt50, double lt90, float margin,
+                        double damage) {
+
+        public float tmin() {
+            return steps.tmin();
+        }
+    }
+
+    /**
+     * How a night's temperature came about; NaN for missing.
+     *
+     * @param source value of the source cell, degC
+     * @param interpolated value between source cells, degC
+     * @param lapseRate K/km of the night at the cell
+     * @param height change by height, K; the others add up with it to {@code tmin - interpolated}
+     * @param pool change by cold-air pools, K
+     * @param water change by water, K
+     * @param offset constant change, K
+     * @param tmin value at the cell, degC
+     * @param isByHeightAlone whether the run adjusts by height alone, with lapse rates of the month
+     */
+    public record Steps(float source, float interpolated, float lapseRate, float height, float pool, float water, float offset,
+                        float tmin, boolean isByHeightAlone) {
+        static final Steps MISSING = new Steps(Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN,
+                true);
     }
 
     /** The temperatures of one winter at the cell. */
-    private record Temperatures(boolean complete, float[] source, float[] interpolated, float[] tmin) {
+    private record Temperatures(boolean complete, Steps[] nights) {
     }
 
     /**
@@ -96,9 +114,12 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
         List<List<Winter>> courses = new ArrayList<>();
         List<WinterValues> values = new ArrayList<>();
         plan.cultivars().forEach(cultivar -> courses.add(new ArrayList<>()));
-        try (DailyTemperatureReader reader = plan.source().open(); CellStates states = new CellStates(plan, row, column)) {
+        boolean inside = plan.adjustment().positions().containing(row, column) >= 0;
+        try (NightReader reader = inside ? new NightReader(plan, row, row + 1) : null;
+                CellStates states = new CellStates(plan, reader, row, column)) {
             for (int s : wanted) {
-                Temperatures temperatures = temperatures(plan, reader, plan.seasons().get(s), row, column);
+                Temperatures temperatures = inside ? temperatures(plan, reader, plan.seasons().get(s), row, column)
+                        : new Temperatures(false, missing(plan.seasons().get(s).days()));
                 values.add(addWinter(plan, s, temperatures, states, courses));
             }
         }
@@ -137,49 +158,28 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
                 .filter(course -> ids.stream().anyMatch(course.cultivar().id()::equalsIgnoreCase)).toList(), values);
     }
 
-    private static Temperatures temperatures(RunPlan plan, DailyTemperatureReader reader, Season season, int row, int column) {
-        int nights = season.days();
-        float[] source = filled(nights);
-        float[] interpolated = filled(nights);
-        float[] tmin = filled(nights);
-        int[] rows = plan.adjustment().positions().sourceRows(row, row + 1);
-        int containing = plan.adjustment().positions().containing(row, column);
-        if (containing < 0) {
-            return new Temperatures(false, source, interpolated, tmin);
-        }
-        Block window = plan.job().window();
-        Block block = new Block(window.column(), window.row() + rows[0], window.columns(), rows[1] - rows[0]);
-        CompletenessTally tally = new CompletenessTally(season, plan.job().policy(), block.cells());
-        LaneAdjuster adjuster = new LaneAdjuster(plan.adjustment());
-        float[] slab = new float[block.cells()];
-        float[] lane = new float[plan.target().columns()];
-        int shift = -rows[0] * window.columns();
-        DayAxis axis = plan.source().days();
-        for (int night = 0; night < nights; night++) {
+    private static Temperatures temperatures(RunPlan plan, NightReader reader, Season season, int row, int column) {
+        Steps[] nights = missing(season.days());
+        CompletenessTally tally = new CompletenessTally(season, plan.job().policy(), reader.cells());
+        DayAxis axis = plan.job().source().days();
+        for (int night = 0; night < nights.length; night++) {
             int position = axis.indexOf(season.firstDay() + night);
             if (position < 0) {
-                tally.absent(night, 0, block.cells());
+                tally.absent(night, 0, reader.cells());
                 continue;
             }
-            reader.read(position, 1, block, slab, 0, block.cells());
-            tally.accept(night, slab, 0, 0, block.cells());
-            source[night] = slab[shift + containing];
-            adjuster.adjust(slab, shift, 0, row, 1, lane);
-            interpolated[night] = value(lane[column]);
-            adjuster.adjust(slab, shift, plan.adjustment().lapseRates().ofMonth(season.date(night).month()), row, 1, lane);
-            tmin[night] = value(lane[column]);
+            reader.read(position, season.date(night));
+            tally.accept(night, reader.minima(), 0, 0, reader.cells());
+            nights[night] = reader.at(row, column);
         }
-        return new Temperatures(tally.isComplete(shift + containing), source, interpolated, tmin);
+        int containing = plan.adjustment().positions().containing(row, column);
+        return new Temperatures(tally.isComplete(reader.cell(containing)), nights);
     }
 
-    private static float value(float laneValue) {
-        return laneValue == Float.POSITIVE_INFINITY ? Float.NaN : laneValue;
-    }
-
-    private static float[] filled(int count) {
-        float[] values = new float[count];
-        java.util.Arrays.fill(values, Float.NaN);
-        return values;
+    private static Steps[] missing(int count) {
+        Steps[] nights = new Steps[count];
+        Arrays.fill(nights, Steps.MISSING);
+        return nights;
     }
 
     private static WinterValues addWinter(RunPlan plan, int s, Temperatures temperatures, CellStates states,
@@ -189,7 +189,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
         WinterLane lane = new WinterLane(curves.length, plan.job().levels(), plan.job().reckoning(), 1);
         float[][] night = new float[1][1];
         for (int n = 0; n < season.days(); n++) {
-            float tmin = temperatures.tmin()[n];
+            float tmin = temperatures.nights()[n].tmin();
             night[0][0] = Float.isNaN(tmin) ? Float.POSITIVE_INFINITY : tmin;
             lane.accept(curves, night, 1, new int[] {n});
         }
@@ -213,9 +213,8 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             double lt10 = course.lt10()[n];
             double lt50 = course.lt50()[n];
             double lt90 = course.lt90()[n];
-            float tmin = temperatures.tmin()[n];
-            nights.add(new Night(season.date(n).toString(), temperatures.source()[n], temperatures.interpolated()[n],
-                    plan.adjustment().lapseRates().ofMonth(season.date(n).month()), tmin, Float.NaN, null, lt10, lt50, lt90,
+            float tmin = temperatures.nights()[n].tmin();
+            nights.add(new Night(season.date(n).toString(), temperatures.nights()[n], Float.NaN, null, lt10, lt50, lt90,
                     Double.isNaN(lt50) ? Float.NaN : tmin - curve.lethal()[0][n], cultivar.tolerance().killedFraction(tmin, lt10, lt50, lt90)));
         }
         return nights;
@@ -228,9 +227,8 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             float lt10 = course.lt10()[n];
             float lt50 = course.lt50()[n];
             float lt90 = course.lt90()[n];
-            float tmin = temperatures.tmin()[n];
-            nights.add(new Night(season.date(n).toString(), temperatures.source()[n], temperatures.interpolated()[n],
-                    plan.adjustment().lapseRates().ofMonth(season.date(n).month()), tmin, course.mean()[n], phase(byDate, n, course.spring()),
+            float tmin = temperatures.nights()[n].tmin();
+            nights.add(new Night(season.date(n).toString(), temperatures.nights()[n], course.mean()[n], phase(byDate, n, course.spring()),
                     shortest(lt10), shortest(lt50), shortest(lt90), tmin - lt50, cultivar.tolerance().killedFraction(tmin, lt10, lt50, lt90)));
         }
         return nights;

@@ -5,9 +5,7 @@ import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
-import org.wintersill.elevation.LaneAdjuster;
 import org.wintersill.engine.StateForcing;
-import org.wintersill.grid.Block;
 import org.wintersill.season.Phases;
 import org.wintersill.season.StateCultivar;
 import org.wintersill.season.StateLane;
@@ -22,12 +20,8 @@ final class CellStates implements AutoCloseable {
     private final StateForcing forcing;
     private final int row;
     private final int column;
-    private final Block block;
-    private final DailyTemperatureReader minima;
+    private final NightReader nights;
     private final DailyTemperatureReader second;
-    private final LaneAdjuster adjuster;
-    private final float[] slab;
-    private final float[] lane;
 
     /**
      * The nights of one cultivar in one winter, {@code [night]}, NaN for missing.
@@ -42,20 +36,14 @@ final class CellStates implements AutoCloseable {
     record Course(float[] mean, float[] lt10, float[] lt50, float[] lt90, int spring) {
     }
 
-    CellStates(RunPlan plan, int row, int column) {
+    /** @param nights reader of the cell's row; null where the cell lies beyond the source */
+    CellStates(RunPlan plan, NightReader nights, int row, int column) {
         this.plan = plan;
+        this.nights = nights;
         this.row = row;
         this.column = column;
         forcing = plan.job().states();
-        int[] rows = plan.adjustment().positions().sourceRows(row, row + 1);
-        Block window = plan.job().window();
-        boolean inside = plan.adjustment().positions().containing(row, column) >= 0 && !forcing.isNone();
-        block = inside ? new Block(window.column(), window.row() + rows[0], window.columns(), rows[1] - rows[0]) : null;
-        minima = inside ? plan.job().source().open() : null;
-        second = inside && forcing.hasSecond() ? forcing.second().open() : null;
-        adjuster = new LaneAdjuster(plan.adjustment());
-        slab = new float[inside ? block.cells() : 0];
-        lane = new float[plan.target().columns()];
+        second = nights != null && forcing.hasSecond() ? forcing.second().open() : null;
     }
 
     /**
@@ -90,14 +78,15 @@ final class CellStates implements AutoCloseable {
         states.begin(season, forcing.firstDays().get(s), forcing.latitudes(plan.target(), row, column, 1, 1));
         DayAxis axis = plan.job().source().days();
         for (int day = states.firstDay(); day < season.days(); day++) {
-            int position = block == null ? -1 : axis.indexOf(season.firstDay() + day);
+            int position = nights == null ? -1 : axis.indexOf(season.firstDay() + day);
             if (position < 0) {
                 states.absent();
                 continue;
             }
-            states.minima()[0] = adjusted(minima, position, season, day);
+            nights.read(position, season.date(day));
+            states.minima()[0] = nights.airMinimum(row, column);
             if (second != null) {
-                states.means()[0] = adjusted(second, position, season, day);
+                states.means()[0] = nights.second(second, position, forcing.kindOfSecond(), row, column);
             }
             forcing.toMeans(states.minima(), states.means(), 1);
             states.accept();
@@ -111,13 +100,6 @@ final class CellStates implements AutoCloseable {
         return byCultivar;
     }
 
-    private float adjusted(DailyTemperatureReader reader, int position, Season season, int day) {
-        reader.read(position, 1, block, slab, 0, block.cells());
-        double lapse = plan.adjustment().lapseRates().ofMonth(season.date(day).month());
-        adjuster.adjust(slab, (plan.job().window().row() - block.row()) * block.columns(), lapse, row, 1, lane);
-        return lane[column];
-    }
-
     private static float[] none(Season season) {
         float[] values = new float[season.days()];
         Arrays.fill(values, Float.NaN);
@@ -126,9 +108,6 @@ final class CellStates implements AutoCloseable {
 
     @Override
     public void close() {
-        if (minima != null) {
-            minima.close();
-        }
         if (second != null) {
             second.close();
         }

@@ -75,10 +75,11 @@ record DailyMeans(List<Cultivar> cultivars, SeasonWindow window, DayAxis minimum
      * @param minima the daily minima
      * @throws org.wintersill.problem.ProblemException when maxima or means cannot be read or do not belong to the minima
      */
-    static DailyMeans of(TemperatureConfig config, List<Cultivar> cultivars, SeasonWindow window, DailyTemperatureSource minima,
+    static DailyMeans of(RunConfig run, List<Cultivar> cultivars, SeasonWindow window, DailyTemperatureSource minima,
                          InputFormats formats, Notices notices) {
+        TemperatureConfig config = run.temperature();
         if (withState(cultivars).isEmpty()) {
-            if (config.maximum().isPresent() || config.mean().isPresent() || config.dailyRange().isPresent()) {
+            if (!PoolMaxima.areNeeded(run) && (config.maximum().isPresent() || config.mean().isPresent() || config.dailyRange().isPresent())) {
                 notices.add("no model of this run needs the daily mean: maximum and mean temperatures are not read");
             }
             return new DailyMeans(cultivars, window, minima.days(), minima, null, minima.days(), 0);
@@ -106,7 +107,7 @@ record DailyMeans(List<Cultivar> cultivars, SeasonWindow window, DayAxis minimum
         return new DayAxis(one.calendar(), Arrays.copyOf(days, n));
     }
 
-    private static void refuseDifference(DailyTemperatureSource minima, DailyTemperatureSource second) {
+    static void refuseDifference(DailyTemperatureSource minima, DailyTemperatureSource second) {
         Problems problems = new Problems();
         GridGeometry a = minima.grid();
         GridGeometry b = second.grid();

@@ -1,6 +1,7 @@
 package org.wintersill.run;
 
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -9,6 +10,7 @@ import org.wintersill.io.json.CsvText;
 import org.wintersill.io.json.JsonText;
 import org.wintersill.run.CellExplanation.CultivarCourse;
 import org.wintersill.run.CellExplanation.Night;
+import org.wintersill.run.CellExplanation.Steps;
 import org.wintersill.run.CellExplanation.Winter;
 
 /** A cell's explanation as a table for people, as CSV and as the JSON document that scripts rely on. */
@@ -49,7 +51,7 @@ public final class ExplanationText {
     private static Map<String, Object> night(Night night) {
         Map<String, Object> entry = new LinkedHashMap<>();
         entry.put("date", night.date());
-        entry.put("source", JsonText.number(night.source()));
+        entry.put("source", JsonText.number(night.steps().source()));
         entry.put("tmin", JsonText.number(night.tmin()));
         entry.put("tmean", JsonText.number(night.tmean()));
         entry.put("phase", night.phase());
@@ -58,19 +60,35 @@ public final class ExplanationText {
         entry.put("lt90", JsonText.number(night.lt90()));
         entry.put("margin", JsonText.number(night.margin()));
         entry.put("damage", JsonText.number(night.damage()));
+        if (!night.steps().isByHeightAlone()) {
+            entry.put("steps", steps(night.steps()));
+        }
+        return entry;
+    }
+
+    private static Map<String, Object> steps(Steps steps) {
+        Map<String, Object> entry = new LinkedHashMap<>();
+        entry.put("interpolated", JsonText.number(steps.interpolated()));
+        entry.put("lapse-rate", JsonText.number(steps.lapseRate()));
+        entry.put("height", JsonText.number(steps.height()));
+        entry.put("pool", JsonText.number(steps.pool()));
+        entry.put("water", JsonText.number(steps.water()));
+        entry.put("offset", JsonText.number(steps.offset()));
         return entry;
     }
 
     /** One row a night and cultivar. */
     public static String csv(CellExplanation cell) {
         CsvText csv = new CsvText("cultivar", "winter", "date", "source_degc", "interpolated_degc", "lapse_rate_k_per_km",
-                "height_change_m", "tmin_degc", "tmean_degc", "phase", "lt10_degc", "lt50_degc", "lt90_degc", "margin_k", "damage");
+                "height_change_m", "height_k", "pool_k", "water_k", "offset_k", "tmin_degc", "tmean_degc", "phase", "lt10_degc", "lt50_degc",
+                "lt90_degc", "margin_k", "damage");
         for (CultivarCourse course : cell.cultivars()) {
             for (Winter winter : course.winters()) {
                 for (Night night : winter.nights()) {
-                    csv.row(course.cultivar().id(), winter.label(), night.date(), night.source(), night.interpolated(),
-                            night.lapseRate(), cell.heightChange(), night.tmin(), night.tmean(), night.phase(),
-                            night.lt10(), night.lt50(), night.lt90(), night.margin(), night.damage());
+                    Steps steps = night.steps();
+                    csv.row(course.cultivar().id(), winter.label(), night.date(), steps.source(), steps.interpolated(), steps.lapseRate(),
+                            cell.heightChange(), steps.height(), steps.pool(), steps.water(), steps.offset(), night.tmin(), night.tmean(),
+                            night.phase(), night.lt10(), night.lt50(), night.lt90(), night.margin(), night.damage());
                 }
             }
         }
@@ -95,7 +113,7 @@ public final class ExplanationText {
                 }
             }
             if (course.winters().size() == 1) {
-                coldest(text, course.winters().get(0), nightsShown, cell.heightChange());
+                coldest(text, course.winters().get(0), nightsShown);
             }
         }
         line(text, "");
@@ -103,18 +121,27 @@ public final class ExplanationText {
         return text.toString();
     }
 
-    private static void coldest(StringBuilder text, Winter winter, int count, float heightChange) {
+    /** A step that changes nothing on any of the nights has no column. */
+    private static void coldest(StringBuilder text, Winter winter, int count) {
+        List<Night> nights = winter.nights().stream().filter(night -> !Float.isNaN(night.margin()))
+                .sorted(Comparator.comparingDouble(Night::margin).thenComparing(Night::date)).limit(count).toList();
+        boolean pools = nights.stream().anyMatch(night -> night.steps().pool() != 0);
+        boolean water = nights.stream().anyMatch(night -> night.steps().water() != 0);
+        boolean offset = nights.stream().anyMatch(night -> night.steps().offset() != 0);
+        boolean rates = nights.stream().map(night -> night.steps().lapseRate()).distinct().count() > 1;
         line(text, "  nights of the lowest margins:");
         boolean means = winter.nights().stream().anyMatch(night -> !Float.isNaN(night.tmean()));
-        line(text, "  date        source  interpolated  + height    = Tmin %s    LT10     LT50     LT90  margin K  damage%s",
+        line(text, "  date        source  interpolated%s  + height%s%s%s    = Tmin %s    LT10     LT50     LT90  margin K  damage%s",
+                rates ? "  K/km" : "", pools ? "  + pool" : "", water ? "  + water" : "", offset ? "  + offset" : "",
                 means ? "   Tmean " : "", means ? "  phase" : "");
-        winter.nights().stream().filter(night -> !Float.isNaN(night.margin()))
-                .sorted(java.util.Comparator.comparingDouble(Night::margin).thenComparing(Night::date)).limit(count)
-                .forEach(night -> line(text, "  %s %8.2f %13.2f %9.2f %9.2f %s%8.2f %8.2f %8.2f %+9.2f %7.3f%s", night.date(),
-                        night.source(), night.interpolated(),
-                        Float.isNaN(heightChange) ? 0 : -night.lapseRate() * heightChange / 1000, night.tmin(),
-                        means ? format("%8.2f ", night.tmean()) : "", night.lt10(), night.lt50(), night.lt90(), night.margin(),
-                        night.damage(), means && night.phase() != null ? "  " + night.phase() : ""));
+        for (Night night : nights) {
+            Steps steps = night.steps();
+            line(text, "  %s %8.2f %13.2f%s %9.2f%s%s%s %9.2f %s%8.2f %8.2f %8.2f %+9.2f %7.3f%s", night.date(), steps.source(),
+                    steps.interpolated(), rates ? format(" %5.2f", steps.lapseRate()) : "", steps.height(),
+                    pools ? format(" %7.2f", steps.pool()) : "", water ? format(" %8.2f", steps.water()) : "",
+                    offset ? format(" %9.2f", steps.offset()) : "", night.tmin(), means ? format("%8.2f ", night.tmean()) : "", night.lt10(),
+                    night.lt50(), night.lt90(), night.margin(), night.damage(), means && night.phase() != null ? "  " + night.phase() : "");
+        }
     }
 
     private static void line(StringBuilder text, String form, Object... values) {

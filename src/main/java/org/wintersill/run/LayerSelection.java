@@ -86,6 +86,7 @@ final class LayerSelection {
         ids.add(ALL);
         ids.addAll(WinterLayers.ids());
         ids.addAll(List.of(SharedLayers.CHOICE, SharedLayers.ELEVATION, SharedLayers.HEIGHT_CHANGE));
+        ids.addAll(AdjustmentLayers.ids());
         return ids;
     }
 }

@@ -15,6 +15,8 @@ import java.util.stream.IntStream;
 import org.wintersill.config.ParcelsConfig;
 import org.wintersill.engine.LocalEngine;
 import org.wintersill.engine.Progress;
+import org.wintersill.engine.NightMeans;
+import org.wintersill.elevation.terrain.PoolGround;
 import org.wintersill.engine.WinterStore;
 import org.wintersill.engine.Workers;
 import org.wintersill.io.crs.CellAreas;
@@ -73,10 +75,12 @@ public final class MapRun {
                 WinterStore store = new WinterStore(folder.unfinished("winters.tmp"),
                         plan.job().planes(), wantedPlanes(cultivars), plan.seasons().size(), plan.target().rows(),
                         plan.target().columns())) {
+            Optional<NightMeans> means = Optional.empty();
             if (wintersFrom.isPresent()) {
                 KeptWinters.take(wintersFrom.get(), plan, digests.await(), store);
             } else {
-                fold(folder, store, workers);
+                prepareGround(workers);
+                means = Optional.of(fold(folder, store, workers));
             }
             CountingWinters.require(plan, store);
             Map<String, Object> record = RunRecord.begin(plan, digests.await());
@@ -86,6 +90,7 @@ public final class MapRun {
             });
             String digest = Digests.ofText(JsonText.of(RecordedConfiguration.of(plan.config().effective())));
             LayerOutput output = new LayerOutput(folder, format, plan.target(), plan.seasons(), digest, workers.executor());
+            new AdjustmentLayers(plan, means, output, new LayerSelection(plan.config().outputs().layers())).write(notices);
             SummaryPass summaries = new SummaryPass(plan, store, output, new LayerSelection(plan.config().outputs().layers()),
                     workers, progress);
             writeLayers(summaries, cultivars);
@@ -107,18 +112,35 @@ public final class MapRun {
         }
     }
 
-    private void fold(OutputFolder folder, WinterStore store, Workers workers) {
+    /** The ground under the pools, once, before nights are folded over it. */
+    private void prepareGround(Workers workers) {
+        if (plan.adjustment().terms().pools() instanceof PoolGround ground) {
+            progress.begin("Terrain", ground.tasks());
+            workers.forEach(ground.tasks(), (worker, task) -> {
+                ground.prepare(task);
+                progress.advance(1);
+            });
+            progress.end();
+        }
+    }
+
+    private NightMeans fold(OutputFolder folder, WinterStore store, Workers workers) {
         if (!(plan.source() instanceof ScenarioSource scenario)) {
-            new LocalEngine(plan.job(), plan.foldPlan()).run(store, workers, progress, notices);
-            return;
+            return fold(store, workers);
         }
         try {
             scenario.prepare(folder.unfinished("scenario.tmp"), plan.job().window(), Estimates.budget(plan.config().limits()), workers,
                     progress);
-            new LocalEngine(plan.job(), plan.foldPlan()).run(store, workers, progress, notices);
+            return fold(store, workers);
         } finally {
             scenario.release();
         }
+    }
+
+    private NightMeans fold(WinterStore store, Workers workers) {
+        LocalEngine engine = new LocalEngine(plan.job(), plan.foldPlan());
+        engine.run(store, workers, progress, notices);
+        return engine.nightMeans();
     }
 
     /** Worst nights are only read again for layers with a value a winter. */

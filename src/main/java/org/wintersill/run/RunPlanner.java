@@ -84,11 +84,11 @@ public final class RunPlanner {
         }
         String sourceName = source.files().isEmpty() ? "the record" : source.files().get(0).path();
         TargetPlan targetPlan = TargetPlan.of(source.grid(), sourceName, config.elevation(),
-                new AreaCut.Wanted(config.area(), formats, operations, notices), formats, operations, notices);
+                new AreaCut.Wanted(config.area(), formats, operations, notices), config.temperature().maximum().isPresent(), formats, operations, notices);
         GridGeometry target = targetPlan.target();
         SeasonWindow window = window(config.winter(), target, notices);
         MissingDayPolicy policy = MissingDayPolicy.named(config.missingDays()).orElseThrow();
-        DailyMeans means = DailyMeans.of(config.temperature(), cultivars, window, source, formats, notices);
+        DailyMeans means = DailyMeans.of(config, cultivars, window, source, formats, notices);
         WinterSelection winters = means.winters(WinterSelection.of(source.days(), window, policy));
         checkWinters(winters, source, sourceName);
         checkCoverage(cultivars, window, config);
@@ -99,7 +99,7 @@ public final class RunPlanner {
         ClimatologyStatistics.Choices choices = choices(config, winters.used().stream().mapToInt(Season::year).toArray(), reckoning);
         FoldJob job = new FoldJob(means.minima(), targetPlan.window(), targetPlan.adjustment(), winters.used(), policy,
                 curves(cultivars, winters.used(), choices), choices.levels().length, reckoning,
-                means.forcing(winters.used(), target, choices.levels(), operations));
+                means.forcing(winters.used(), target, choices.levels(), operations), PoolMaxima.of(config, means, formats, notices));
         int threads = config.limits().threads().orElse(Runtime.getRuntime().availableProcessors());
         long budget = Estimates.budget(config.limits());
         long writers = Estimates.writerBytes(target, choices, config.outputs());

@@ -67,9 +67,11 @@ public final class RunRecord {
             DailyTemperatureSource second = plan.job().states().second();
             second.files().forEach(file -> inputs.add(temperatures(base, file, second, digests)));
         }
+        poolMaxima(plan).ifPresent(maxima -> maxima.files().forEach(file -> inputs.add(temperatures(base, file, maxima, digests))));
         plan.config().elevation().ifPresent(elevation -> {
             inputs.add(entry(base, elevation.dem().file(), "terrain model", digests));
             elevation.sourceHeight().ifPresent(height -> inputs.add(entry(base, height.file(), "source heights", digests)));
+            elevation.water().ifPresent(water -> inputs.add(entry(base, water.file(), "water mask", digests)));
         });
         plan.config().cultivars().files().forEach(file -> inputs.add(entry(base, file, "cultivars", digests)));
         areaPolygons(plan).ifPresent(file -> inputs.add(entry(base, file, "area polygons", digests)));
@@ -97,14 +99,21 @@ public final class RunRecord {
         if (plan.job().states().hasSecond()) {
             plan.job().states().second().files().forEach(file -> files.add(Path.of(file.path())));
         }
+        poolMaxima(plan).ifPresent(maxima -> maxima.files().forEach(file -> files.add(Path.of(file.path()))));
         plan.config().elevation().ifPresent(elevation -> {
             files.add(elevation.dem().file());
             elevation.sourceHeight().ifPresent(height -> files.add(height.file()));
+            elevation.water().ifPresent(water -> files.add(water.file()));
         });
         files.addAll(plan.config().cultivars().files());
         areaPolygons(plan).ifPresent(files::add);
         plan.config().parcels().ifPresent(parcels -> files.add(parcels.polygons().file()));
         return files;
+    }
+
+    /** The maxima that tell nights with pools, where they are not among the inputs already. */
+    private static Optional<DailyTemperatureSource> poolMaxima(RunPlan plan) {
+        return plan.job().poolMaxima().filter(maxima -> maxima != plan.job().states().second());
     }
 
     private static Optional<Path> areaPolygons(RunPlan plan) {

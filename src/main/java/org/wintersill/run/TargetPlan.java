@@ -2,16 +2,20 @@ package org.wintersill.run;
 
 import java.util.Optional;
 import org.wintersill.config.ElevationConfig;
+import org.wintersill.config.LocalLapseConfig;
 import org.wintersill.elevation.ElevationAdjustment;
 import org.wintersill.elevation.ElevationField;
 import org.wintersill.elevation.LapseRates;
+import org.wintersill.elevation.LocalLapse;
 import org.wintersill.elevation.SourceHeights;
 import org.wintersill.elevation.SourcePositions;
+import org.wintersill.elevation.TargetTerms;
 import org.wintersill.grid.Block;
 import org.wintersill.grid.CoordinateOperation;
 import org.wintersill.grid.CoordinateOperations;
 import org.wintersill.grid.Crs;
 import org.wintersill.grid.GridGeometry;
+import org.wintersill.io.crs.CellSizes;
 import org.wintersill.problem.Notices;
 import org.wintersill.problem.Problem;
 
@@ -36,9 +40,10 @@ record TargetPlan(Block window, ElevationAdjustment adjustment) {
      * @param source the temperatures' grid
      * @param sourceName file that carries it, for messages
      * @param area the part of the target to work on
+     * @param hasMaxima whether the run has daily maxima beside the minima
      */
     static TargetPlan of(GridGeometry source, String sourceName, Optional<ElevationConfig> elevation, AreaCut.Wanted area,
-                         InputFormats formats, CoordinateOperations operations, Notices notices) {
+                         boolean hasMaxima, InputFormats formats, CoordinateOperations operations, Notices notices) {
         if (elevation.isEmpty()) {
             return withoutHeights(source, area, operations, notices);
         }
@@ -52,13 +57,30 @@ record TargetPlan(Block window, ElevationAdjustment adjustment) {
         Optional<AreaCut> cut = area.of(whole.grid());
         ElevationField dem = cut.map(part -> cropped(whole, part.block())).orElse(whole);
         SourcePositions used = dem == whole ? positions : new SourcePositions(source, dem.grid(), toSource);
-        Block window = used.window().orElseThrow(() -> Problem.input("the terrain model nowhere meets the temperature grid: it covers "
+        Block needed = used.window().orElseThrow(() -> Problem.input("the terrain model nowhere meets the temperature grid: it covers "
                         + dem.grid().describe() + "; the temperatures cover " + source.describe(), config.dem().file().toString(),
                 "Check both reference systems, and whether x and y are swapped").asException());
+        Optional<LocalLapse> wholeLapse = config.localLapse().map(local -> localLapse(local, source, new LapseRates(config.lapseRate())));
+        Block window = wholeLapse.map(lapse -> withHalo(needed, lapse, source)).orElse(needed);
         ElevationAdjustment adjustment = ElevationAdjustment.toHeights(used.within(window), part(heights, source, window), dem,
                 new LapseRates(config.lapseRate()));
         warnOfEqualHeights(adjustment, notices);
-        return new TargetPlan(window, AreaCut.masked(adjustment, cut));
+        TargetTerms terms = new NightTermsPlan(config, formats, operations, notices)
+                .terms(adjustment, whole, cut.map(AreaCut::block).orElse(whole.grid().whole()), source, hasMaxima);
+        return new TargetPlan(window, AreaCut.masked(adjustment, cut).with(wholeLapse.map(lapse -> lapse.rows(window.row(), window.rowEnd())), terms));
+    }
+
+    private static LocalLapse localLapse(LocalLapseConfig config, GridGeometry source, LapseRates prior) {
+        CellSizes sizes = CellSizes.of(source);
+        return new LocalLapse(config.radius(), prior, config.priorSd(), sizes.width(), sizes.height());
+    }
+
+    /** A part of the source with the cells around it that its lapse rates are fitted to. */
+    private static Block withHalo(Block part, LocalLapse lapse, GridGeometry source) {
+        int row = Math.max(0, part.row() - lapse.haloRows());
+        int column = Math.max(0, part.column() - lapse.haloColumns());
+        return new Block(column, row, Math.min(source.columns(), part.columnEnd() + lapse.haloColumns()) - column,
+                Math.min(source.rows(), part.rowEnd() + lapse.haloRows()) - row);
     }
 
     private static TargetPlan withoutHeights(GridGeometry source, AreaCut.Wanted area, CoordinateOperations operations,

@@ -2,6 +2,7 @@ package org.wintersill.temperature;
 
 import java.util.Arrays;
 import java.util.List;
+import java.util.stream.IntStream;
 import org.wintersill.grid.Block;
 import org.wintersill.grid.GridGeometry;
 import org.wintersill.time.DayAxis;
@@ -33,6 +34,13 @@ public final class AlignedTemperatureSource implements DailyTemperatureSource {
      */
     public static DailyTemperatureSource on(DayAxis days, DailyTemperatureSource source) {
         return days.size() == source.days().size() ? source : new AlignedTemperatureSource(source, days);
+    }
+
+    /** The record on the days of an axis: days that it lacks are missing, days that the axis lacks are left out. */
+    public static DailyTemperatureSource matching(DayAxis days, DailyTemperatureSource source) {
+        boolean same = days.size() == source.days().size()
+                && IntStream.range(0, days.size()).allMatch(i -> days.day(i) == source.days().day(i));
+        return same ? source : new AlignedTemperatureSource(source, days);
     }
 
     /** The days that either of two records has. */

@@ -63,6 +63,7 @@ class LayerStylesTest {
         allApart(LayerStyles.suitability(), CLASSES);
         allApart(LayerStyles.fitFlag(), CLASSES);
         allApart(LayerStyles.trendSignificance(), CLASSES);
+        allApart(LayerStyles.coldAir(), CLASSES);
         for (int cultivars = 1; cultivars <= 6; cultivars++) {
             allApart(LayerStyles.choice(cultivars), CHOICES);
         }
@@ -72,7 +73,7 @@ class LayerStylesTest {
     void sequencesRunThroughLightnessWithoutTurning() {
         for (LayerStyle style : List.of(LayerStyles.probability(), LayerStyles.damage(), LayerStyles.temperature(),
                 LayerStyles.night(), LayerStyles.year(), LayerStyles.count(), LayerStyles.share(),
-                LayerStyles.returnPeriod(), LayerStyles.spread(), LayerStyles.fitCorrelation())) {
+                LayerStyles.returnPeriod(), LayerStyles.spread(), LayerStyles.lapseRateSpread(), LayerStyles.fitCorrelation())) {
             for (double[][] sight : ColourSight.SIGHT) {
                 List<Double> lightness = new ArrayList<>();
                 colours(style).forEach(colour -> lightness.add(ColourSight.lab(colour, sight)[0]));
@@ -87,7 +88,7 @@ class LayerStylesTest {
     @Test
     void divergingRampsAreLightestAtZeroAndTellTheSignApart() {
         for (LayerStyle.Ramp ramp : List.of(LayerStyles.margin(), LayerStyles.requiredHardiness(),
-                LayerStyles.heightChange(), LayerStyles.trend(), LayerStyles.shape())) {
+                LayerStyles.heightChange(), LayerStyles.temperatureChange(), LayerStyles.lapseRate(), LayerStyles.trend(), LayerStyles.shape())) {
             List<Colour> colours = colours(ramp);
             int middle = colours.size() / 2;
             assertEquals(0, ramp.stops().get(middle).value());

@@ -1,5 +1,6 @@
 package org.wintersill.elevation.terrain;
 
+import java.util.Arrays;
 import org.wintersill.grid.Block;
 
 /**
@@ -22,6 +23,16 @@ public record Relief(int columns, int rows, float[] metres, double[] cellWidth, 
     /** Height of a cell; NaN beyond the grid. */
     float at(int row, int column) {
         return row < 0 || row >= rows || column < 0 || column >= columns ? Float.NaN : metres[row * columns + column];
+    }
+
+    /** The part of the relief in a block. */
+    public Relief crop(Block block) {
+        float[] part = new float[block.cells()];
+        for (int row = 0; row < block.rows(); row++) {
+            System.arraycopy(metres, (block.row() + row) * columns + block.column(), part, row * block.columns(), block.columns());
+        }
+        return new Relief(block.columns(), block.rows(), part, Arrays.copyOfRange(cellWidth, block.row(), block.rowEnd()),
+                Arrays.copyOfRange(cellHeight, block.row(), block.rowEnd()));
     }
 
     Block whole() {

@@ -1,5 +1,7 @@
 package org.wintersill.elevation.terrain;
 
+import org.wintersill.grid.Block;
+
 /**
  * The neighbourhood of a cell: all cells whose centres lie within a radius of its own.
  *
@@ -47,6 +49,20 @@ public record Window(Shape shape, double radius) {
     /** Whether the window of a row holds other cells than the centre. */
     public boolean hasNeighbours(Relief relief, int row) {
         return radius >= Math.min(relief.cellWidth()[row], relief.cellHeight()[row]);
+    }
+
+    /** A block with the cells around it that its windows, and the neighbours of its cells, reach. */
+    public Block around(Relief relief, Block block) {
+        int high = 1;
+        int wide = 1;
+        for (int row = block.row(); row < block.rowEnd(); row++) {
+            high = Math.max(high, rowReach(relief, row));
+            wide = Math.max(wide, columnReach(relief, row));
+        }
+        int row = Math.max(0, block.row() - high);
+        int column = Math.max(0, block.column() - wide);
+        return new Block(column, row, Math.min(relief.columns(), block.columnEnd() + wide) - column,
+                Math.min(relief.rows(), block.rowEnd() + high) - row);
     }
 
     /** Rows that the windows of a row reach to either side. */
