@@ -33,6 +33,9 @@ public interface Commands {
     /** One cell, night by night. */
     int explain(RunConfig config, ExplainOptions options, Console console);
 
+    /** The minima of a run against those of stations. */
+    int stations(RunConfig config, Path table, ExplainOptions.Format format, Console console);
+
     /** Cultivar files by themselves. */
     int curves(CurvesOptions options, Console console);
 

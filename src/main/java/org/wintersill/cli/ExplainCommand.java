@@ -19,7 +19,8 @@ import picocli.CommandLine.Option;
         footerHeading = "%nExamples:%n",
         footer = {"  wintersill explain sample-grids/run.yaml --at-lonlat -37.2,50.1 --winter 2010-11",
             "  wintersill explain sample-grids/run.yaml --at -37.2,50.1 --csv > cell.csv",
-            "  wintersill explain sample-grids/run.yaml --at -37.2,50.1 --winter 2009-10 --cultivar slate --chart slate.svg"})
+            "  wintersill explain sample-grids/run.yaml --at -37.2,50.1 --winter 2009-10 --cultivar slate --chart slate.svg",
+            "  wintersill explain sample-grids/run-cold-pool.yaml --stations stations.csv"})
 final class ExplainCommand implements Callable<Integer>, Manners.Kept {
     private final Session session;
 
@@ -52,6 +53,10 @@ final class ExplainCommand implements Callable<Integer>, Manners.Kept {
             + "profile intervals; --chart then draws return periods.")
     private boolean statistics;
 
+    @Option(names = "--stations", paramLabel = "FILE", description = "Compare the minima with those of stations, after each step of the "
+            + "adjustment: a table with the columns id, x, y (or lon, lat), elevation, date, tmin.")
+    private String stations;
+
     @Option(names = "--overwrite", description = "Replace a chart of that name.")
     private boolean overwrite;
 
@@ -70,10 +75,21 @@ final class ExplainCommand implements Callable<Integer>, Manners.Kept {
     @Override
     public Integer call() {
         return session.call(manners, console -> {
+            if (stations != null) {
+                return stations(console);
+            }
             ExplainOptions options = options();
             RunConfig config = run.config();
             return session.commands().explain(config, options, console);
         });
+    }
+
+    private int stations(Console console) {
+        if (at != null || atLonLat != null || winter != null || !cultivars.isEmpty() || chart != null || statistics) {
+            throw Problem.usage("--stations goes with no place, winter, cultivar, chart or statistics", "--stations",
+                    "Compare stations in one call and follow a cell in another").asException();
+        }
+        return session.commands().stations(run.config(), RunArguments.path(stations), ExplainOptions.Format.of(json, csv), console);
     }
 
     private ExplainOptions options() {

@@ -32,6 +32,8 @@ import org.wintersill.run.FolderContents;
 import org.wintersill.run.InputFormats;
 import org.wintersill.run.Inspection;
 import org.wintersill.run.InspectionText;
+import org.wintersill.run.StationComparison;
+import org.wintersill.run.StationText;
 import org.wintersill.run.MapRun;
 import org.wintersill.run.MarginChart;
 import org.wintersill.run.OutputFolder;
@@ -177,6 +179,17 @@ final class RunCommands implements Commands {
             console.result(text.toString());
         }
         problems.throwIfAny();
+        return ExitCode.DONE;
+    }
+
+    @Override
+    public int stations(RunConfig config, Path table, ExplainOptions.Format format, Console console) {
+        StationComparison comparison = StationComparison.of(table, () -> plan(config, console), () -> crs);
+        console.result(switch (format) {
+            case JSON -> StationText.json(comparison);
+            case CSV -> StationText.csv(comparison);
+            case TEXT -> StationText.table(comparison);
+        });
         return ExitCode.DONE;
     }
 

@@ -27,7 +27,12 @@ public final class NightFields {
         return this;
     }
 
-    /** A night of one lapse rate on which pools form fully. */
+    /**
+     * Fills it for a date: lapse rate of the month, water open unless the date lies in the frozen period.
+     *
+     * @param lapseField as in {@link #set}
+     * @param poolWeight likewise
+     */
     public NightFields of(ElevationAdjustment adjustment, CfDate date, float[] lapseField, float[] poolWeight) {
         return set(adjustment.lapseRates().ofMonth(date.month()), lapseField, poolWeight,
                 !adjustment.terms().frozen().holds(date.month(), date.day()));

@@ -78,6 +78,11 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
                         float tmin, boolean isByHeightAlone) {
         static final Steps MISSING = new Steps(Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN,
                 true);
+
+        /** The temperature of a place itself, which nothing is done to. */
+        public static Steps unadjusted(float tmin) {
+            return new Steps(tmin, tmin, 0, 0, 0, 0, 0, tmin, true);
+        }
     }
 
     /** The temperatures of one winter at the cell. */

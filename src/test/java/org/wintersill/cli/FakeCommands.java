@@ -54,6 +54,11 @@ final class FakeCommands implements Commands {
     }
 
     @Override
+    public int stations(RunConfig given, java.nio.file.Path table, ExplainOptions.Format format, Console console) {
+        return done("stations", given, console);
+    }
+
+    @Override
     public int curves(CurvesOptions options, Console console) {
         curvesOptions = options;
         return done("curves", null, console);

@@ -7,6 +7,7 @@ import org.wintersill.hardiness.Cultivar;
 import org.wintersill.hardiness.LethalTemperatures;
 import org.wintersill.io.chart.Chart;
 import org.wintersill.problem.Problem;
+import org.wintersill.run.CellExplanation;
 import org.wintersill.run.CellExplanation.CultivarCourse;
 import org.wintersill.run.CellExplanation.Night;
 import org.wintersill.run.CellExplanation.Winter;
@@ -74,7 +75,7 @@ public record SeriesCourse(List<CultivarCourse> courses, List<Season> seasons, D
             float tmin = series.minimum(season.firstDay() + n);
             tally.accept(n, new float[] {tmin}, 0, 0, 1);
             double lt50 = lethal.lt50()[n];
-            Night night = new Night(season.date(n).toString(), tmin, tmin, 0, tmin,
+            Night night = new Night(season.date(n).toString(), CellExplanation.Steps.unadjusted(tmin),
                     series.mean(season.firstDay() + n), "", lethal.lt10()[n], lt50, lethal.lt90()[n],
                     tmin - (float) lt50, cultivar.tolerance().killedFraction(tmin, lethal.lt10()[n], lt50, lethal.lt90()[n]));
             nights.add(night);
