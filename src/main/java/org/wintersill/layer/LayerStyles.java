@@ -27,6 +27,8 @@ public final class LayerStyles {
         "#f3f1e2", "#c0d3aa", "#8eb392", "#619382", "#3f7077", "#274f62", "#14304a"};
     private static final String[] SHARE = {
         "#ece6da", "#d4cad9", "#b3a5c5", "#9081b2", "#6c5f9f", "#4a4082", "#2a2363"};
+    private static final String[] NOTHING_TO_MUCH = {
+        "#f4f0df", "#bdd6d6", "#8dbac9", "#5e9bb8", "#3a799e", "#22557d", "#102d50"};
     private static final String[] LOWER_TO_HIGHER = {
         "#3a2566", "#6a54a0", "#a597c9", "#e6e4dc", "#cdbf6e", "#8f7f22", "#544503"};
     private static final String[] OFTEN_TO_SELDOM = {
@@ -89,6 +91,12 @@ public final class LayerStyles {
     /** Year in which a winter ends, for a record from the first to the last year. */
     public static LayerStyle.Ramp year(int first, int last) {
         return wholeNumbers("year", "Winter, by the year in which it ends", first, last, OLD_TO_RECENT);
+    }
+
+    /** Margin gained in K, from nothing upwards: by a hardier variant or a milder site. */
+    public static LayerStyle.Ramp gain() {
+        return ramp("gain", "Margin gained (K)", new double[] {0, 0.5, 1, 2, 3, 4, 6}, NOTHING_TO_MUCH,
+                v -> v == Math.rint(v) ? whole(v) + " K" : v + " K");
     }
 
     /** Number of winters or nights, for up to some thirty. */
@@ -259,7 +267,7 @@ public final class LayerStyles {
 
     /** One style of each kind, in a fixed order; styles made to measure stand here in their usual size. */
     public static List<LayerStyle> all() {
-        return List.of(margin(), requiredHardiness(), probability(), damage(), share(), temperature(), night(), year(),
+        return List.of(margin(), requiredHardiness(), probability(), damage(), share(), gain(), temperature(), night(), year(),
                 count(), returnPeriod(), elevation(), heightChange(), trend(), shape(), spread(), fitCorrelation(), fitFlag(), trendSignificance(), marginChange(),
                 shareChange(), rangeChange(), frequencySignificance(), changeSignal(),
                 temperatureChange(), lapseRate(), lapseRateSpread(), coldAir(),

@@ -42,8 +42,15 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
      * @param margin lowest margin, K; NaN where the winter does not count
      * @param damage fraction of buds killed
      * @param worstNight date of the earliest night of the lowest margin; null where the winter does not count
+     * @param further what the run keeps of the damage besides
      */
-    public record Winter(String label, boolean valid, float margin, float damage, String worstNight, List<Night> nights) {
+    public record Winter(String label, boolean valid, float margin, float damage, String worstNight, List<Night> nights,
+                         WinterDamage further) {
+
+        /** A winter of which nothing is kept besides. */
+        public Winter(String label, boolean valid, float margin, float damage, String worstNight, List<Night> nights) {
+            this(label, valid, margin, damage, worstNight, nights, WinterDamage.none());
+        }
     }
 
     /**
@@ -206,7 +213,8 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             courses.get(c).add(new Winter(season.label(), valid, values.margin(c, 0)[0], values.damage(c)[0],
                     valid ? season.date((int) worst).toString() : null,
                     curves[c] == null ? nights(season, plan, plan.cultivars().get(c), stateCourses.get(c), temperatures)
-                            : nights(season, plan, plan.cultivars().get(c), curves[c], temperatures)));
+                            : nights(season, plan, plan.cultivars().get(c), curves[c], temperatures),
+                    WinterDamage.of(values, c, plan.job().reckoning())));
         }
         return values;
     }

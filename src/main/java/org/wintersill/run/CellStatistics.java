@@ -60,14 +60,14 @@ public record CellStatistics(int winters, double interval, List<Value> shared, O
     public static CellStatistics of(RunPlan plan, CellExplanation cell) {
         long number = (long) plan.target().rowAt(cell.y()) * plan.target().columns() + plan.target().columnAt(cell.x());
         WinterPlanes planes = (plane, season, row, count) -> cell.values().get(season).plane(plane);
-        WinterRecord all = SummaryPass.record(plan, planes, Optional.empty(), 0, 1, number);
+        WinterRecord all = StoredWinters.record(plan, planes, Optional.empty(), 0, 1, number);
         double[] room = new double[all.winters()];
         int n = WinterRecord.valid(all.minimum(), 0, room);
         Optional<Fit> minimum = fit(plan, room, n);
         List<CultivarStatistics> cultivars = new ArrayList<>();
         for (CellExplanation.CultivarCourse course : cell.cultivars()) {
             int position = plan.cultivars().indexOf(course.cultivar());
-            WinterRecord record = SummaryPass.record(plan, planes, Optional.of(position), 0, 1, number);
+            WinterRecord record = StoredWinters.record(plan, planes, Optional.of(position), 0, 1, number);
             double[] margins = new double[record.winters()];
             int count = WinterRecord.valid(record.margins(0), 0, margins);
             cultivars.add(new CultivarStatistics(course.cultivar(), values(ClimatologyStatistics.ofCultivar(plan.choices()), record),

@@ -1,6 +1,7 @@
 package org.wintersill.run;
 
 import org.wintersill.climatology.statistic.ClimatologyStatistics;
+import org.wintersill.climatology.statistic.Population;
 import org.wintersill.config.LimitConfig;
 import org.wintersill.config.OutputConfig;
 import org.wintersill.engine.FoldJob;
@@ -46,7 +47,8 @@ final class Estimates {
     /** Strips of tile rows of all layers of one cultivar. */
     static long writerBytes(GridGeometry target, ClimatologyStatistics.Choices choices, OutputConfig outputs) {
         LayerSelection selection = new LayerSelection(outputs.layers());
-        int layers = Math.max(selection.made(ClimatologyStatistics.ofCultivar(choices)).size(),
+        int ofPopulation = ClimatologyStatistics.ofPopulation(choices, new Population(1, new double[0])).size();
+        int layers = Math.max(selection.made(ClimatologyStatistics.ofCultivar(choices)).size() + ofPopulation,
                 selection.made(ClimatologyStatistics.shared(choices)).size());
         return (long) ((double) target.columns() * TILE_ROWS * 4 * layers * PYRAMID);
     }

@@ -6,6 +6,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import org.wintersill.climatology.statistic.PhaseShare;
 import org.wintersill.io.json.CsvText;
 import org.wintersill.io.json.JsonText;
 import org.wintersill.run.CellExplanation.CultivarCourse;
@@ -44,6 +45,10 @@ public final class ExplanationText {
         entry.put("margin", JsonText.number(winter.margin()));
         entry.put("damage", JsonText.number(winter.damage()));
         entry.put("worst-night", winter.worstNight());
+        winter.further().expected().ifPresent(expected -> entry.put("expected-damage", JsonText.number(expected)));
+        for (int phase = 0; phase < winter.further().shares().length; phase++) {
+            entry.put(PhaseShare.IDS.get(phase), JsonText.number(winter.further().shares()[phase]));
+        }
         entry.put("nights", winter.nights().stream().map(ExplanationText::night).toList());
         return entry;
     }

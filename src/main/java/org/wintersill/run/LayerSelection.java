@@ -8,6 +8,7 @@ import java.util.TreeSet;
 import org.wintersill.climatology.ClimatologyStatistic;
 import org.wintersill.climatology.LayerGroup;
 import org.wintersill.climatology.statistic.ClimatologyStatistics;
+import org.wintersill.climatology.statistic.Population;
 import org.wintersill.problem.NearestName;
 import org.wintersill.problem.Problem;
 import org.wintersill.problem.Problems;
@@ -27,6 +28,11 @@ final class LayerSelection {
     boolean contains(String id) {
         return wanted.isEmpty() || wanted.get().contains(id) || wanted.get().contains(ALL)
                 || wanted.get().contains(LayerGroup.DEFAULT.word());
+    }
+
+    /** Whether a layer is asked for by its own name, or with all there are. */
+    boolean names(String id) {
+        return wanted.isPresent() && (wanted.get().contains(id) || wanted.get().contains(ALL));
     }
 
     boolean contains(ClimatologyStatistic statistic) {
@@ -78,6 +84,7 @@ final class LayerSelection {
     private static Set<String> known(ClimatologyStatistics.Choices choices) {
         List<ClimatologyStatistic> statistics = new ArrayList<>(ClimatologyStatistics.ofCultivar(choices));
         statistics.addAll(ClimatologyStatistics.shared(choices));
+        statistics.addAll(ClimatologyStatistics.ofPopulation(choices, new Population(1, new double[0])));
         Set<String> ids = new TreeSet<>();
         statistics.forEach(statistic -> ids.add(statistic.layer().id()));
         for (LayerGroup group : LayerGroup.values()) {
@@ -85,7 +92,7 @@ final class LayerSelection {
         }
         ids.add(ALL);
         ids.addAll(WinterLayers.ids());
-        ids.addAll(List.of(SharedLayers.CHOICE, SharedLayers.ELEVATION, SharedLayers.HEIGHT_CHANGE));
+        ids.addAll(List.of(SharedLayers.CHOICE, SharedLayers.ELEVATION, SharedLayers.HEIGHT_CHANGE, MilderSite.ID));
         ids.addAll(AdjustmentLayers.ids());
         return ids;
     }

@@ -90,10 +90,16 @@ public final class MapRun {
             });
             String digest = Digests.ofText(JsonText.of(RecordedConfiguration.of(plan.config().effective())));
             LayerOutput output = new LayerOutput(folder, format, plan.target(), plan.seasons(), digest, workers.executor());
-            new AdjustmentLayers(plan, means, output, new LayerSelection(plan.config().outputs().layers())).write(notices);
-            SummaryPass summaries = new SummaryPass(plan, store, output, new LayerSelection(plan.config().outputs().layers()),
-                    workers, progress);
+            LayerSelection selection = new LayerSelection(plan.config().outputs().layers());
+            new AdjustmentLayers(plan, means, output, selection).write(notices);
+            SummaryPass summaries = new SummaryPass(plan, store, output, selection, workers, progress);
             writeLayers(summaries, cultivars);
+            new SharedVariance(plan, store, output, selection, workers).write();
+            for (int c = 0; c < cultivars; c++) {
+                if (MilderSite.wanted(plan, selection, c)) {
+                    new MilderSite(plan, store, output, workers).write(c, summaries.meanPlane(c));
+                }
+            }
             List<ClassAreas> areas = tables(folder, output, summaries, record, workers);
             if (plan.config().outputs().netcdf()) {
                 new NetcdfOutput(plan, store, folder, systems, output.period()).write();

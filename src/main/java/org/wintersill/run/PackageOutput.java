@@ -91,7 +91,7 @@ final class PackageOutput {
         String table = name.length() <= LONGEST_TABLE_NAME ? name : "cells_" + (number + 1);
         CellLayer layer = new CellLayer(writer, table, srs,
                 "Cells of " + cultivar.id() + ", winters " + period, "Summaries of every cell for " + cultivar.name() + ", curve "
-                        + cultivar.status().word() + ". " + Caution.SHORT, plan.target(), summaries.cultivarLayers());
+                        + cultivar.status().word() + ". " + Caution.SHORT, plan.target(), summaries.cultivarLayers(number));
         summaries.eachRow(number, layer::addRows);
         writer.style(table, "margin-low", QmlWriter.graduatedPoints(LayerStyles.margin(), "margin_low"),
                 SldWriter.graduatedPoints(LayerStyles.margin(), "margin_low"), "Margin, one winter in ten");

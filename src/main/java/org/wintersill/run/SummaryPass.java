@@ -10,16 +10,15 @@ import org.wintersill.climatology.extreme.FalseDiscovery;
 import org.wintersill.climatology.statistic.ClimatologyStatistics;
 import org.wintersill.climatology.statistic.DamageProbability;
 import org.wintersill.climatology.statistic.MarginLow;
+import org.wintersill.climatology.statistic.MarginMean;
 import org.wintersill.climatology.statistic.Suitability;
 import org.wintersill.climatology.statistic.TrendSignificance;
 import org.wintersill.engine.Progress;
-import org.wintersill.engine.WinterPlanes;
 import org.wintersill.engine.WinterStore;
 import org.wintersill.engine.Workers;
 import org.wintersill.layer.LayerDefinition;
 import org.wintersill.layer.RasterHeader;
 import org.wintersill.layer.RasterWriter;
-import org.wintersill.season.DamageReckoning;
 import org.wintersill.season.WinterValues;
 
 /**
@@ -39,7 +38,8 @@ final class SummaryPass {
     private final int rows;
     private final int columns;
     private final int levels;
-    private final List<ClimatologyStatistic> ofCultivar;
+    /** By cultivar. */
+    private final List<List<ClimatologyStatistic>> ofCultivar;
     private final List<ClimatologyStatistic> ofAll;
     /** {@code [cultivar][cell]}: 1 to 4, 0 for missing. */
     private final byte[][] classes;
@@ -54,7 +54,11 @@ final class SummaryPass {
         rows = plan.target().rows();
         columns = plan.target().columns();
         levels = plan.job().levels();
-        ofCultivar = selection.made(ClimatologyStatistics.ofCultivar(plan.choices()));
+        ofCultivar = plan.cultivars().stream().map(cultivar -> {
+            List<ClimatologyStatistic> statistics = new ArrayList<>(ClimatologyStatistics.ofCultivar(plan.choices()));
+            statistics.addAll(Populations.statistics(plan.choices(), cultivar));
+            return selection.made(statistics);
+        }).toList();
         ofAll = selection.made(ClimatologyStatistics.shared(plan.choices()));
         classes = new byte[plan.cultivars().size()][rows * columns];
     }
@@ -74,7 +78,7 @@ final class SummaryPass {
 
     /** Writes the summary layers of a cultivar. */
     void cultivar(int cultivar) {
-        write(ofCultivar, Optional.of(cultivar));
+        write(ofCultivar.get(cultivar), Optional.of(cultivar));
     }
 
     /** Writes the summary layers that belong to no cultivar. */
@@ -108,6 +112,12 @@ final class SummaryPass {
         }
         statistics.stream().filter(selection::contains).filter(TrendSignificance.class::isInstance)
                 .forEach(statistic -> significance((TrendSignificance) statistic, cultivar));
+    }
+
+    /** Extra plane of a cultivar's mean margins, after those of the trends. */
+    int meanPlane(int cultivar) {
+        int cultivars = plan.cultivars().size();
+        return extraPlanes(cultivars) + cultivars + 1 + cultivar;
     }
 
     private int trendPlane(Optional<Integer> cultivar) {
@@ -178,6 +188,8 @@ final class SummaryPass {
             for (int i = 0; i < values.length; i++) {
                 classes[cultivar][row * columns + i] = (byte) (values[i] == values[i] ? values[i] : 0);
             }
+        } else if (statistic instanceof MarginMean && MilderSite.wanted(plan, selection, cultivar)) {
+            store.writeExtra(meanPlane(cultivar), row, values);
         } else if (statistic instanceof MarginLow) {
             store.writeExtra(2 * cultivar + 1, row, values);
         } else if (statistic instanceof DamageProbability probability
@@ -187,60 +199,7 @@ final class SummaryPass {
     }
 
     private WinterRecord record(Optional<Integer> cultivar, int row, int count) {
-        return record(plan, store, cultivar, row, count, (long) row * columns);
-    }
-
-    /**
-     * The winters of some rows.
-     *
-     * @param planes where they lie
-     * @param cultivar empty for what belongs to no cultivar
-     * @param firstCell number of the first cell in the grid
-     */
-    static WinterRecord record(RunPlan plan, WinterPlanes planes, Optional<Integer> cultivar, int row, int count, long firstCell) {
-        int winters = plan.seasons().size();
-        int levels = plan.job().levels();
-        float[][] minimum = new float[winters][];
-        float[][][] margins = new float[cultivar.isPresent() ? levels : 0][winters][];
-        float[][] damage = new float[cultivar.isPresent() ? winters : 0][];
-        for (int winter = 0; winter < winters; winter++) {
-            if (cultivar.isEmpty()) {
-                minimum[winter] = planes.read(WinterValues.minimumPlane(), winter, row, count);
-                continue;
-            }
-            for (int level = 0; level < levels; level++) {
-                margins[level][winter] = planes.read(WinterValues.marginPlane(cultivar.get(), level, levels), winter, row, count);
-            }
-            damage[winter] = planes.read(WinterValues.damagePlane(cultivar.get(), levels), winter, row, count);
-        }
-        return new WinterRecord(plan.choices().years(), cultivar.isPresent() ? new float[0][] : minimum, margins, damage,
-                (cultivar.isPresent() ? damage : minimum)[0].length, firstCell,
-                cultivar.map(number -> plan.cultivars().get(number).tolerance()), details(plan, planes, cultivar, row, count));
-    }
-
-    private static WinterRecord.Details details(RunPlan plan, WinterPlanes planes, Optional<Integer> cultivar, int row, int count) {
-        DamageReckoning reckoning = plan.job().reckoning();
-        int levels = plan.job().levels();
-        int winters = plan.seasons().size();
-        int cultivars = plan.cultivars().size();
-        float[][] expected = new float[cultivar.isPresent() && reckoning.keepsExpected() ? winters : 0][];
-        float[][][] damageAt = new float[cultivar.isPresent() && reckoning.phases() ? 2 : 0][winters][];
-        for (int winter = 0; winter < expected.length; winter++) {
-            expected[winter] = planes.read(WinterValues.expectedDamagePlane(cultivar.get(), cultivars, levels, reckoning), winter, row, count);
-        }
-        for (int end = 0; end < damageAt.length; end++) {
-            int plane = WinterValues.damageAtPlane(cultivar.get(), end, cultivars, levels, reckoning);
-            for (int winter = 0; winter < winters; winter++) {
-                damageAt[end][winter] = planes.read(plane, winter, row, count);
-            }
-        }
-        float[][][] cold = new float[cultivar.isEmpty() && reckoning.coldNight().isPresent() ? 2 : 0][winters][];
-        for (int part = 0; part < cold.length; part++) {
-            for (int winter = 0; winter < winters; winter++) {
-                cold[part][winter] = planes.read(WinterValues.coldNightsPlane(cultivars, levels, reckoning) + part, winter, row, count);
-            }
-        }
-        return new WinterRecord.Details(reckoning, plan.choices().levels(), expected, damageAt, cold);
+        return StoredWinters.record(plan, store, cultivar, row, count, (long) row * columns);
     }
 
     /** Takes full-width rows of all summary layers of a cultivar. */
@@ -250,13 +209,13 @@ final class SummaryPass {
     }
 
     /** The summary layers of a cultivar, in the order of {@link #eachRow}. */
-    List<LayerDefinition> cultivarLayers() {
-        return ofCultivar.stream().map(ClimatologyStatistic::layer).toList();
+    List<LayerDefinition> cultivarLayers(int cultivar) {
+        return ofCultivar.get(cultivar).stream().map(ClimatologyStatistic::layer).toList();
     }
 
     /** Gives the summaries of a cultivar once more, from the north, a few rows at a time. */
     void eachRow(int cultivar, RowTaker taker) {
-        List<ClimatologyStatistic> statistics = ofCultivar;
+        List<ClimatologyStatistic> statistics = ofCultivar.get(cultivar);
         for (int row = 0; row < rows; row += TASK_ROWS) {
             int count = Math.min(TASK_ROWS, rows - row);
             WinterRecord record = record(Optional.of(cultivar), row, count);
@@ -390,7 +349,7 @@ final class SummaryPass {
 
     /** Size of the whole pass in the unit of its progress. */
     long size(boolean winterLayers) {
-        long layers = (long) ofCultivar.size() * plan.cultivars().size() + ofAll.size() + 4;
+        long layers = ofCultivar.stream().mapToLong(List::size).sum() + ofAll.size() + 4;
         long winters = winterLayers ? plan.seasons().size() * (1L + 3L * plan.cultivars().size() + (plan.job().reckoning().coldNight().isPresent() ? 2 : 0)) : 0;
         return rows * (layers + winters);
     }

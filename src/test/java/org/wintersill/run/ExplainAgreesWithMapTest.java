@@ -151,7 +151,8 @@ class ExplainAgreesWithMapTest {
             assertKeys(cultivar, "id", "winters");
             assertEquals(1, cultivar.get("winters").size());
             JsonNode winter = cultivar.get("winters").get(0);
-            assertKeys(winter, "winter", "valid", "margin", "damage", "worst-night", "nights");
+            assertKeys(winter, "winter", "valid", "margin", "damage", "worst-night", "autumn-share", "midwinter-share",
+                    "spring-share", "nights");
             assertEquals(273, winter.get("nights").size());
             winter.get("nights").forEach(night ->
                     assertKeys(night, "date", "source", "tmin", "tmean", "phase", "lt10", "lt50", "lt90", "margin", "damage"));

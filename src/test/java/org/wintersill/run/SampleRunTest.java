@@ -50,7 +50,8 @@ class SampleRunTest {
                     "winters/worst-night").forEach(layer -> add(expected, cultivar + "/" + layer));
             expected.add(cultivar + "/suitability.tif.aux.xml");
         }
-        List.of("choice", "elevation", "height-change", "mean-minimum", "valid-winters", "winters/minimum")
+        List.of("choice", "elevation", "height-change", "mean-minimum", "valid-winters", "variance-winter", "variance-cultivar",
+                "variance-interaction", "winters/minimum")
                 .forEach(layer -> add(expected, "shared/" + layer));
         assertEquals(expected, new TreeSet<>(RunFolder.files(OUT).keySet()));
         assertFalse(Files.exists(OUT.resolve(".unfinished")));

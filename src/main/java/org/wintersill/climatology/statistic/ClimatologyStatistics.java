@@ -6,6 +6,7 @@ import java.util.Locale;
 import org.wintersill.climatology.ClimatologyStatistic;
 import org.wintersill.climatology.FrequencyBounds;
 import org.wintersill.climatology.FrequencyInterval;
+import org.wintersill.damage.Uncertainty;
 import org.wintersill.season.DamageReckoning;
 
 /** The list of summary layers, in the order in which they are written and documented. */
@@ -74,6 +75,21 @@ public final class ClimatologyStatistics {
             list.add(new PhaseShare(phase));
         }
         list.addAll(new RequestedStatistics(choices).ofCultivar());
+        return list;
+    }
+
+    /**
+     * Further layers of a cultivar that stands for a population. The share of it that is killed is that of the worst night, and not made
+     * where nights are joined otherwise.
+     */
+    public static List<ClimatologyStatistic> ofPopulation(Choices choices, Population population) {
+        List<ClimatologyStatistic> list = new ArrayList<>();
+        Uncertainty uncertainty = choices.reckoning().uncertainty();
+        for (int level = 0; choices.reckoning().nights().isWorst() && level < choices.levels().length; level++) {
+            list.add(new PopulationDamageProbability(choices.levels()[level], level, population, uncertainty.sd()));
+        }
+        list.addAll(VarianceShare.all(uncertainty.components(), population.sd()));
+        list.add(new HardierGain(population));
         return list;
     }
 
