@@ -150,11 +150,11 @@ public final class ComparisonRun {
             if (others.size() > 1) {
                 new EnsemblePass(this, output).write(progress, workers);
             }
-            LimitLines.write(this, folder.unfinished("changes.gpkg"), output.lastChange());
+            Map<String, Object> record = record();
+            LimitLines.write(this, folder.unfinished("changes.gpkg"), output.lastChange(), JsonText.of(record));
             ComparisonTables tables = new ComparisonTables(this, rows, operations);
             LayerOutput.write(folder.unfinished("changes.csv"), tables.csv());
             LayerOutput.write(folder.unfinished("changes.json"), JsonText.of(tables.document()));
-            Map<String, Object> record = record();
             RunRecord.complete(record, folder, new org.wintersill.problem.Notices(), workers);
             LayerOutput.write(folder.unfinished(OutputFolder.RECORD), JsonText.of(record));
             int files = folder.names().size() + 1;

@@ -30,7 +30,7 @@ final class LimitLines {
         this.table = table;
     }
 
-    static void write(ComparisonRun run, Path file, String lastChange) {
+    static void write(ComparisonRun run, Path file, String lastChange, String record) {
         GridGeometry grid = run.base().grid();
         try (GeoPackageWriter writer = GeoPackageWriter.create(file, lastChange)) {
             int srs = writer.addCrs(CrsRow.of(grid.crs(), CrsDefinitions.wkt2(grid.crs()), CrsRow.FIRST_OWN_ID));
@@ -50,6 +50,7 @@ final class LimitLines {
             }
             writer.style(TABLE, "limit-lines", QmlWriter.lines(LayerStyles.limitLines(), "side"),
                     SldWriter.lines(LayerStyles.limitLines(), "side"), "Limit of the range");
+            writer.metadata(PackageOutput.VOCABULARY, record);
             writer.finish();
         }
     }

@@ -17,7 +17,7 @@ import org.wintersill.layer.LayerStyles;
 
 /** {@code layers.gpkg}: suitability polygons of every cultivar with their areas, styles and the record. */
 final class PackageOutput {
-    private static final String VOCABULARY = "https://www.iana.org/assignments/media-types/application/json";
+    static final String VOCABULARY = "https://www.iana.org/assignments/media-types/application/json";
 
     private static final int LONGEST_TABLE_NAME = 30;
 
