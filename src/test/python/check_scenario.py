@@ -146,6 +146,7 @@ def main(jar, folder):
                 day = base_days[k]
                 want = mapped(method, base[k], o[members(days["observed"], pool, day)], p[members(days["past"], pool, day)],
                               f[members(days["future"], pool, day)])
+                worst = max(worst, abs(night["source"] - base[k]) - 1e-6)
                 worst, count = max(worst, abs(night["tmin"] - want) - abs(np.spacing(np.float32(want)))), count + 1
         # Regridded values are floats in the program too, but their last digit may differ from numpy's, and where samples are thin
         # the mapping is steep.

@@ -4,12 +4,14 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
+import org.wintersill.grid.Block;
 import org.wintersill.grid.CoordinateOperations;
 import org.wintersill.hardiness.CalendarModel;
 import org.wintersill.hardiness.Cultivar;
 import org.wintersill.hardiness.LethalTemperatures;
 import org.wintersill.problem.NearestName;
 import org.wintersill.problem.Problem;
+import org.wintersill.scenario.ScenarioSource;
 import org.wintersill.season.CompletenessTally;
 import org.wintersill.season.NightCurve;
 import org.wintersill.season.Phases;
@@ -71,7 +73,8 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
     /**
      * How a night's temperature came about; NaN for missing.
      *
-     * @param source value of the source cell, degC
+     * @param source value of the source cell, degC; in a scenario the model's own future there, or the observed value
+     * @param mapped what the scenario makes of it; NaN in runs without one
      * @param interpolated value between source cells, degC
      * @param lapseRate K/km of the night at the cell
      * @param height change by height, K; the others add up with it to {@code tmin - interpolated}
@@ -81,14 +84,19 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
      * @param tmin value at the cell, degC
      * @param isByHeightAlone whether the run adjusts by height alone, with lapse rates of the month
      */
-    public record Steps(float source, float interpolated, float lapseRate, float height, float pool, float water, float offset,
+    public record Steps(float source, float mapped, float interpolated, float lapseRate, float height, float pool, float water, float offset,
                         float tmin, boolean isByHeightAlone) {
         static final Steps MISSING = new Steps(Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN, Float.NaN,
-                true);
+                Float.NaN, true);
 
         /** The temperature of a place itself, which nothing is done to. */
         public static Steps unadjusted(float tmin) {
-            return new Steps(tmin, tmin, 0, 0, 0, 0, 0, tmin, true);
+            return new Steps(tmin, Float.NaN, tmin, 0, 0, 0, 0, 0, tmin, true);
+        }
+
+        /** The same night of a scenario, whose source cell has the given value before the scenario. */
+        Steps from(float before) {
+            return new Steps(before, source, interpolated, lapseRate, height, pool, water, offset, tmin, isByHeightAlone);
         }
     }
 
@@ -174,6 +182,7 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
         Steps[] nights = missing(season.days());
         CompletenessTally tally = new CompletenessTally(season, plan.job().policy(), reader.cells());
         DayAxis axis = plan.job().source().days();
+        float[] before = beforeScenario(plan, row, column);
         for (int night = 0; night < nights.length; night++) {
             int position = axis.indexOf(season.firstDay() + night);
             if (position < 0) {
@@ -182,10 +191,26 @@ public record CellExplanation(double x, double y, String crs, float elevation, f
             }
             reader.read(position, season.date(night));
             tally.accept(night, reader.minima(), 0, 0, reader.cells());
-            nights[night] = reader.at(row, column);
+            Steps steps = reader.at(row, column);
+            nights[night] = before.length == 0 ? steps : steps.from(before[position]);
         }
         int containing = plan.adjustment().positions().containing(row, column);
         return new Temperatures(tally.isComplete(reader.cell(containing)), nights);
+    }
+
+    /** Values of the source cell before the scenario, by position on the day axis; none in runs without one. */
+    private static float[] beforeScenario(RunPlan plan, int row, int column) {
+        int containing = plan.adjustment().positions().containing(row, column);
+        if (!(plan.source() instanceof ScenarioSource scenario) || containing < 0) {
+            return new float[0];
+        }
+        Block window = plan.job().window();
+        float[][] days = scenario.before(window.row() + containing / window.columns());
+        float[] before = new float[days.length];
+        for (int day = 0; day < days.length; day++) {
+            before[day] = days[day][window.column() + containing % window.columns()];
+        }
+        return before;
     }
 
     private static Steps[] missing(int count) {

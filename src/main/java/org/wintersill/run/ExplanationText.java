@@ -57,6 +57,9 @@ public final class ExplanationText {
         Map<String, Object> entry = new LinkedHashMap<>();
         entry.put("date", night.date());
         entry.put("source", JsonText.number(night.steps().source()));
+        if (!Float.isNaN(night.steps().mapped())) {
+            entry.put("mapped", JsonText.number(night.steps().mapped()));
+        }
         entry.put("tmin", JsonText.number(night.tmin()));
         entry.put("tmean", JsonText.number(night.tmean()));
         entry.put("phase", night.phase());
@@ -84,14 +87,14 @@ public final class ExplanationText {
 
     /** One row a night and cultivar. */
     public static String csv(CellExplanation cell) {
-        CsvText csv = new CsvText("cultivar", "winter", "date", "source_degc", "interpolated_degc", "lapse_rate_k_per_km",
+        CsvText csv = new CsvText("cultivar", "winter", "date", "source_degc", "mapped_degc", "interpolated_degc", "lapse_rate_k_per_km",
                 "height_change_m", "height_k", "pool_k", "water_k", "offset_k", "tmin_degc", "tmean_degc", "phase", "lt10_degc", "lt50_degc",
                 "lt90_degc", "margin_k", "damage");
         for (CultivarCourse course : cell.cultivars()) {
             for (Winter winter : course.winters()) {
                 for (Night night : winter.nights()) {
                     Steps steps = night.steps();
-                    csv.row(course.cultivar().id(), winter.label(), night.date(), steps.source(), steps.interpolated(), steps.lapseRate(),
+                    csv.row(course.cultivar().id(), winter.label(), night.date(), steps.source(), steps.mapped(), steps.interpolated(), steps.lapseRate(),
                             cell.heightChange(), steps.height(), steps.pool(), steps.water(), steps.offset(), night.tmin(), night.tmean(),
                             night.phase(), night.lt10(), night.lt50(), night.lt90(), night.margin(), night.damage());
                 }
@@ -134,15 +137,16 @@ public final class ExplanationText {
         boolean water = nights.stream().anyMatch(night -> night.steps().water() != 0);
         boolean offset = nights.stream().anyMatch(night -> night.steps().offset() != 0);
         boolean rates = nights.stream().map(night -> night.steps().lapseRate()).distinct().count() > 1;
+        boolean mapped = nights.stream().anyMatch(night -> !Float.isNaN(night.steps().mapped()));
         line(text, "  nights of the lowest margins:");
         boolean means = winter.nights().stream().anyMatch(night -> !Float.isNaN(night.tmean()));
-        line(text, "  date        source  interpolated%s  + height%s%s%s    = Tmin %s    LT10     LT50     LT90  margin K  damage%s",
-                rates ? "  K/km" : "", pools ? "  + pool" : "", water ? "  + water" : "", offset ? "  + offset" : "",
+        line(text, "  date        source%s  interpolated%s  + height%s%s%s    = Tmin %s    LT10     LT50     LT90  margin K  damage%s",
+                mapped ? "   mapped" : "", rates ? "  K/km" : "", pools ? "  + pool" : "", water ? "  + water" : "", offset ? "  + offset" : "",
                 means ? "   Tmean " : "", means ? "  phase" : "");
         for (Night night : nights) {
             Steps steps = night.steps();
-            line(text, "  %s %8.2f %13.2f%s %9.2f%s%s%s %9.2f %s%8.2f %8.2f %8.2f %+9.2f %7.3f%s", night.date(), steps.source(),
-                    steps.interpolated(), rates ? format(" %5.2f", steps.lapseRate()) : "", steps.height(),
+            line(text, "  %s %8.2f%s %13.2f%s %9.2f%s%s%s %9.2f %s%8.2f %8.2f %8.2f %+9.2f %7.3f%s", night.date(), steps.source(),
+                    mapped ? format(" %8.2f", steps.mapped()) : "", steps.interpolated(), rates ? format(" %5.2f", steps.lapseRate()) : "", steps.height(),
                     pools ? format(" %7.2f", steps.pool()) : "", water ? format(" %8.2f", steps.water()) : "",
                     offset ? format(" %9.2f", steps.offset()) : "", night.tmin(), means ? format("%8.2f ", night.tmean()) : "", night.lt10(),
                     night.lt50(), night.lt90(), night.margin(), night.damage(), means && night.phase() != null ? "  " + night.phase() : "");

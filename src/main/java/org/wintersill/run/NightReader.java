@@ -102,8 +102,8 @@ final class NightReader implements AutoCloseable {
         float pool = adjuster.poolChange(shift, fields, row, column);
         float water = adjuster.waterChange(fields, row, column);
         float offset = (float) adjustment.terms().offset();
-        return new CellExplanation.Steps(source, interpolated, adjuster.lapse(shift, fields, row, column), tmin - interpolated - pool - water - offset, pool,
-                water, offset, tmin, adjustment.isPlain());
+        return new CellExplanation.Steps(source, Float.NaN, interpolated, adjuster.lapse(shift, fields, row, column),
+                tmin - interpolated - pool - water - offset, pool, water, offset, tmin, adjustment.isPlain());
     }
 
     /** Minimum of the air on the night last read, degC; positive infinity for missing. */
