@@ -85,7 +85,7 @@ public final class ConfigReader {
                 .map(value -> OutputSections.cultivars(value, checks, finder, tree("cultivars")))
                 .orElse(new CultivarConfig(List.of(), List.of()));
         DamageConfig damage = DamageSection.read(section(top, "damage"), tree("damage"));
-        StatisticsConfig statistics = StatisticsSection.read(section(top, "statistics"), tree("statistics"));
+        StatisticsConfig statistics = StatisticsSection.read(section(top, "statistics"), damage.levels(), tree("statistics"));
         List<Double> classes = ChoiceSections.classes(top);
         effective.put("classes", classes);
         Optional<AreaConfig> area = top.section("area").flatMap(section -> AreaSection.read(section, finder, tree("area")));

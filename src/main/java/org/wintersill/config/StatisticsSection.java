@@ -19,7 +19,8 @@ final class StatisticsSection {
     private StatisticsSection() {
     }
 
-    static StatisticsConfig read(YamlSection section, Map<String, Object> tree) {
+    /** @param levels percents of organs killed that the run keeps margins for */
+    static StatisticsConfig read(YamlSection section, List<Integer> levels, Map<String, Object> tree) {
         double interval = section.number("interval", 0.5, 0.999, "from 0.5 to 0.999, such as 0.90").orElse(0.90);
         String bounds = section.word("bounds", List.of("jeffreys", "wilson"), List.of()).orElse("jeffreys");
         List<Double> targets = list(section, "target", (value, key) -> section.checks().number(value, key, 0, 0.999,
@@ -27,6 +28,10 @@ final class StatisticsSection {
         String rule = section.word("rule", List.of("frequency", "quantile", "expected-damage"), List.of()).orElse("frequency");
         if (rule.equals("expected-damage") && targets.contains(0.0)) {
             section.problem("target", "an expected damage of 0 needs endless hardiness", "Give a share above 0, or another rule");
+        }
+        if (rule.equals("expected-damage") && levels.stream().noneMatch(level -> level != 50)) {
+            section.problem("rule", "the spread of the tolerance curve is needed for an expected damage, and damage.levels has 50 alone",
+                    "Add a level to damage.levels, such as 10 or 90, or choose another rule");
         }
         String extremes = section.word("extremes", List.of("auto", "none", "l-moments", "maximum-likelihood"), List.of()).orElse("auto");
         List<Integer> periods = list(section, "return-periods", (value, key) -> section.checks().whole(value, key, 2, LONGEST_PERIOD),

@@ -43,12 +43,17 @@ public record Uncertainty(SortedMap<String, Double> components) implements Seria
 
     /** All components together: root of the sum of squares, K. */
     public double sd() {
-        return Math.sqrt(components.values().stream().mapToDouble(sd -> sd * sd).sum());
+        double squares = 0;
+        for (double sd : components.values()) {
+            squares += sd * sd;
+        }
+        return Math.sqrt(squares);
     }
 
     /** Whether there is none. */
     public boolean isNone() {
-        return sd() == 0;
+        // Asked for every cell of a winter.
+        return components.isEmpty() || sd() == 0;
     }
 
     /**

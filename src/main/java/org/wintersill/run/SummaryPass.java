@@ -179,6 +179,7 @@ final class SummaryPass {
     /** Fits of extremes cost more than all else, so what is neither written nor used later is not worked out. */
     private boolean isNeeded(ClimatologyStatistic statistic) {
         return selection.contains(statistic) || statistic instanceof Suitability || statistic instanceof MarginLow
+                || statistic instanceof MarginMean
                 || statistic instanceof DamageProbability probability && probability.isFrequencyOf(plan.choices().killingLevel());
     }
 

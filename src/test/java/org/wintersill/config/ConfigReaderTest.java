@@ -267,6 +267,13 @@ class ConfigReaderTest {
         assertTrue(refused.getMessage().contains(words), refused.getMessage());
     }
 
+    @Test
+    void anExpectedDamageNeedsASpread() throws Exception {
+        ProblemException refused = refused(SMALL + "statistics: {rule: expected-damage}\ndamage: {levels: [50]}\n");
+        assertEquals(1, refused.problems().size(), refused.getMessage());
+        assertTrue(refused.getMessage().contains("damage.levels has 50 alone"), refused.getMessage());
+    }
+
     @ParameterizedTest
     @CsvSource(delimiter = '|', value = {
         "{minimum: tmin-1*.nc}                              | no file matches 'tmin-1*.nc'",

@@ -5,7 +5,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import java.util.TreeSet;
 import org.wintersill.problem.NearestName;
 import org.wintersill.time.MonthDay;
 
@@ -18,7 +17,6 @@ public final class YamlSection {
     private final String path;
     private final YamlChecks checks;
     private final Set<String> known = new LinkedHashSet<>();
-    private final Set<String> later = new TreeSet<>();
 
     /** @param path dotted keys that lead here; empty at the top */
     public YamlSection(YamlValue.Mapping mapping, String path, YamlChecks checks) {
@@ -111,11 +109,6 @@ public final class YamlSection {
         return List.copyOf(mapping.keyPlaces().keySet());
     }
 
-    /** Keys that are kept for a later version: not known yet, but no slip of the finger either. */
-    public void later(String... keys) {
-        later.addAll(List.of(keys));
-    }
-
     /** Reports the keys that nobody asked for. */
     public void finish() {
         finish(Map.of());
@@ -130,10 +123,6 @@ public final class YamlSection {
         for (Map.Entry<String, String> key : mapping.keyPlaces().entrySet()) {
             String name = key.getKey();
             if (known.contains(name)) {
-                continue;
-            }
-            if (later.contains(name)) {
-                checks.problem(key.getValue(), "", "the key " + path(name) + " is not known to this version", "Remove it");
                 continue;
             }
             if (otherNames.containsKey(name)) {
