@@ -9,6 +9,7 @@ import org.wintersill.engine.FoldPlan;
 import org.wintersill.engine.FoldPlanner;
 import org.wintersill.engine.WinterStore;
 import org.wintersill.grid.GridGeometry;
+import org.wintersill.scenario.ScenarioSource;
 
 /**
  * What a run will take. Rates were measured on two cores (see the benchmark results in the repository) and are only good for
@@ -57,7 +58,8 @@ final class Estimates {
         long cells = (long) job.targetRows() * job.targetColumns();
         int winters = job.seasons().size();
         int cultivars = job.cultivars();
-        long working = WinterStore.bytes(job.planes(), winters, 2 * cultivars, cells);
+        long working = WinterStore.bytes(job.planes(), winters, 2 * cultivars, cells)
+                + (job.source() instanceof ScenarioSource scenario ? scenario.diskBytes(job.window()) : 0);
         long summaries = 4 * cells * cultivars * 18L;
         long winterLayers = outputs.winters() ? 4 * cells * winters * (1 + 3L * cultivars) : 0;
         double nights = plan.batches().stream().mapToLong(FoldPlan.Batch::count).sum();

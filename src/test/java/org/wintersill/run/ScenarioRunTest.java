@@ -146,6 +146,17 @@ class ScenarioRunTest {
     }
 
     @Test
+    void thePlanCountsTheDiskOfTheScenario() throws Exception {
+        run(observed, observed, "");
+        long[] bytes = new long[2];
+        for (int i = 0; i < 2; i++) {
+            Program.Ended plan = Program.run("plan", folder.resolve(i == 0 ? "run.yaml" : "scenario.yaml").toString(), "--json").expect(0);
+            bytes[i] = new com.fasterxml.jackson.databind.ObjectMapper().readTree(plan.out()).findValue("working-disk-bytes").longValue();
+        }
+        assertEquals(4L * observed.days().length * 20, bytes[1] - bytes[0]);
+    }
+
+    @Test
     void aModelElsewhereIsRefused() {
         run(observed.at(100, 20, 0.5), observed.at(100, 20, 0.5), "");
         Program.Ended refused = Program.run("map", folder.resolve("scenario.yaml").toString()).expect(3);
