@@ -48,6 +48,22 @@ public final class LapseField {
         present = new boolean[heights.length];
     }
 
+    /** Another for the same rows: what does not change from night to night is shared. */
+    public LapseField another() {
+        return new LapseField(this);
+    }
+
+    private LapseField(LapseField other) {
+        definition = other.definition;
+        rows = other.rows;
+        columns = other.columns;
+        heights = other.heights;
+        rugged = other.rugged;
+        columnSums = new long[SUMS][columns];
+        rates = new long[heights.length];
+        present = new boolean[heights.length];
+    }
+
     /** Whether the heights of the window span enough; of all its cells with a height, whether or not the night has a value there. */
     private boolean isRugged(int row, int column) {
         long low = Long.MAX_VALUE;

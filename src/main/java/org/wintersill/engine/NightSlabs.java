@@ -46,7 +46,7 @@ final class NightSlabs implements AutoCloseable {
         maxima = maximumReader == null ? null : new float[cells];
         rates = job.adjustment().localLapse().isPresent() ? new float[cells] : null;
         weights = job.weighsNights() ? new float[cells] : null;
-        fields = new LapseField[workers.threads()];
+        fields = rates == null || cells == 0 ? new LapseField[0] : fields();
         nights = new NightFields[workers.threads()];
         Arrays.setAll(nights, worker -> new NightFields());
     }
@@ -77,7 +77,7 @@ final class NightSlabs implements AutoCloseable {
             int start = (piece.first() - batch.first() + day) * dayCells();
             CfDate date = date(season, piece.first() + day);
             if (rates != null) {
-                field(worker).compute(minima, start, date.month(), needed[0] - band.sourceRow(), needed[1] - band.sourceRow(), rates);
+                fields[worker].compute(minima, start, date.month(), needed[0] - band.sourceRow(), needed[1] - band.sourceRow(), rates);
             }
             if (weights != null) {
                 weigh(start, date.month(), minima);
@@ -101,14 +101,17 @@ final class NightSlabs implements AutoCloseable {
         return season.date((int) (job.source().days().day(position) - season.firstDay()));
     }
 
-    private LapseField field(int worker) {
-        if (fields[worker] == null) {
-            LocalLapse rows = job.adjustment().localLapse().orElseThrow().rows(band.sourceRow(), band.sourceEnd());
-            int columns = job.window().columns();
-            fields[worker] = new LapseField(rows, columns, Arrays.copyOfRange(job.adjustment().sourceHeights(),
-                    band.sourceRow() * columns, band.sourceEnd() * columns));
+    /** One a worker; the heights of the band's windows are looked through once for all of them. */
+    private LapseField[] fields() {
+        LocalLapse rows = job.adjustment().localLapse().orElseThrow().rows(band.sourceRow(), band.sourceEnd());
+        int columns = job.window().columns();
+        LapseField[] all = new LapseField[workers.threads()];
+        all[0] = new LapseField(rows, columns, Arrays.copyOfRange(job.adjustment().sourceHeights(), band.sourceRow() * columns,
+                band.sourceEnd() * columns));
+        for (int worker = 1; worker < all.length; worker++) {
+            all[worker] = all[0].another();
         }
-        return fields[worker];
+        return all;
     }
 
     private void weigh(int start, int month, float[] minima) {

@@ -225,23 +225,19 @@ public final class ComparisonRun {
                 writers[i] = output.open(owner, changes[i]);
             }
             FrequencyTest test = new FrequencyTest(base.winters().size() + other.folder().winters().size());
-            for (int band = 0; band < 2; band++) {
-                for (int row = 0; row < grid.rows(); row += output.rowsAtOnce()) {
-                    int count = Math.min(output.rowsAtOnce(), grid.rows() - row);
-                    reader.read(new Block(0, row, grid.columns(), count));
-                    required.write(band, row, count, reader.side(band).required());
-                    if (band == 0) {
-                        float[][] differences = {reader.marginChange(), reader.damageChange(), reader.frequencyChange(),
-                            reader.requiredChange()};
-                        for (int i = 0; i < changes.length; i++) {
-                            writers[i].write(0, row, count, differences[i]);
-                            sum(differences[i], row, sums, i);
-                        }
-                        classes.write(0, row, count, classes(reader, row, ranges, classAreas));
-                        reader.signedP(test, signedP, row * grid.columns());
-                        progress.advance(count);
-                    }
+            for (int row = 0; row < grid.rows(); row += output.rowsAtOnce()) {
+                int count = Math.min(output.rowsAtOnce(), grid.rows() - row);
+                reader.read(new Block(0, row, grid.columns(), count));
+                required.write(0, row, count, reader.side(0).required());
+                required.write(1, row, count, reader.side(1).required());
+                float[][] differences = {reader.marginChange(), reader.damageChange(), reader.frequencyChange(), reader.requiredChange()};
+                for (int i = 0; i < changes.length; i++) {
+                    writers[i].write(0, row, count, differences[i]);
+                    sum(differences[i], row, sums, i);
                 }
+                classes.write(0, row, count, classes(reader, row, ranges, classAreas));
+                reader.signedP(test, signedP, row * grid.columns());
+                progress.advance(count);
             }
             required.finish();
             classes.finish();
